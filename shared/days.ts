@@ -18,7 +18,7 @@ export function isDay(text: string): boolean {
 }
 
 /** The shape of a day in contracts and forms. */
-export const Day = z.string('Choose a date').check(z.refine(isDay, 'Type a date such as 2026-05-14'));
+export const DayText = z.string('Choose a date').check(z.refine(isDay, 'Type a date such as 2026-05-14'));
 
 function msOf(day: Day): number {
   if (!isDay(day)) throw new BadValue('Day', day, 'a date such as 2026-05-14 is needed');
