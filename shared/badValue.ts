@@ -12,7 +12,11 @@ export class BadValue extends Error {
 }
 
 /** `value` itself when it is a finite number within the limits; throws `BadValue` otherwise. */
-export function finite(what: string, value: number, limits: { min?: number; max?: number; above?: number } = {}): number {
+export function finite(
+  what: string,
+  value: number,
+  limits: { min?: number; max?: number; above?: number } = {},
+): number {
   const { min = Number.NEGATIVE_INFINITY, max = Number.POSITIVE_INFINITY, above = Number.NEGATIVE_INFINITY } = limits;
   if (!Number.isFinite(value)) throw new BadValue(what, value, 'a number is needed');
   if (value <= above) throw new BadValue(what, value, `must be above ${above}`);

@@ -2,7 +2,7 @@ import * as z from 'zod/mini';
 import { BadValue, finite, whole } from './badValue';
 
 const MS_PER_DAY = 86_400_000;
-const DAYS_PER_MONTH = 365.25 / 12;
+const DAYS_PER_MONTH = 365 / 12;
 const PATTERN = /^(?:19|20|21)\d{2}-\d{2}-\d{2}$/;
 const WEEKDAYS = ['Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat', 'Sun'] as const;
 const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'] as const;
@@ -144,11 +144,11 @@ export function fromToday(day: Day, today: Day): string {
   return ahead < 0 ? `${counted(-ahead, 'day')} ago` : `in ${counted(ahead, 'day')}`;
 }
 
-/** An age in the words a keeper uses: days to a fortnight, weeks to twelve, months to two years, then years and months. */
+/** An age in the words a keeper uses: days to a fortnight, weeks to thirteen, months to two years, then years and months. */
 export function ageWords(days: number): string {
   const age = whole('Age in days', days);
   if (age < 14) return counted(age, 'day');
-  if (age < 84) return counted(Math.floor(age / 7), 'week');
+  if (age < 92) return counted(Math.floor(age / 7), 'week');
   const months = Math.floor(age / DAYS_PER_MONTH);
   if (months < 24) return counted(months, 'month');
   const years = counted(Math.floor(months / 12), 'year');

@@ -1,0 +1,19 @@
+import type { Migration } from 'kysely';
+import * as accounts from './001-accounts';
+import * as rooms from './002-rooms';
+import * as stock from './003-stock';
+import * as broods from './004-broods';
+import * as care from './005-care';
+import * as lineageSheets from './006-lineage-sheets';
+import * as buyers from './007-buyers';
+
+/** In order, by hand. A migration that has landed is never edited: what must change goes into the next one. */
+export const migrations: Record<string, Migration> = {
+  '001-accounts': accounts,
+  '002-rooms': rooms,
+  '003-stock': stock,
+  '004-broods': broods,
+  '005-care': care,
+  '006-lineage-sheets': lineageSheets,
+  '007-buyers': buyers,
+};

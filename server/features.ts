@@ -1,0 +1,16 @@
+import type { Express } from 'express';
+import type { House } from './house';
+import type { Serve } from './http/serve';
+import { record } from './record';
+
+/** What a feature may add to the app. `before` stands ahead of body parsing; `pages` answers addresses outside /api. */
+export type Feature = {
+  before?: (app: Express, house: House) => void;
+  routes?: (serve: Serve) => void;
+  pages?: (app: Express, house: House) => void;
+  /** Started with the server, stopped with it: workers, sweeps. */
+  start?: (house: House) => Promise<{ stop(): Promise<void> } | undefined>;
+};
+
+/** Every feature of the server, in the order in which they answer. */
+export const features: Feature[] = [record];

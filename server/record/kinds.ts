@@ -1,0 +1,24 @@
+import type { About } from '../../shared/record/contract';
+import type { ContentOf, EntryKind } from '../../shared/record/kinds';
+import type { Action } from '../../shared/roles';
+import { fishKinds } from '../fish/entries';
+import type { Scope } from '../scope';
+
+/** The envelope as a rule sees it while its content is being stored. */
+export type Envelope = { entryId: string; madeAt: string };
+
+/** What storing an entry did: the day it is about, what it concerns, one line for the history, and the rows it made. */
+export type Stored = { onDay: string; about: About[]; made?: Record<string, string> };
+
+export type KindRule<K extends EntryKind> = {
+  /** More than `entry:record`, where a kind asks for it. */
+  needs?: Action;
+  store(scope: Scope, content: ContentOf<K>, envelope: Envelope): Promise<Stored>;
+  /** One line in the keeper's words, without the date: "Holding seen, 04". Codes of what it concerns come in `codes`. */
+  say(content: ContentOf<K>, codes: (id: string) => string): string;
+};
+
+export type KindRules = { [K in EntryKind]: KindRule<K> };
+
+/** What each kind of entry does. The shapes are in `shared/<feature>/entries.ts`. */
+export const kindRules: KindRules = { ...fishKinds };
