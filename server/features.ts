@@ -1,7 +1,11 @@
 import type { Express } from 'express';
+import { colonies } from './colonies';
+import { fish } from './fish';
 import type { House } from './house';
 import type { Serve } from './http/serve';
 import { record } from './record';
+import { strains } from './strains';
+import { tanks } from './tanks';
 
 /** What a feature may add to the app. `before` stands ahead of body parsing; `pages` answers addresses outside /api. */
 export type Feature = {
@@ -13,4 +17,4 @@ export type Feature = {
 };
 
 /** Every feature of the server, in the order in which they answer. */
-export const features: Feature[] = [record];
+export const features: Feature[] = [strains, tanks, colonies, fish, record];

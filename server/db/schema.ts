@@ -615,6 +615,7 @@ type SpeciesOverrideTable = {
   id: string;
   own: Generated<0 | 1>;
   scientificName: string | null;
+  about: string | null;
   figures: Generated<string>;
   version: Generated<number>;
 };
@@ -683,11 +684,11 @@ type TankTable = {
   code: string;
   place: string | null;
   walkOrder: Generated<number>;
-  lengthMm: number | null;
-  widthMm: number | null;
-  heightMm: number | null;
-  fillMm: number | null;
-  glassMm: number | null;
+  lengthTenthsMm: number | null;
+  widthTenthsMm: number | null;
+  heightTenthsMm: number | null;
+  fillTenthsMm: number | null;
+  glassTenthsMm: number | null;
   standKg: number | null;
   litres: number;
   heaterC: number | null;

@@ -9,6 +9,8 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       id text not null,
       own integer not null default 0 check (own in (0, 1)),
       scientificName text,
+      -- for a species of our own: mode, carers, kin, body, waters
+      about text check (about is null or json_valid(about)),
       -- figures that differ from the library: { figure: { value, source } }
       figures text not null default '{}' check (json_valid(figures)),
       version integer not null default 1,
@@ -63,11 +65,11 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       place text,
       -- the order in which rounds walk past it
       walkOrder integer not null default 0,
-      lengthMm integer check (lengthMm > 0),
-      widthMm integer check (widthMm > 0),
-      heightMm integer check (heightMm > 0),
-      fillMm integer check (fillMm > 0),
-      glassMm integer check (glassMm > 0),
+      lengthTenthsMm integer check (lengthTenthsMm > 0),
+      widthTenthsMm integer check (widthTenthsMm > 0),
+      heightTenthsMm integer check (heightTenthsMm > 0),
+      fillTenthsMm integer check (fillTenthsMm > 0),
+      glassTenthsMm integer check (glassTenthsMm > 0),
       standKg real check (standKg >= 0),
       litres real not null check (litres > 0),
       heaterC real,

@@ -1,0 +1,8 @@
+import type { Feature } from '../features';
+import { fishRoutes } from './routes';
+
+export { endStay, startStay } from './entries';
+export { addFinding, addFounders, freeCodes, joinColony, keepCode, leaveColony, mustBeOurs, oneFish } from './fish';
+export { fishRows } from './rows';
+
+export const fish: Feature = { routes: fishRoutes };

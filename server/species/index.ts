@@ -1,0 +1,1 @@
+export { speciesNames } from './names';
