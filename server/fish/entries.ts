@@ -58,6 +58,9 @@ export const fishKinds: Pick<KindRules, Kinds> = {
       if (mark) await addFinding(scope, { fishId, kind: 'mark', onDay, value: mark, how: 'seen', note, entryId });
       return { onDay, about: [{ thing: 'fish', id: fishId }] };
     },
+    async undo({ db, roomId }, { fishId }) {
+      await db.updateTable('fish').set({ code: null }).where('roomId', '=', roomId).where('id', '=', fishId).execute();
+    },
     say: ({ code }) => `Told apart: ${code}`,
   },
   fishLeft: {

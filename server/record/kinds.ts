@@ -14,6 +14,8 @@ export type KindRule<K extends EntryKind> = {
   /** More than `entry:record`, where a kind asks for it. */
   needs?: Action;
   store(scope: Scope, content: ContentOf<K>, envelope: Envelope): Promise<Stored>;
+  /** For what a kind changed in place; rows made, intervals ended and ledger lines are taken back for every kind alike. */
+  undo?(scope: Scope, content: ContentOf<K>): Promise<void>;
   /** One line in the keeper's words, without the date: "Holding seen, 04". Codes of what it concerns come in `codes`. */
   say(content: ContentOf<K>, codes: (id: string) => string): string;
 };
@@ -22,3 +24,6 @@ export type KindRules = { [K in EntryKind]: KindRule<K> };
 
 /** What each kind of entry does. The shapes are in `shared/<feature>/entries.ts`. */
 export const kindRules: KindRules = { ...fishKinds };
+
+/** A kind's rule, as a rule for contents of any kind: the content's own `kind` chose it. */
+export const ruleOf = (kind: EntryKind) => kindRules[kind] as KindRule<EntryKind>;

@@ -1,16 +1,13 @@
 import { createHash } from 'node:crypto';
 import type { EntryDraft, EntryLine } from '../../shared/record/contract';
 import { UNDO_MINUTES } from '../../shared/record/contract';
-import { EntryContent, type EntryKind } from '../../shared/record/kinds';
+import { EntryContent } from '../../shared/record/kinds';
 import { Refusal } from '../../shared/refusal';
 import { mustBeAllowed, type Scope } from '../scope';
 import { codesOf } from './codes';
-import { type KindRule, kindRules } from './kinds';
+import { ruleOf } from './kinds';
 
 const hashOf = (content: unknown) => createHash('sha256').update(JSON.stringify(content)).digest('hex');
-
-/** A kind's rule, as a rule for contents of any kind: the content's own `kind` chose it. */
-const ruleOf = (kind: EntryKind) => kindRules[kind] as KindRule<EntryKind>;
 
 /**
  * Stores an entry once, inside the caller's transaction. The same id with the same content is the same entry, sent again;

@@ -1,9 +1,11 @@
 import { UNDO_MINUTES } from '../../shared/record/contract';
+import { EntryContent } from '../../shared/record/kinds';
 import { Refusal } from '../../shared/refusal';
 import { may } from '../../shared/roles';
 import { audit } from '../db/audit';
 import { newId } from '../db/newId';
 import type { Scope } from '../scope';
+import { ruleOf } from './kinds';
 
 /** Rows that an entry may have made, those that refer to others first. Foreign keys refuse when something was built on one. */
 const MADE = [
@@ -56,6 +58,8 @@ export async function undo(scope: Scope, entryId: string): Promise<void> {
     .where('roomId', '=', roomId)
     .where('id', '=', entryId)
     .execute();
+  const content = EntryContent.parse(JSON.parse(entry.content));
+  await ruleOf(content.kind).undo?.(scope, content);
   await reverseHeads(scope, entryId);
   await reopenHold(scope, entryId);
   for (const table of ENDED) {
