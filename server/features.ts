@@ -1,9 +1,12 @@
 import type { Express } from 'express';
+import { accounts } from './accounts';
 import { colonies } from './colonies';
 import { fish } from './fish';
 import type { House } from './house';
 import type { Serve } from './http/serve';
+import { letters } from './letters';
 import { record } from './record';
+import { rooms } from './rooms';
 import { strains } from './strains';
 import { tanks } from './tanks';
 
@@ -17,4 +20,4 @@ export type Feature = {
 };
 
 /** Every feature of the server, in the order in which they answer. */
-export const features: Feature[] = [strains, tanks, colonies, fish, record];
+export const features: Feature[] = [accounts, rooms, letters, strains, tanks, colonies, fish, record];

@@ -202,19 +202,7 @@ type HeadEntryTable = {
   roomId: string;
   id: string;
   batchId: string;
-  kind:
-    | 'opening'
-    | 'loss'
-    | 'cull'
-    | 'recount'
-    | 'movedOut'
-    | 'movedIn'
-    | 'heldBack'
-    | 'sold'
-    | 'given'
-    | 'traded'
-    | 'auctioned'
-    | 'returned';
+  kind: 'opening' | 'loss' | 'cull' | 'recount' | 'movedOut' | 'movedIn' | 'heldBack' | 'sold' | 'given' | 'traded' | 'auctioned' | 'returned';
   onDay: string;
   at: string;
   heads: number;
@@ -335,6 +323,8 @@ type LetterTable = {
   bodyHtml: string;
   attachments: Generated<string>;
   aboutId: string | null;
+  tokenId: string | null;
+  stopUrl: string | null;
   state: Generated<'waiting' | 'sent' | 'failed'>;
   attempts: Generated<number>;
   nextTryAt: string;
@@ -479,16 +469,7 @@ type PurchaseTable = {
   number: number;
   buyerId: string;
   requestId: string | null;
-  state:
-    | 'requested'
-    | 'reserved'
-    | 'depositAsked'
-    | 'depositPaid'
-    | 'ready'
-    | 'collected'
-    | 'sent'
-    | 'closed'
-    | 'cancelled';
+  state: 'requested' | 'reserved' | 'depositAsked' | 'depositPaid' | 'ready' | 'collected' | 'sent' | 'closed' | 'cancelled';
   way: Generated<'sale' | 'gift' | 'trade' | 'auction'>;
   discountCents: Generated<number>;
   depositCents: number | null;

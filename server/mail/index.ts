@@ -1,7 +1,7 @@
 import nodemailer from 'nodemailer';
 
 export type Letter = {
-  to: string;
+  to: string | { name: string; address: string };
   subject: string;
   text: string;
   html: string;

@@ -177,6 +177,10 @@ export async function up(db: Kysely<unknown>): Promise<void> {
       bodyHtml text not null,
       attachments text not null default '[]' check (json_valid(attachments)),
       aboutId text,
+      -- the one-time link in it is worked out from this id when it is sent: no token lies in the outbox
+      tokenId text,
+      -- where the reader can stop letters of this kind
+      stopUrl text,
       state text not null default 'waiting' check (state in ('waiting', 'sent', 'failed')),
       attempts integer not null default 0,
       nextTryAt text not null,

@@ -1,0 +1,4 @@
+import type { Feature } from '../features';
+import { accountRoutes } from './routes';
+
+export const accounts: Feature = { routes: accountRoutes };
