@@ -1,0 +1,5 @@
+import { NotFound } from '@/features/accounts/NotFound';
+
+export default function Unmatched() {
+  return <NotFound />;
+}

@@ -1,0 +1,5 @@
+import { Landing } from '@/features/accounts/Landing';
+
+export default function Home() {
+  return <Landing />;
+}

@@ -1,0 +1,36 @@
+import { MutationCache, QueryCache, QueryClient, QueryClientProvider } from '@tanstack/react-query';
+import { type ReactNode, useState } from 'react';
+import { ThemeProvider } from '@/components/theme/ThemeProvider';
+import { Unreachable } from '@/features/call';
+import { isSignedOut, meQuery } from './queries';
+
+/** Everything that stands round every page: the theme, and what was fetched. */
+export function AppRoot({ children }: { children: ReactNode }) {
+  const [cache] = useState(newCache);
+  return (
+    <QueryClientProvider client={cache}>
+      <ThemeProvider>{children}</ThemeProvider>
+    </QueryClientProvider>
+  );
+}
+
+function newCache(): QueryClient {
+  // A session that ended while a page was open: the gate above the page is told, and asks to sign in.
+  const tellGate = (error: unknown) => {
+    if (isSignedOut(error)) void cache.invalidateQueries({ queryKey: meQuery.queryKey });
+  };
+  const cache: QueryClient = new QueryClient({
+    queryCache: new QueryCache({ onError: tellGate }),
+    mutationCache: new MutationCache({ onError: tellGate }),
+    defaultOptions: {
+      queries: {
+        staleTime: 30_000,
+        // A refusal stays a refusal; only a bad line is worth another try.
+        retry: (failures, error) => error instanceof Unreachable && failures < 2,
+        networkMode: 'always',
+      },
+      mutations: { networkMode: 'always' },
+    },
+  });
+  return cache;
+}

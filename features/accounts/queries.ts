@@ -1,0 +1,45 @@
+import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { call } from '@/features/call';
+import { getMe, type Me, signOut } from '@/shared/accounts/contract';
+import { Refusal } from '@/shared/refusal';
+
+export const isSignedOut = (error: unknown): boolean => error instanceof Refusal && error.reason === 'signed-out';
+
+/** Who is signed in on this device; null when nobody is. */
+export const meQuery = queryOptions({
+  queryKey: ['me'],
+  queryFn: async ({ signal }): Promise<Me | null> => {
+    try {
+      return await call(getMe, { signal });
+    } catch (error) {
+      if (isSignedOut(error)) return null;
+      throw error;
+    }
+  },
+  staleTime: 60_000,
+  refetchInterval: 10 * 60_000,
+});
+
+/** Only below a gate that has asked for it. */
+export function useMe(): Me {
+  const { data } = useQuery(meQuery);
+  if (!data) throw new Error('useMe without a session');
+  return data;
+}
+
+/** Asks again who is signed in: after a sign-in, and after anything that changed the account or its fishrooms. */
+export function useAskAgain() {
+  const cache = useQueryClient();
+  return () => cache.invalidateQueries({ queryKey: meQuery.queryKey });
+}
+
+export function useSignOut() {
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: () => call(signOut),
+    onSuccess: () => {
+      cache.clear();
+      cache.setQueryData(meQuery.queryKey, null);
+    },
+  });
+}
