@@ -15,8 +15,8 @@ export type Block = {
   marks(x: number, y: number, extraMm: number): Mark[];
 };
 
-/** Room for blocks: on a page that others follow, and on the last one, where the foot is taller. */
-export type Room = { pageMm: number; lastMm: number };
+/** Room for blocks on the first page, which carries the foot, and on those that follow. */
+export type Room = { firstMm: number; nextMm: number };
 
 const gapOf = (block: Block, first: boolean): number => (first ? 0 : (block.gapMm ?? 0));
 
@@ -40,12 +40,12 @@ function groupsOf(blocks: Block[]): Block[][] {
 const FULL_ENOUGH = 0.6;
 
 /** How many of the groups go on one page: all that fit, or those before the last section that starts low on it. */
-function countFor(groups: Block[][], pageMm: number): number {
+function countFor(groups: Block[][], roomMm: number): number {
+  const heightTo = (count: number) => heightOf(groups.slice(0, count).flat());
   let fits = 1;
-  while (fits < groups.length - 1 && heightOf(groups.slice(0, fits + 1).flat()) <= pageMm) fits += 1;
-  for (let count = fits; count > 0; count -= 1) {
-    const starts = groups[count]?.[0]?.startsSection === true;
-    if (starts && heightOf(groups.slice(0, count).flat()) >= pageMm * FULL_ENOUGH) return count;
+  while (fits < groups.length && heightTo(fits + 1) <= roomMm) fits += 1;
+  for (let count = fits; count > 0 && fits < groups.length; count -= 1) {
+    if (groups[count]?.[0]?.startsSection === true && heightTo(count) >= roomMm * FULL_ENOUGH) return count;
   }
   return fits;
 }
@@ -54,12 +54,12 @@ function countFor(groups: Block[][], pageMm: number): number {
 export function paginate(blocks: Block[], room: Room): Block[][] {
   const pages: Block[][] = [];
   let rest = groupsOf(blocks);
-  while (heightOf(rest.flat()) > room.lastMm && rest.length > 1) {
-    const take = countFor(rest, room.pageMm);
+  while (rest.length > 0) {
+    const take = countFor(rest, pages.length === 0 ? room.firstMm : room.nextMm);
     pages.push(rest.slice(0, take).flat());
     rest = rest.slice(take);
   }
-  return [...pages, rest.flat()];
+  return pages;
 }
 
 /** Draws blocks from y downwards; room that is left goes to those that stretch, in proportion to how far they may. */

@@ -4,7 +4,8 @@ import type { Face, Ink, TextMark } from './page';
 /** A stretch of text in one face. A paragraph is a row of them. */
 export type Span = { text: string; face: Face; ink?: Ink };
 
-export type Style = { sizeMm: number; lineMm?: number; ink?: Ink };
+/** `end` sets lines flush with the right: x is then the right edge. */
+export type Style = { sizeMm: number; lineMm?: number; ink?: Ink; align?: 'start' | 'end' };
 
 type Piece = { text: string; face: Face; ink: Ink | undefined; widthMm: number };
 type Line = { pieces: Piece[]; widthMm: number };
@@ -121,17 +122,20 @@ export function paragraph(spans: Span[], widthMm: number, style: Style, heading?
 }
 
 function lineMarks(line: Line, at: { x: number; y: number; style: Style; heading: 1 | 2 | undefined }): TextMark[] {
-  let x = at.x;
-  return line.pieces.map((piece) => {
+  const ends = at.style.align === 'end';
+  let x = ends ? at.x - line.widthMm : at.x;
+  return line.pieces.map((piece, i) => {
+    // The last piece ends exactly at the edge, whatever kerning did to the others.
+    const flush = ends && i === line.pieces.length - 1;
     const mark: TextMark = {
       kind: 'text',
-      x,
+      x: flush ? at.x : x,
       y: at.y,
       text: piece.text,
       face: piece.face,
       sizeMm: at.style.sizeMm,
       ink: piece.ink ?? at.style.ink ?? 'ink',
-      anchor: 'start',
+      anchor: flush ? 'end' : 'start',
       tracking: trackingOf(piece.face, at.style.sizeMm),
     };
     if (at.heading) mark.heading = at.heading;

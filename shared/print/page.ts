@@ -15,6 +15,8 @@ export const MARGIN_MM = 14;
 /** The light theme on white: paper is never dark. */
 export const INKS = {
   ink: '#0B1C22',
+  /** Labels: some printers know no other. */
+  black: '#000000',
   ink2: '#3B5157',
   control: '#6B8085',
   rule: '#B9C8CA',
@@ -63,7 +65,7 @@ export type ShapeMark = {
 export type Sex = 'male' | 'female' | 'unsexed';
 
 /** A square code of `sizeMm`, without its quiet zone: the layout leaves that free. `level` is the error correction. */
-export type QrMark = { kind: 'qr'; x: number; y: number; sizeMm: number; text: string; level: 'M' | 'Q' };
+export type QrMark = { kind: 'qr'; x: number; y: number; sizeMm: number; text: string; level: 'M' | 'Q'; ink: Ink };
 
 /** The one photo of the page, fitted into the box. */
 export type PictureMark = { kind: 'picture'; x: number; y: number; widthMm: number; heightMm: number; alt: string };

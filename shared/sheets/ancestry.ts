@@ -1,5 +1,5 @@
 import * as z from 'zod/mini';
-import { Day } from '../days';
+import { DayText } from '../days';
 import { Id } from '../ids';
 import { words } from './wording';
 
@@ -54,7 +54,7 @@ const Animal = {
   kind: z.enum(['fish', 'brood']),
   code: words(60),
   sex: z.enum(['male', 'female', 'unsexed']),
-  born: z.nullable(Day),
+  born: z.nullable(DayText),
   origin: z.enum(['wild', 'bred', 'unknown']),
   generation: Generation,
   /** Strain and place in short, "Kapampa"; null for a possible hybrid. */

@@ -1,5 +1,5 @@
 import * as z from 'zod/mini';
-import { Day } from '../days';
+import { DayText } from '../days';
 import { Id } from '../ids';
 import { Ancestry, AnimalId, Generation } from './ancestry';
 import { Growth, Treatment, Water } from './husbandry';
@@ -12,7 +12,7 @@ const Share = z.number().check(z.minimum(0), z.maximum(1));
 const Issue = z.strictObject({
   /** As printed: "2026-0031". */
   number: words(40),
-  on: Day,
+  on: DayText,
   by: words(120),
   order: z.nullable(words(40)),
   replaces: z.nullable(z.strictObject({ number: words(40), because: z.nullable(words(200)) })),
@@ -45,12 +45,12 @@ const Subject = z
 
 const Birth = z.strictObject({
   /** The interval in which the spawn lies; one day where it was seen. Age counts from here. */
-  spawned: z.nullable(z.strictObject({ from: Day, to: Day })),
+  spawned: z.nullable(z.strictObject({ from: DayText, to: DayText })),
   taken: z.nullable(
-    z.strictObject({ how: z.enum(['stripped', 'released', 'hatched']), on: Day, holdDay: z.nullable(Count) }),
+    z.strictObject({ how: z.enum(['stripped', 'released', 'hatched']), on: DayText, holdDay: z.nullable(Count) }),
   ),
   /** For fish that came from elsewhere. */
-  arrived: z.nullable(Day),
+  arrived: z.nullable(DayText),
   raised: z.nullable(z.strictObject({ alive: Count, of: Count })),
 });
 
@@ -58,7 +58,9 @@ const Birth = z.strictObject({
 const Inbreeding = z.strictObject({
   f: Share,
   /** Every value F takes over the uncertain parents; null when there were too many to list. One value: F is certain. */
-  outcomes: z.nullable(z.array(z.strictObject({ f: Share, probability: Share })).check(z.minLength(1), z.maxLength(200))),
+  outcomes: z.nullable(
+    z.array(z.strictObject({ f: Share, probability: Share })).check(z.minLength(1), z.maxLength(200)),
+  ),
   /** Complete generation equivalents of known ancestors. */
   generationsKnown: z.number().check(z.minimum(0), z.maximum(1000)),
 });
@@ -76,7 +78,7 @@ const Photos = z.strictObject({
   shown: z.nullable(
     z.strictObject({
       caption: words(200),
-      takenOn: z.nullable(Day),
+      takenOn: z.nullable(DayText),
       /** SHA-256 of the picture's file in hex, so that another picture can't be put in its place. */
       sha256: z.string().check(z.regex(/^[0-9a-f]{64}$/, 'A SHA-256 in hex is needed')),
       widthPx: z.number().check(z.int(), z.minimum(1), z.maximum(20_000)),

@@ -1,11 +1,11 @@
 import * as z from 'zod/mini';
-import { Day } from '../days';
+import { DayText } from '../days';
 import { words } from './wording';
 
 const Mm = z.number().check(z.gt(0, 'Above zero'), z.maximum(3000));
 
 const LengthSample = z.strictObject({
-  on: Day,
+  on: DayText,
   n: z.number().check(z.int(), z.minimum(1), z.maximum(100_000)),
   meanMm: Mm,
   /** Standard deviation between fish; null for one fish. */
@@ -13,7 +13,8 @@ const LengthSample = z.strictObject({
 });
 export type LengthSample = z.output<typeof LengthSample>;
 
-const inOrder = (list: { on: string }[]): boolean => list.every((item, i) => i === 0 || (list[i - 1]?.on ?? '') <= item.on);
+const inOrder = (list: { on: string }[]): boolean =>
+  list.every((item, i) => i === 0 || (list[i - 1]?.on ?? '') <= item.on);
 
 /** Lengths as measured. A fitted curve may run between the first and the last sample: a sheet makes no forecast. */
 export const Growth = z
@@ -24,7 +25,7 @@ export const Growth = z
       z.strictObject({
         model: z.enum(['vonBertalanffy', 'gompertz', 'logistic']),
         points: z
-          .array(z.strictObject({ on: Day, meanMm: Mm }))
+          .array(z.strictObject({ on: DayText, meanMm: Mm }))
           .check(z.minLength(2), z.maxLength(400), z.refine(inOrder, 'The curve runs by date')),
       }),
     ),
@@ -51,14 +52,12 @@ export type WaterReading = z.output<typeof WaterReading>;
 
 /** What the fish lived in, over the days the readings span. */
 export const Water = z.strictObject({
-  from: Day,
-  to: Day,
-  readings: z
-    .array(WaterReading)
-    .check(
-      z.minLength(1),
-      z.refine((list) => new Set(list.map((reading) => reading.what)).size === list.length, 'One line for each measure'),
-    ),
+  from: DayText,
+  to: DayText,
+  readings: z.array(WaterReading).check(
+    z.minLength(1),
+    z.refine((list) => new Set(list.map((reading) => reading.what)).size === list.length, 'One line for each measure'),
+  ),
 });
 export type Water = z.output<typeof Water>;
 
@@ -66,7 +65,7 @@ export type Water = z.output<typeof Water>;
 export const Treatment = z.strictObject({
   what: words(120),
   why: z.nullable(words(160)),
-  from: Day,
-  to: z.nullable(Day),
+  from: DayText,
+  to: z.nullable(DayText),
 });
 export type Treatment = z.output<typeof Treatment>;

@@ -1,0 +1,2 @@
+export { labelsPdf } from './labelsPdf';
+export { sheetPdf } from './sheetPdf';
