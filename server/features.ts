@@ -1,7 +1,9 @@
 import type { Express } from 'express';
 import { accounts } from './accounts';
+import { broods } from './broods';
 import { colonies } from './colonies';
 import { fish } from './fish';
+import { holds } from './holds';
 import type { House } from './house';
 import type { Serve } from './http/serve';
 import { letters } from './letters';
@@ -20,4 +22,4 @@ export type Feature = {
 };
 
 /** Every feature of the server, in the order in which they answer. */
-export const features: Feature[] = [accounts, rooms, letters, strains, tanks, colonies, fish, record];
+export const features: Feature[] = [accounts, rooms, letters, strains, tanks, colonies, fish, holds, broods, record];

@@ -1,7 +1,9 @@
 import type { About } from '../../shared/record/contract';
 import type { ContentOf, EntryKind } from '../../shared/record/kinds';
 import type { Action } from '../../shared/roles';
+import { broodKinds } from '../broods/entries';
 import { fishKinds } from '../fish/entries';
+import { holdKinds } from '../holds/entries';
 import type { Scope } from '../scope';
 
 /** The envelope as a rule sees it while its content is being stored. */
@@ -23,7 +25,7 @@ export type KindRule<K extends EntryKind> = {
 export type KindRules = { [K in EntryKind]: KindRule<K> };
 
 /** What each kind of entry does. The shapes are in `shared/<feature>/entries.ts`. */
-export const kindRules: KindRules = { ...fishKinds };
+export const kindRules: KindRules = { ...fishKinds, ...holdKinds, ...broodKinds };
 
 /** A kind's rule, as a rule for contents of any kind: the content's own `kind` chose it. */
 export const ruleOf = (kind: EntryKind) => kindRules[kind] as KindRule<EntryKind>;

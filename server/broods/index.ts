@@ -1,0 +1,10 @@
+import type { Feature } from '../features';
+import { broodRoutes } from './routes';
+
+export { availableOf, reservedOf } from './available';
+export { beginBrood } from './begin';
+export { batchesOf, broodRows, oneBatch, oneBrood } from './broods';
+export { addLine, countOf, linesOf } from './ledger';
+export { sharesOf, sourcesOf } from './sources';
+
+export const broods: Feature = { routes: broodRoutes };

@@ -1,0 +1,1 @@
+export { keepParentage, parentagesOf } from './parentage';
