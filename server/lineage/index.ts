@@ -1,1 +1,2 @@
 export { keepParentage, parentagesOf } from './parentage';
+export { pedigreeOf, type RoomPedigree } from './pedigree';
