@@ -1,7 +1,7 @@
 import type * as z from 'zod/mini';
 import type { BatchTold, BroodRow, changeBrood, readBrood } from '../../shared/broods/contract';
 import { headCountOf } from '../../shared/broods/headCount';
-import { proposeBroodCode } from '../../shared/codes';
+import { byNumber, proposeBroodCode } from '../../shared/codes';
 import { notFound, Refusal } from '../../shared/refusal';
 import { audit } from '../db/audit';
 import { parentagesOf } from '../lineage';
@@ -155,7 +155,9 @@ function batchTold(batch: Pick<BatchOf, 'id' | 'startedOn' | 'tank'>, sources: S
   const own = lines.filter(({ batchId }) => batchId === batch.id).map(({ batchId: _batch, ...line }) => line);
   return {
     ...batch,
-    sources: sources.map(({ broodId, code }, i) => ({ broodId, code, share: shares[i] ?? 0 })),
+    sources: sources
+      .map(({ broodId, code }, i) => ({ broodId, code, share: shares[i] ?? 0 }))
+      .sort((a, b) => b.share - a.share || byNumber(a.code, b.code)),
     balance: headCountOf(own).balance,
     lines: own,
   };
