@@ -1,12 +1,16 @@
 import type { Express } from 'express';
 import { accounts } from './accounts';
+import { auditTrail } from './audit';
 import { broods } from './broods';
 import { colonies } from './colonies';
 import { fish } from './fish';
+import { growth } from './growth';
 import { holds } from './holds';
 import type { House } from './house';
 import type { Serve } from './http/serve';
 import { letters } from './letters';
+import { members } from './members';
+import { photos } from './photos';
 import { record } from './record';
 import { rooms } from './rooms';
 import { strains } from './strains';
@@ -22,4 +26,17 @@ export type Feature = {
 };
 
 /** Every feature of the server, in the order in which they answer. */
-export const features: Feature[] = [accounts, rooms, letters, strains, tanks, colonies, fish, holds, broods, record];
+export const features: Feature[] = [
+  accounts,
+  rooms,
+  members,
+  auditTrail,
+  letters,
+  strains,
+  tanks,
+  colonies,
+  fish,
+  holds,
+  broods,
+  record,
+];

@@ -16,7 +16,8 @@ async function main(): Promise<void> {
     server.listen(config.port, config.host, ready);
   });
   house.log.info({ event: 'started', origin: config.origin }, `Kinwater is at ${config.origin}`);
-  if (!config.production) process.stdout.write(`\nKinwater is at ${config.origin}\n${house.demoWords}\n`);
+  const letters = house.sink ? `Letters it sends: ${config.origin}/dev/letters\n` : '';
+  if (!config.production) process.stdout.write(`\nKinwater is at ${config.origin}\n${letters}${house.demoWords}\n`);
 
   let stopping = false;
   const stop = async (signal: string) => {

@@ -6,6 +6,7 @@ import { dayOf } from '../../shared/days';
 import { Refusal } from '../../shared/refusal';
 import { isUniqueViolation } from '../db/constraint';
 import { newId } from '../db/newId';
+import { touchRooms } from '../db/touchRooms';
 import { hashOfToken } from '../mail/tokens';
 import { unitsOf } from '../rooms';
 import type { Asked, SignedIn } from '../scope';
@@ -142,7 +143,16 @@ export async function changeMe(asked: SignedIn, { name, choices, version }: z.ou
     .where('version', '=', version)
     .returning('id')
     .executeTakeFirst();
-  if (changed) return;
+  if (changed) {
+    // The name stands on everything that the person recorded.
+    if (name !== undefined) await touchRooms(asked.db, await roomIdsOf(asked));
+    return;
+  }
   const { account } = await meOf(asked);
   throw new Refusal('conflict', 'This was changed elsewhere in the meantime', {}, { current: account });
+}
+
+async function roomIdsOf({ db, accountId }: SignedIn): Promise<string[]> {
+  const rows = await db.selectFrom('member').where('accountId', '=', accountId).select('roomId').execute();
+  return rows.map(({ roomId }) => roomId);
 }

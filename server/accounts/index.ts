@@ -1,4 +1,14 @@
 import type { Feature } from '../features';
+import { openLimits } from './limits';
+import { linkRoutes } from './linkRoutes';
 import { accountRoutes } from './routes';
+import { securityRoutes } from './securityRoutes';
 
-export const accounts: Feature = { routes: accountRoutes };
+export const accounts: Feature = {
+  routes: (serve) => {
+    const limits = openLimits();
+    accountRoutes(serve, limits);
+    linkRoutes(serve, limits);
+    securityRoutes(serve, limits);
+  },
+};

@@ -1,5 +1,6 @@
 import * as z from 'zod/mini';
 import type { Database } from '../db/schema';
+import { touchRooms } from '../db/touchRooms';
 import type { House } from '../house';
 import type { Letter } from '.';
 import { tokenOf } from './tokens';
@@ -88,6 +89,8 @@ async function keepForLater({ db, clock, log }: House, row: Row, error: unknown)
     })
     .where('id', '=', row.id)
     .execute();
+  // A letter that failed shows in its fishroom.
+  if (failed && row.roomId) await touchRooms(db, [row.roomId]);
   const about = { letterId: row.id, kind: row.kind, roomId: row.roomId, attempts };
   log.warn({ event: 'letterSent', outcome: failed ? 'failed' : 'later', ...about }, 'letter not taken');
 }

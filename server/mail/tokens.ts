@@ -47,17 +47,19 @@ export async function newMailToken(
   return id;
 }
 
+export const deadLink = () => new Refusal('invalid', 'This link has been used, or is too old. Ask for a new one.');
+
 /** Uses a one-time link up: of two at the same time one wins. Inside a transaction. */
-export async function spendMailToken({ db, now }: Pick<Asked, 'db' | 'now'>, purpose: Purpose, token: string) {
+export async function spendMailToken({ db, now }: Pick<Asked, 'db' | 'now'>, purposes: Purpose[], token: string) {
   const row = await db
     .updateTable('mailToken')
     .set({ usedAt: now })
     .where('tokenHash', '=', hashOfToken(token))
-    .where('purpose', '=', purpose)
+    .where('purpose', 'in', purposes)
     .where('usedAt', 'is', null)
     .where('expiresAt', '>', now)
     .returningAll()
     .executeTakeFirst();
-  if (!row) throw new Refusal('invalid', 'This link has been used, or is too old. Ask for a new one.');
+  if (!row) throw deadLink();
   return row;
 }
