@@ -112,14 +112,8 @@ export const KG_PER_POUND = 0.45359237;
 /** mg/L of calcium carbonate in one German degree: 10 mg/L of CaO, times M(CaCO3) / M(CaO) = 100.0869 / 56.0774. */
 export const CACO3_PER_DEGREE = (10 * 100.0869) / 56.0774;
 
-/** Molar masses: N 14.0067, H 1.00794, O 15.9994. Mass of the named substance that holds one gram of nitrogen. */
-const PER_N = {
-  N: 1,
-  NH3: 17.03052 / 14.0067,
-  NH4: 18.03846 / 14.0067,
-  NO2: 46.0055 / 14.0067,
-  NO3: 62.0049 / 14.0067,
-};
+/** Molar masses (IUPAC): N 14.007, H 1.008, O 15.999. Mass of the named substance that holds one gram of nitrogen. */
+const PER_N = { N: 1, NH3: 17.031 / 14.007, NH4: 18.039 / 14.007, NO2: 46.005 / 14.007, NO3: 62.004 / 14.007 };
 
 /** What a kit or a screen measures nitrogen as. */
 export type NitrogenAs = keyof typeof PER_N;
@@ -134,6 +128,9 @@ export const asNitrogen = (mgL: number, as: NitrogenAs): number => mgL / PER_N[a
 /** German degrees (dGH, dKH) from mg/L of calcium carbonate; and back. */
 export const degreesOf = (caCo3MgL: number): number => caCo3MgL / CACO3_PER_DEGREE;
 export const caCo3Of = (degrees: number): number => degrees * CACO3_PER_DEGREE;
+
+/** mg/L of calcium carbonate from mmol/L of alkaline earths, as European water suppliers print it: M(CaCO3) = 100.0869. */
+export const caCo3FromMillimoles = (millimolesPerL: number): number => millimolesPerL * 100.0869;
 
 /** Litres in one unit of the person's choice. */
 export const LITRES_PER = { L: 1, usGal: LITRES_PER_US_GALLON, impGal: LITRES_PER_IMPERIAL_GALLON } as const;
