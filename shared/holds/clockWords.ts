@@ -41,13 +41,13 @@ export function nextInClock(clock: Clock, plan: 'strip' | 'leave'): string {
   const swims = kind === 'guards';
   switch (clockState(clock, plan)) {
     case 'strip':
-      return `Strip by ${dayWords(clock.stripTo ?? today, today)}`;
+      return `Strip ${byDay(clock.stripTo ?? today, today)}`;
     case 'handOver':
-      return `Hand-over by ${dayWords(clock.handOverTo ?? today, today)}`;
+      return `Hand-over ${byDay(clock.handOverTo ?? today, today)}`;
     case 'early':
       return `${clock.stripFrom ? 'Strip' : 'Hand-over'} from ${dayWords(nextWindow(clock, plan) ?? today, today)}`;
     case 'release':
-      return `${swims ? 'Free-swimming' : 'Release'} by ${dayWords(releaseLatest, today)}`;
+      return `${swims ? 'Free-swimming' : 'Release'} ${byDay(releaseLatest, today)}`;
     case 'late':
       return `Release ${plural(daysBetween(releaseLatest, today), 'day')} late`;
     case 'guarded':
@@ -57,6 +57,8 @@ export function nextInClock(clock: Clock, plan: 'strip' | 'leave'): string {
       return `${swims ? 'Free-swimming' : 'Release'} from ${dayWords(releaseEarliest, today)}`;
   }
 }
+
+const byDay = (day: Day, today: Day) => (day === today ? 'today' : `by ${dayWords(day, today)}`);
 
 /** The picture in a sentence: "Day 22. Strip window 21 to 28. Release about 29." */
 export function clockSentence(clock: Clock): string {

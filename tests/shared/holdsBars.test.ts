@@ -74,7 +74,7 @@ describe('what comes next', () => {
     ['2026-05-12', 'early', 'Strip from tomorrow'],
     ['2026-05-14', 'strip', 'Strip by Wed 20 May'],
     ['2026-05-19', 'strip', 'Strip by tomorrow'],
-    ['2026-05-20', 'strip', 'Strip by today'],
+    ['2026-05-20', 'strip', 'Strip today'],
     ['2026-05-21', 'waiting', 'Release from Mon 25 May'],
     ['2026-05-24', 'waiting', 'Release from tomorrow'],
     ['2026-05-26', 'release', 'Release by Sun 31 May'],
