@@ -15,6 +15,7 @@ import { record } from './record';
 import { rooms } from './rooms';
 import { strains } from './strains';
 import { tanks } from './tanks';
+import { water } from './water';
 
 /** What a feature may add to the app. `before` stands ahead of body parsing; `pages` answers addresses outside /api. */
 export type Feature = {
@@ -38,5 +39,8 @@ export const features: Feature[] = [
   fish,
   holds,
   broods,
+  growth,
+  photos,
+  water,
   record,
 ];

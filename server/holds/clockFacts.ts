@@ -2,6 +2,7 @@ import { addDays, daysBetween } from '../../shared/days';
 import type { ClockFacts } from '../../shared/holds/contract';
 import { type TemperatureReading, temperatureOn } from '../../shared/holds/waterTemperature';
 import type { Scope } from '../scope';
+import { valuesOf } from '../species';
 
 type Held = {
   tankId: string;
@@ -45,12 +46,6 @@ async function overridesOf({ db, roomId }: Scope) {
       { figures: valuesOf(figures), about: about ? JSON.parse(about) : null },
     ]),
   );
-}
-
-/** Stored as { figure: { value, source } }; the computations take the values. */
-function valuesOf(figures: string): Record<string, unknown> {
-  const stored: Record<string, { value: unknown }> = JSON.parse(figures);
-  return Object.fromEntries(Object.entries(stored).map(([name, { value }]) => [name, value]));
 }
 
 /** Released holds whose spawn was known to within a few days: what the fishroom's own holding time is learned from. */

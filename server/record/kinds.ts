@@ -3,11 +3,18 @@ import type { ContentOf, EntryKind } from '../../shared/record/kinds';
 import type { Action } from '../../shared/roles';
 import { broodKinds } from '../broods/entries';
 import { fishKinds } from '../fish/entries';
+import { growthKinds } from '../growth/entries';
 import { holdKinds } from '../holds/entries';
+import { photoKinds } from '../photos/entries';
+import type { StoredPicture } from '../pictures';
 import type { Scope } from '../scope';
+import { waterKinds } from '../water/entries';
 
 /** The envelope as a rule sees it while its content is being stored. */
-export type Envelope = { entryId: string; madeAt: string };
+export type Envelope = { entryId: string; madeAt: string; picture?: Picture };
+
+/** A picture that came with the entry, its files stored already. */
+export type Picture = Pick<StoredPicture, 'takenOn' | 'takenAt' | 'width' | 'height' | 'bytes' | 'sha256'>;
 
 /** What storing an entry did: the day it is about, what it concerns, one line for the history, and the rows it made. */
 export type Stored = { onDay: string; about: About[]; made?: Record<string, string> };
@@ -25,7 +32,14 @@ export type KindRule<K extends EntryKind> = {
 export type KindRules = { [K in EntryKind]: KindRule<K> };
 
 /** What each kind of entry does. The shapes are in `shared/<feature>/entries.ts`. */
-export const kindRules: KindRules = { ...fishKinds, ...holdKinds, ...broodKinds };
+export const kindRules: KindRules = {
+  ...fishKinds,
+  ...holdKinds,
+  ...broodKinds,
+  ...growthKinds,
+  ...photoKinds,
+  ...waterKinds,
+};
 
 /** A kind's rule, as a rule for contents of any kind: the content's own `kind` chose it. */
 export const ruleOf = (kind: EntryKind) => kindRules[kind] as KindRule<EntryKind>;

@@ -5,7 +5,7 @@ import { EntryContent } from '../../shared/record/kinds';
 import { Refusal } from '../../shared/refusal';
 import { mustBeAllowed, type Scope } from '../scope';
 import { codesOf } from './codes';
-import { ruleOf } from './kinds';
+import { type Picture, ruleOf } from './kinds';
 
 const hashOf = (content: unknown) => createHash('sha256').update(JSON.stringify(content)).digest('hex');
 
@@ -13,7 +13,11 @@ const hashOf = (content: unknown) => createHash('sha256').update(JSON.stringify(
  * Stores an entry once, inside the caller's transaction. The same id with the same content is the same entry, sent again;
  * with other content it is a conflict, and nothing is overwritten.
  */
-export async function keepEntry(scope: Scope, draft: EntryDraft): Promise<{ isNew: boolean }> {
+export async function keepEntry(
+  scope: Scope,
+  draft: EntryDraft,
+  more: { picture?: Picture } = {},
+): Promise<{ isNew: boolean }> {
   const { db, roomId, actorId, now } = scope;
   const contentHash = hashOf(draft.content);
   const known = await db
@@ -54,7 +58,7 @@ export async function keepEntry(scope: Scope, draft: EntryDraft): Promise<{ isNe
       undoneBy: null,
     })
     .execute();
-  const stored = await rule.store(scope, draft.content, { entryId: draft.id, madeAt: draft.madeAt });
+  const stored = await rule.store(scope, draft.content, { entryId: draft.id, madeAt: draft.madeAt, ...more });
   if (stored.onDay > scope.today)
     throw new Refusal('invalid', 'That day is still to come', { onDay: 'Choose today or an earlier day' });
   await db

@@ -1,1 +1,2 @@
+export { figuresOf, profileIn, valuesOf } from './figures';
 export { speciesNames } from './names';
