@@ -1,0 +1,30 @@
+import { useFormikContext } from 'formik';
+import { Button } from '@/components/ui/Button';
+import type { IconName } from '@/components/ui/iconMarks';
+
+type Props = {
+  /** Names the record: "Save hold". */
+  label: string;
+  icon?: IconName;
+  busyLabel?: string;
+  disabledBecause?: string | null;
+  /** A text or plain button for a second way to save. */
+  kind?: 'primary' | 'plain';
+};
+
+/** Saves the form it stands in; busy until the screen is true again. Full width. */
+export function SubmitButton({ label, icon, busyLabel, disabledBecause, kind = 'primary' }: Props) {
+  const { isSubmitting, submitForm } = useFormikContext();
+  return (
+    <Button
+      label={label}
+      icon={icon}
+      kind={kind}
+      grow
+      busy={isSubmitting}
+      busyLabel={busyLabel}
+      disabledBecause={disabledBecause}
+      onPress={() => void submitForm()}
+    />
+  );
+}

@@ -1,0 +1,35 @@
+import type { Theme } from './theme';
+
+/** "Dim room": a blue-black that keeps eyes adapted. */
+export const dark: Theme = {
+  name: 'dark',
+  ground: '#071419',
+  sheet: '#0F2027',
+  well: '#040D11',
+  ink: '#EAF2EF',
+  ink2: '#B2C4C4',
+  ink3: '#8DA3A4',
+  rule: '#2B4148',
+  ruleSoft: '#1A2D33',
+  ruleStrong: '#EAF2EF',
+  control: '#6F898C',
+  actFill: '#EAF2EF',
+  actInk: '#071419',
+  trouble: '#FF8270',
+  troubleFill: '#FF8270',
+  troubleInk: '#2A0602',
+  troubleWash: '#2A1614',
+  select: '#17323C',
+  focus: '#8CD0FF',
+  band: '#1C3A48',
+  scrim: 'rgba(2,8,11,.72)',
+  sheetShadow: '0 -1px 0 #6F898C, 0 -24px 48px rgba(0,0,0,.55)',
+  stage: {
+    egg: '#F7B83F',
+    wriggler: '#D6BF62',
+    fry: '#A2C486',
+    juvenile: '#6BBBAE',
+    subadult: '#52A3CC',
+    adult: '#5A8BE0',
+  },
+};
