@@ -37,10 +37,13 @@ const files = Object.keys(MAY_IMPORT).flatMap((layer) =>
 );
 
 /** Static and dynamic imports, and re-exports. */
+const IMPORTS = [
+  /^import\s(?:[^'"]*?\sfrom\s)?'([^']+)'/gm,
+  /^export\s(?:type\s)?[{*][^'"]*?\sfrom\s'([^']+)'/gm,
+  /\bimport\('([^']+)'\)/g,
+];
 const targetsOf = (text: string): string[] =>
-  [...text.matchAll(/(?:from|import\()\s*'([^']+)'/g), ...text.matchAll(/^import '([^']+)'/gm)].map(
-    ([, target = '']) => target,
-  );
+  IMPORTS.flatMap((pattern) => [...text.matchAll(pattern)].map(([, target = '']) => target));
 
 const pathOf = (file: string, target: string): string | null =>
   target.startsWith('.') ? join(dirname(file), target) : target.startsWith('@/') ? target.slice(2) : null;
