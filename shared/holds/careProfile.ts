@@ -40,8 +40,12 @@ export function careProfileOf(profile: SpeciesProfile): CareProfile | null {
   }
   const strip = profile.mode === 'maternalMouthbrooder' ? profile.stripDays?.value : undefined;
   if (!strip) return { kind: 'holds', ...shares, hatchShare, handOver: null };
-  return { kind: 'strips', ...shares, hatchShare, stripFrom: (strip[0] - 1) / days, stripTo: (strip[1] - 1) / days };
+  const [stripFrom, stripTo] = [shareOn(strip[0], days), shareOn(strip[1], days)];
+  return { kind: 'strips', ...shares, hatchShare, stripFrom, stripTo };
 }
+
+/** A day number of the hold as a share of the way; never past release, whatever a fishroom has set. */
+const shareOn = (day: number, days: number) => Math.min(1, Math.max(0, day - 1) / days);
 
 /** Days 10 to 12 of a hold of 22, measured in Eretmodus cyanostictus (Grueter & Taborsky 2004). */
 const HAND_OVER = [10, 12] as const;

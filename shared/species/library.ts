@@ -4,7 +4,7 @@ import { guards } from './guards';
 import { haps } from './haps';
 import { mbuna } from './mbuna';
 import { openWater } from './openWater';
-import { profileFrom, type SpeciesOverrides, type SpeciesProfile } from './profile';
+import { type OverrideSources, profileFrom, type SpeciesOverrides, type SpeciesProfile } from './profile';
 import { shore } from './shore';
 import type { Body, BreedingMode, Carers, Kin, Species, Waters } from './species';
 import { tropheini } from './tropheini';
@@ -31,10 +31,14 @@ export const librarySpecies = (id: string): Species | null => byId.get(id) ?? nu
  * A library species as a fishroom sees it: every figure with its value and source, the fishroom's own first, then the
  * library's, then a marked fallback. Throws `BadValue` for an id that is not in the library.
  */
-export function profileOf(speciesId: string, overrides: SpeciesOverrides = {}): SpeciesProfile {
+export function profileOf(
+  speciesId: string,
+  overrides: SpeciesOverrides = {},
+  sources: OverrideSources = {},
+): SpeciesProfile {
   const species = byId.get(speciesId);
   if (!species) throw new BadValue('Species', speciesId, 'must be in the library');
-  return profileFrom(species, overrides);
+  return profileFrom(species, overrides, sources);
 }
 
 /** A species that the library does not have: undescribed, or new to the trade. It starts with no figures of its own. */

@@ -3,6 +3,7 @@ import { BadValue } from '@/shared/badValue';
 import { careProfileOf } from '@/shared/holds/careProfile';
 import { adultMm, adultSizePrior, TL_PER_SL } from '@/shared/species/adultSize';
 import type { Figure } from '@/shared/species/figure';
+import { FIGURE_SHAPES } from '@/shared/species/figureShapes';
 import { LIBRARY, librarySpecies, profileOf, unlistedSpecies } from '@/shared/species/library';
 import { profileFrom } from '@/shared/species/profile';
 import type { Species } from '@/shared/species/species';
@@ -113,11 +114,50 @@ describe('what a fishroom says', () => {
     expect(profile.clutch).toEqual(profileOf('tropheus-moorii').clutch);
   });
 
+  test('keeps the source that the fishroom gave', () => {
+    const { clutch } = profileOf('tropheus-moorii', { clutch: 9 }, { clutch: 'Our own 14 broods' });
+    expect(clutch).toMatchObject({ value: 9, source: 'Our own 14 broods', standing: 'room' });
+  });
+
+  test('may be anything the library itself says', () => {
+    for (const { figures, id } of LIBRARY) {
+      for (const [name, shape] of Object.entries(FIGURE_SHAPES)) {
+        const figure = Object.entries(figures).find(([key]) => key === name)?.[1];
+        if (figure) expect(shape.safeParse(figure.value).error?.issues, `${id} ${name}`).toBeUndefined();
+      }
+    }
+  });
+
+  test.each([
+    ['temperatureC', [27, 24], 'The first must be the smaller'],
+    ['temperatureC', [24, 80], 'At most 40'],
+    ['holdDays', 0, 'At least 1'],
+    ['minGroup', 2.5, 'Whole fish only'],
+    ['q10', Number.NaN, 'Type a Q10'],
+    ['clutch', '12', 'Type how many'],
+  ] as const)('%s: %j is answered with "%s"', (name, value, message) => {
+    expect(FIGURE_SHAPES[name].safeParse(value).error?.issues[0]?.message).toBe(message);
+  });
+
   test('moves what follows from it: a longer hold keeps its release range around it', () => {
     const profile = profileFrom(unlisted(), { holdDays: 20 });
     expect(profile.holdDaysRange?.value).toEqual([17, 25]);
     expect(profile.freeSwimmingDay.value).toBe(17);
     expect(careProfileOf(profile)).toMatchObject({ kind: 'strips', days: 20, spreadDays: 4 });
+  });
+
+  test('moves the library’s marks with its own days of holding', () => {
+    const profile = profileOf('simochromis-diagramma', { holdDays: 36 }); // 28 days and days 21 to 28 in the library
+    expect(profile.stripDays).toMatchObject({ value: [27, 36], standing: 'practice' });
+    expect(profile.stripDays?.note).toContain('this fishroom');
+    expect(profile.holdDaysRange?.value).toEqual([31, 41]);
+    const set = profileOf('simochromis-diagramma', { holdDays: 36, stripDays: [21, 28] });
+    expect(set.stripDays?.value).toEqual([21, 28]);
+  });
+
+  test('never puts the strip window past release, whatever it sets', () => {
+    const care = careProfileOf(profileOf('simochromis-diagramma', { holdDays: 10, stripDays: [21, 28] }));
+    expect(care).toMatchObject({ stripFrom: 1, stripTo: 1 });
   });
 
   test('cannot bring a strip window to a species that guards', () => {
