@@ -56,7 +56,10 @@ function bareWidth(word: Piece[], sizeMm: number): number {
   return widthOfWord(word) - widthOf(' ', last.face, sizeMm, trackingOf(last.face, sizeMm));
 }
 
-/** A word wider than the line is cut between letters: addresses and codes without a space. */
+/** Letters after which a long word is cut rather than elsewhere. */
+const SEAMS = /[-/._·]/;
+
+/** A word wider than the line is cut: after a hyphen or a slash if there is one, else between letters. */
 function cutWord(word: Piece[], widthMm: number, sizeMm: number): Piece[][] {
   if (bareWidth(word, sizeMm) <= widthMm) return [word];
   const parts: Piece[][] = [];
@@ -65,8 +68,9 @@ function cutWord(word: Piece[], widthMm: number, sizeMm: number): Piece[][] {
     for (const letter of piece.text) {
       const next = pieceOf(letter, piece, sizeMm);
       if (part.length > 0 && letter !== ' ' && widthOfWord(part) + next.widthMm > widthMm) {
-        parts.push(part);
-        part = [];
+        const seam = part.findLastIndex(({ text }) => SEAMS.test(text)) + 1;
+        parts.push(part.slice(0, seam || part.length));
+        part = seam ? part.slice(seam) : [];
       }
       part.push(next);
     }

@@ -1,5 +1,6 @@
 import type { Block } from '../print/flow';
 import { word } from '../print/lines';
+import { widthOf } from '../print/measure';
 import { type Mark, rule } from '../print/page';
 import { signHeight, signMarks } from '../print/sign';
 import type { SheetContent } from './content';
@@ -8,6 +9,9 @@ import { plain, RULES, smallText, TYPE } from './parts';
 const QR_MM = 22;
 const SIGNATURE_MM = 64;
 const TOP_MM = 4.5;
+const FOLIO_TYPE_MM = 3.17;
+/** Kept free for the page's number. */
+const FOLIO_PAGE_MM = 30;
 
 /** How the sheet is checked, and where it is signed: the foot of the first page. */
 export function footBlock(content: SheetContent, widthMm: number, checkUrl: string): Block {
@@ -47,9 +51,12 @@ export function folio(
   at: { x: number; y: number; widthMm: number },
 ): Mark[] {
   const { x, y, widthMm } = at;
-  const style = { y, sizeMm: 3.17, ink: 'ink2' } as const;
+  const style = { y, sizeMm: FOLIO_TYPE_MM, ink: 'ink2' } as const;
+  const number = `Lineage sheet ${content.issue.number}`;
+  const whole = `${number}, ${content.fishroom.name}`;
+  const fits = widthOf(whole, 'regular', FOLIO_TYPE_MM) < widthMm - FOLIO_PAGE_MM;
   return [
-    word(`Lineage sheet ${content.issue.number}, ${content.fishroom.name}`, { ...style, x }),
+    word(fits ? whole : number, { ...style, x }),
     word(`page ${page.number} of ${page.of}`, { ...style, x: x + widthMm, anchor: 'end' }),
   ];
 }

@@ -1,66 +1,29 @@
 import type { Block } from '../print/flow';
-import { type Paragraph, paragraph, type Span } from '../print/lines';
+import type { Paragraph } from '../print/lines';
 import type { LineMark, Mark, Point, Sex } from '../print/page';
 import type { SheetContent } from './content';
 import { type Kin, type KinSlot, kinOf, pairsOf } from './kin';
-import { plain, type Setting, smallText, TYPE } from './parts';
+import { plain, type Setting, smallText } from './parts';
+import {
+  type Branch,
+  branchesOf,
+  COLUMNS,
+  codeSpans,
+  heightOfBranch,
+  labelOf,
+  type Place,
+  placesIn,
+  SHAPE_MM,
+  sumOf,
+} from './pedigreePlaces';
 import { drawWords, joinOr, shareWords, unbroken } from './sayings';
 
-/** Columns, from the left edge: the shape's centre, where its label starts, how wide that may grow. */
-const COLUMNS = {
-  subject: { shape: 4.5, label: 10, width: 28 },
-  parent: { shape: 52, label: 57.5, width: 46 },
-  grandparent: { shape: 123, label: 128.5 },
-} as const;
 const BUSES = { parents: 42.5, grandparents: 112.5 } as const;
-const SHAPE_MM = 5;
 /** Free space between a line's end and the shape or label beside it. */
 const CLEAR_MM = 2.2;
 /** A drawing may grow by this much for each place, to fill the page. */
 const STRETCH_PER_PLACE_MM = 7;
 const DASH = [1.3, 1.05] as const;
-
-type Place = { slot: KinSlot; label: Paragraph; heightMm: number };
-type Branch = { parent: Place; of: Place[] };
-
-const codeSpans = (codes: string[]): Span[] =>
-  codes.flatMap((code, i): Span[] => [
-    ...(i > 0 ? [{ text: ' or ', face: 'regular' as const }] : []),
-    { text: code, face: 'code' },
-  ]);
-
-function labelOf(title: Span[], notes: string[], widthMm: number): Paragraph {
-  const head = paragraph(title, widthMm, { sizeMm: TYPE.body, lineMm: 4.5 });
-  const foot = paragraph(plain(notes.join(' · ')), widthMm, { sizeMm: 3.17, lineMm: 4, ink: 'ink2' });
-  return {
-    heightMm: head.heightMm + foot.heightMm,
-    widthMm: Math.max(head.widthMm, foot.widthMm),
-    marks: (x, y) => [...head.marks(x, y), ...foot.marks(x, y + head.heightMm)],
-  };
-}
-
-function placeOf(slot: KinSlot, widthMm: number, setting: Setting): Place {
-  const title: Span[] = slot.codes.length > 0 ? codeSpans(slot.codes) : plain(slot.otherwise);
-  const of =
-    setting.told && slot.parents.length > 0
-      ? [`of ${slot.parents.map((p) => joinOr(p.codes) || p.otherwise).join(' and ')}`]
-      : [];
-  const label = labelOf(title, [...slot.notes, ...of], widthMm);
-  return { slot, label, heightMm: Math.max(SHAPE_MM, label.heightMm) + setting.slotMm };
-}
-
-function branchesOf(kin: Kin, widthMm: number, setting: Setting): Branch[] {
-  const near = setting.told ? widthMm - COLUMNS.parent.label : COLUMNS.parent.width;
-  const far = widthMm - COLUMNS.grandparent.label;
-  return kin.parents.map((slot) => ({
-    parent: placeOf(slot, near, setting),
-    of: setting.told ? [] : slot.parents.map((each) => placeOf(each, far, setting)),
-  }));
-}
-
-const placesIn = (branch: Branch): number => Math.max(1, branch.of.length);
-const sumOf = (places: Place[]): number => places.reduce((sum, place) => sum + place.heightMm, 0);
-const heightOfBranch = (branch: Branch): number => Math.max(branch.parent.heightMm, sumOf(branch.of));
 
 /** A line for a known parent; thinner and dashed the less likely it is. */
 function branchLine(points: Point[], slot: KinSlot): LineMark {
@@ -118,12 +81,12 @@ function subjectSex({ heads, kind }: SheetContent['subject']): Sex {
 /** Parents and grandparents: shapes, codes, what is dashed. It takes up the room that a page has left. */
 export function pedigreeBlock(content: SheetContent, widthMm: number, setting: Setting): Block {
   const kin = kinOf(content.ancestry, content.subject.id);
-  const branches = branchesOf(kin, widthMm, setting);
+  const branches = branchesOf(kin.parents, widthMm, setting);
   const places = branches.reduce((sum, branch) => sum + placesIn(branch), 0);
-  const subject = labelOf(codeSpans([content.subject.code]), [], COLUMNS.subject.width);
+  const label = labelOf(codeSpans([content.subject.code]), [], COLUMNS.subject.width);
   const notes = smallText(plain(notesOf(content, kin).join(' ')), widthMm);
   const tree = Math.max(
-    subject.heightMm + setting.slotMm,
+    label.heightMm + setting.slotMm,
     branches.reduce((sum, branch) => sum + heightOfBranch(branch), 0),
   );
   return {
@@ -131,71 +94,77 @@ export function pedigreeBlock(content: SheetContent, widthMm: number, setting: S
     stretchMm: places * STRETCH_PER_PLACE_MM,
     marks: (x, y, extraMm) => [
       ...treeMarks(
-        { content, branches, subject },
-        { x, y: y + 1.5, heightMm: tree + extraMm, extraMm: extraMm / places },
+        { subject: content.subject, branches, label },
+        { x, y: y + 1.5, heightMm: tree + extraMm, extraMm: places > 0 ? extraMm / places : 0 },
       ),
       ...notes.marks(x, y + 2.5 + tree + extraMm),
     ],
   };
 }
 
-type Tree = { content: SheetContent; branches: Branch[]; subject: Paragraph };
+type Tree = { subject: SheetContent['subject']; branches: Branch[]; label: Paragraph };
+type Spot = { x: number; y: number; heightMm: number; extraMm: number };
 
-function treeMarks(
-  { content, branches, subject }: Tree,
-  at: { x: number; y: number; heightMm: number; extraMm: number },
-): Mark[] {
-  const reach = Math.max(0, ...branches.map(({ parent }) => parent.label.widthMm));
-  let top = at.y;
-  const drawn = branches.map((branch) => {
-    const room = heightOfBranch(branch) + placesIn(branch) * at.extraMm;
-    const spare = (room - sumOf(branch.of)) / placesIn(branch);
-    let y = top;
-    const of = branch.of.map((place) => {
-      const centre = y + (place.heightMm + spare) / 2;
-      y += place.heightMm + spare;
-      return { y: centre, place };
-    });
-    const centre = of.length > 0 ? ((of[0]?.y ?? 0) + (of.at(-1)?.y ?? 0)) / 2 : top + room / 2;
-    top += room;
-    return { y: centre, branch, of };
+/** A branch with the heights its shapes stand at. */
+type Drawn = { y: number; branch: Branch; of: { y: number; place: Place }[] };
+
+const middle = (list: { y: number }[], otherwise: number): number =>
+  list.length > 0 ? ((list[0]?.y ?? 0) + (list.at(-1)?.y ?? 0)) / 2 : otherwise;
+
+/** Hangs a branch below `top`; its places share the extra room evenly, and the parent stands midway between its own. */
+function hang(branch: Branch, top: number, roomMm: number): Drawn {
+  const spare = (roomMm - sumOf(branch.of)) / placesIn(branch);
+  let y = top;
+  const of = branch.of.map((place) => {
+    const centre = y + (place.heightMm + spare) / 2;
+    y += place.heightMm + spare;
+    return { y: centre, place };
   });
-  const own = drawn.length > 0 ? ((drawn[0]?.y ?? 0) + (drawn.at(-1)?.y ?? 0)) / 2 : at.y + at.heightMm / 2;
+  return { y: middle(of, top + roomMm / 2), branch, of };
+}
+
+function hangAll(branches: Branch[], { y, extraMm }: Spot): Drawn[] {
+  let top = y;
+  return branches.map((branch) => {
+    const room = heightOfBranch(branch) + placesIn(branch) * extraMm;
+    const drawn = hang(branch, top, room);
+    top += room;
+    return drawn;
+  });
+}
+
+const edgeOf = (column: { shape: number }): number => column.shape - SHAPE_MM / 2 - CLEAR_MM;
+
+function treeMarks({ subject, branches, label }: Tree, at: Spot): Mark[] {
   const { x } = at;
-  const { heads, sexSure } = content.subject;
+  const drawn = hangAll(branches, at);
+  const y = middle(drawn, at.y + at.heightMm / 2);
+  const reach = Math.max(0, ...branches.map(({ parent }) => parent.label.widthMm));
+  const stem = x + COLUMNS.subject.label + label.widthMm + CLEAR_MM;
+  const ends = drawn.map((each) => ({ y: each.y, slot: each.branch.parent.slot }));
   return [
-    ...fan(
-      {
-        x: x + COLUMNS.subject.label + subject.widthMm + CLEAR_MM,
-        y: own,
-        bus: x + BUSES.parents,
-        to: x + COLUMNS.parent.shape - SHAPE_MM / 2 - CLEAR_MM,
-      },
-      drawn.map(({ y, branch }) => ({ y, slot: branch.parent.slot })),
-    ),
+    ...fan({ x: stem, y, bus: x + BUSES.parents, to: x + edgeOf(COLUMNS.parent) }, ends),
     {
       kind: 'shape',
       x: x + COLUMNS.subject.shape,
-      y: own,
+      y,
       sizeMm: SHAPE_MM + 1,
-      sex: subjectSex(content.subject),
-      sure: sexSure || heads.unsexed > 0,
+      sex: subjectSex(subject),
+      sure: subject.sexSure || subject.heads.unsexed > 0,
       filled: true,
     },
-    ...subject.marks(x + COLUMNS.subject.label, own - subject.heightMm / 2),
-    ...drawn.flatMap(({ y, branch, of }) => [
-      ...fan(
-        {
-          x: x + COLUMNS.parent.label + reach + CLEAR_MM,
-          y,
-          bus: x + BUSES.grandparents,
-          to: x + COLUMNS.grandparent.shape - SHAPE_MM / 2 - CLEAR_MM,
-        },
-        of.map((each) => ({ y: each.y, slot: each.place.slot })),
-      ),
-      ...placeMarks(branch.parent, COLUMNS.parent, x, y),
-      ...of.flatMap((each) => placeMarks(each.place, COLUMNS.grandparent, x, each.y)),
-    ]),
+    ...label.marks(x + COLUMNS.subject.label, y - label.heightMm / 2),
+    ...drawn.flatMap((each) => branchMarks(each, x, reach)),
+  ];
+}
+
+function branchMarks({ y, branch, of }: Drawn, x: number, reach: number): Mark[] {
+  const stem = x + COLUMNS.parent.label + reach + CLEAR_MM;
+  const ends = of.map((each) => ({ y: each.y, slot: each.place.slot }));
+  return [
+    ...fan({ x: stem, y, bus: x + BUSES.grandparents, to: x + edgeOf(COLUMNS.grandparent) }, ends),
+    ...placeMarks(branch.parent, COLUMNS.parent, x, y),
+    ...of.flatMap((each) => placeMarks(each.place, COLUMNS.grandparent, x, each.y)),
   ];
 }
 
