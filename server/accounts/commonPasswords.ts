@@ -22,7 +22,7 @@ export function mustBeUncommon(password: string, person: { name: string; email: 
   const folded = password.normalize('NFKC').toLowerCase();
   const inner = core(folded);
   const [beforeAt = '', domain = ''] = person.email.toLowerCase().split('@');
-  const personal = [person.email.toLowerCase(), beforeAt, domain.split('.')[0] ?? '', ...wordsOf(person.name)];
+  const personal = [person.email.toLowerCase(), beforeAt, domain, domain.split('.')[0] ?? '', ...wordsOf(person.name)];
   const guessable =
     COMMON.has(folded) ||
     (COMMON.has(inner) && folded.length - inner.length <= 4) ||

@@ -65,7 +65,7 @@ export async function roomPage({ db, roomId, role, today }: Scope): Promise<Room
   const { settings, ...room } = await db
     .selectFrom('room')
     .where('id', '=', roomId)
-    .selectAll()
+    .select(['id', 'name', 'slug', 'place', 'timeZone', 'currency', 'createdAt', 'version', 'settings'])
     .executeTakeFirstOrThrow();
   return { ...room, units: unitsOf(settings), role, today };
 }
