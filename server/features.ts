@@ -15,6 +15,7 @@ import { record } from './record';
 import { rooms } from './rooms';
 import { strains } from './strains';
 import { tanks } from './tanks';
+import { today } from './today';
 import { water } from './water';
 
 /** What a feature may add to the app. `before` stands ahead of body parsing; `pages` answers addresses outside /api. */
@@ -42,5 +43,6 @@ export const features: Feature[] = [
   growth,
   photos,
   water,
+  today,
   record,
 ];

@@ -1,0 +1,88 @@
+import * as z from 'zod/mini';
+import { DayText } from '../days';
+import { endpoint, inRoom } from '../endpoint';
+import { Id } from '../ids';
+import { line, Version } from '../shapes';
+import { TaskRow, TodayFacts } from './facts';
+import { Intervals } from './intervals';
+
+export const readToday = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/today',
+  needs: 'task:see',
+  params: inRoom({}),
+  output: TodayFacts,
+});
+
+export const readIntervals = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/intervals',
+  needs: 'room:see',
+  params: inRoom({}),
+  output: Intervals,
+});
+
+export const changeIntervals = endpoint({
+  method: 'PUT',
+  path: '/api/rooms/:roomId/intervals',
+  needs: 'room:manage',
+  params: inRoom({}),
+  body: Intervals,
+  output: Intervals,
+});
+
+/** Done, skipped with a reason, put off, or given to someone: of a task that is worked out (by its key) or one's own. */
+export const decideTask = endpoint({
+  method: 'PUT',
+  path: '/api/rooms/:roomId/tasks/:taskKey',
+  needs: 'task:write',
+  params: inRoom({ taskKey: z.string().check(z.minLength(1), z.maxLength(200)) }),
+  body: z.strictObject({
+    decision: z.enum(['done', 'skip', 'snooze', 'assign', 'open'], 'Choose what to do with it'),
+    because: z.nullable(line(200, 'Say why')),
+    until: z.nullable(DayText),
+    assignedTo: z.nullable(Id),
+  }),
+  output: TaskRow,
+});
+
+export const addTask = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/tasks',
+  needs: 'task:write',
+  params: inRoom({}),
+  body: z.strictObject({
+    id: Id,
+    title: line(120, 'Say what is to be done'),
+    dueOn: DayText,
+    everyDays: z.nullable(
+      z
+        .number('Type a number of days')
+        .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(730, 'At most two years')),
+    ),
+    assignedTo: z.nullable(Id),
+    about: z.nullable(
+      z.strictObject({ thing: z.enum(['tank', 'colony', 'fish', 'hold', 'brood', 'batch', 'strain']), id: Id }),
+    ),
+  }),
+  output: TaskRow,
+});
+
+export const changeTask = endpoint({
+  method: 'PATCH',
+  path: '/api/rooms/:roomId/own-tasks/:taskId',
+  needs: 'task:write',
+  params: inRoom({ taskId: Id }),
+  body: z.strictObject({
+    version: Version,
+    title: line(120, 'Say what is to be done'),
+    dueOn: DayText,
+    everyDays: z.nullable(
+      z
+        .number('Type a number of days')
+        .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(730, 'At most two years')),
+    ),
+    assignedTo: z.nullable(Id),
+  }),
+  output: TaskRow,
+});
