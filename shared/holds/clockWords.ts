@@ -16,6 +16,10 @@ export const KIND_WORDS: Record<CareKind, string> = {
   guards: 'Guarding',
 };
 
+/** Said where a strip is recorded. */
+export const STRIP_CAUTION =
+  'Strip only if you have been shown how: water-wet hands, low over the water, head down. Stop if she struggles and leave her to release.';
+
 /** What the clock says comes next, in order of time; `late` once the release window has passed. */
 export type ClockState = 'early' | 'strip' | 'handOver' | 'waiting' | 'release' | 'late' | 'guarded';
 
