@@ -110,7 +110,7 @@ export const LITRES_PER_IMPERIAL_GALLON = 4.54609;
 export const KG_PER_POUND = 0.45359237;
 
 /** mg/L of calcium carbonate in one German degree: 10 mg/L of CaO, times M(CaCO3) / M(CaO) = 100.0869 / 56.0774. */
-export const CACO3_PER_DEGREE = (10 * 100.0869) / 56.0774;
+const CACO3_PER_DEGREE = (10 * 100.0869) / 56.0774;
 
 /** Molar masses (IUPAC): N 14.007, H 1.008, O 15.999. Mass of the named substance that holds one gram of nitrogen. */
 const PER_N = { N: 1, NH3: 17.031 / 14.007, NH4: 18.039 / 14.007, NO2: 46.005 / 14.007, NO3: 62.004 / 14.007 };

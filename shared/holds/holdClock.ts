@@ -22,8 +22,8 @@ export type HoldProfile = {
 export type HoldClock = Clock & { stripFrom: Day; stripTo: Day };
 
 /** Usual shares of the hold, assumed from haplochromines. */
-export const HATCH_SHARE = 0.28;
-export const SWIM_SHARE = 0.85;
+const HATCH_SHARE = 0.28;
+const SWIM_SHARE = 0.85;
 
 /**
  * Where a hold is today. Development advances each day by 1 / D(T), with D(T) = days Q10^((atC - T) / 10), added up over

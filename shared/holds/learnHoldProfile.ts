@@ -3,7 +3,7 @@ import { daysAt, type Pace } from './development';
 import { mean } from './waterTemperature';
 
 /** The species' figure counts as much as this many finished holds of the fishroom's own. */
-export const SPECIES_COUNTS_AS = 3;
+const SPECIES_COUNTS_AS = 3;
 
 /** A hold that ended in release: days from the spawn, and the mean temperature over them in °C. */
 export type FinishedHold = { days: number; meanC: number };

@@ -3,7 +3,7 @@ import type { Figure } from './figure';
 export type Range = readonly [low: number, high: number];
 export type LengthType = 'TL' | 'SL';
 /** Adult length in mm; `type` is null where the source does not say total or standard. */
-export type AdultLength = { readonly mm: number; readonly type: LengthType | null };
+type AdultLength = { readonly mm: number; readonly type: LengthType | null };
 
 /** How the young are cared for until they feed. Only a maternal mouthbrooder may be stripped. */
 export const BREEDING_MODES = [
@@ -39,8 +39,8 @@ export type Kin =
   | 'caveSpawner';
 
 /** Who fathers a brood. `habit` null: not known. `says` is the finding in words. */
-export type Paternity = { readonly habit: 'single' | 'mixed' | null; readonly says: string };
-export type Maturity = {
+type Paternity = { readonly habit: 'single' | 'mixed' | null; readonly says: string };
+type Maturity = {
   readonly what: string;
   readonly mm?: number;
   readonly maleMm?: number;
@@ -50,7 +50,7 @@ export type Maturity = {
 };
 /** W = a L^b in grams and centimetres of total length. */
 export type LengthWeight = { readonly a: number; readonly b: number };
-export type GrowthPoint = {
+type GrowthPoint = {
   readonly linfMm: number;
   readonly kPerYear: number;
   readonly type: LengthType;

@@ -1,5 +1,5 @@
 /** What a finding is about. */
-export type FindingOf =
+type FindingOf =
   | 'temperature'
   | 'ph'
   | 'hardness'

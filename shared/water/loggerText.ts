@@ -6,7 +6,7 @@ import { celsiusOf } from '../units';
 export type DateOrder = 'dayFirst' | 'monthFirst';
 
 /** One day of a logger's readings in °C. */
-export type LoggedDay = { on: Day; meanC: number; lowestC: number; highestC: number; readings: number };
+type LoggedDay = { on: Day; meanC: number; lowestC: number; highestC: number; readings: number };
 
 export type LoggerResult = {
   days: LoggedDay[];

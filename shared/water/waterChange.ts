@@ -3,7 +3,7 @@ import { UNIONISED_LIMITS, unionisedAmmonia } from './ammonia';
 import { NITRATE_LIMITS, NITRITE_LIMITS, type WaterTest } from './waterFindings';
 
 /** The largest part of the water to change at once; more is done in steps. Common practice, no source. */
-export const MOST_AT_ONCE = 50;
+const MOST_AT_ONCE = 50;
 
 export const WATER_CHANGE_CAUTION =
   'Unplug heater and pump before the water falls and before reaching in. Match temperature and pH, and treat tap water as its label says.';
