@@ -80,23 +80,25 @@ function printedRuns({ text, face }: TextMark): Printed[] {
   );
 }
 
+/** Composing letters of parts is off: it would print "ị" as two glyphs, the second of which no reader can copy. */
+const FEATURES = { tnum: true, kern: true, ccmp: false };
+// pdfkit hands features on to fontkit, which takes them by name as well; pdfkit's types know the list alone.
+const featureList = FEATURES as unknown as PDFKit.Mixins.OpenTypeFeatures[];
+
 function paintText(doc: Doc, mark: TextMark): void {
   const runs = printedRuns(mark);
-  const options = {
+  const options: PDFKit.Mixins.TextOptions = {
     lineBreak: false,
     baseline: 'alphabetic',
-    features: ['tnum', 'kern'],
+    features: featureList,
     characterSpacing: pt(mark.tracking * mark.sizeMm),
-  } as const;
+  };
   doc.fontSize(pt(mark.sizeMm)).fillColor(INKS[mark.ink]);
-  const widths = runs.map((run) =>
-    doc.font(run.file).widthOfString(run.text, { ...options, features: [...options.features] }),
-  );
+  const widths = runs.map((run) => doc.font(run.file).widthOfString(run.text, options));
   const width = widths.reduce((sum, each) => sum + each, 0);
-  const share = { start: 0, middle: 0.5, end: 1 }[mark.anchor];
-  let x = pt(mark.x) - width * share;
+  let x = pt(mark.x) - width * { start: 0, middle: 0.5, end: 1 }[mark.anchor];
   for (const [i, run] of runs.entries()) {
-    doc.font(run.file).text(run.text, x, pt(mark.y), { ...options, features: [...options.features] });
+    doc.font(run.file).text(run.text, x, pt(mark.y), options);
     x += widths[i] ?? 0;
   }
 }

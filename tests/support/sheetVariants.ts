@@ -33,25 +33,21 @@ const withSires = (count: number): SheetContent => ({
   ],
 });
 
+const { id, kind, code, sex, born, origin, generation, strain, room } = brood;
+
+/** A batch of two broods: each fish comes of one pair or of the other. */
 const mixedBatch: SheetContent = {
   ...duboisi,
   ancestry: [
     {
-      ...wild(20, 'DUMA-25H', 'male'),
-      kind: 'brood',
-      sex: 'unsexed',
-      origin: 'bred',
+      ...{ id, kind, code, sex, born, origin, generation, strain, room },
       from: [
         { sire: { kind: 'known', id: animal(10) }, dam: { kind: 'known', id: animal(12) }, weight: 21 },
         { sire: { kind: 'known', id: animal(11) }, dam: { kind: 'known', id: animal(2) }, weight: 9 },
       ],
     },
     ...ancestors,
-  ].map((entry) => {
-    if (!('from' in entry)) return entry;
-    const { from, id, kind, code, sex, born, origin, generation, strain, room } = entry;
-    return { id, kind, code, sex, born, origin, generation, strain, room, from };
-  }),
+  ],
 };
 
 const oneFish: SheetContent = {
