@@ -51,7 +51,8 @@ export async function roomScope(req: Request, needs: Needs): Promise<{ scope: Sc
     .executeTakeFirst();
   if (!room) throw notFound();
   if (needs !== 'public' && needs !== 'signedIn' && needs !== 'buyer' && !may(room.role, needs)) {
-    signedIn.log.warn({ event: 'forbidden', accountId: signedIn.accountId, roomId, needs }, 'refused by role');
+    const { accountId, address } = signedIn;
+    signedIn.log.warn({ event: 'forbidden', outcome: 'refused', accountId, roomId, needs, address }, 'refused by role');
     throw new Refusal('forbidden', 'Your role in this fishroom does not allow that. Ask an owner.');
   }
   const { role, timeZone, currency, changeNumber } = room;

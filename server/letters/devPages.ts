@@ -47,9 +47,9 @@ export function devLetterPages(app: Express, house: House): void {
   });
   app.get('/dev/letters.json', async (req, res) => {
     await sendWaiting(house);
-    const to = typeof req.query['to'] === 'string' ? req.query['to'] : '';
+    const to = typeof req.query['to'] === 'string' ? req.query['to'].toLowerCase() : '';
     const letters = sink.letters
-      .filter((letter) => letter.to.includes(to))
+      .filter((letter) => letter.to.toLowerCase().includes(to))
       .map(({ id, at, to: address, subject, text, html }) => ({ id, at, to: address, subject, text, html }));
     res.set('Cache-Control', 'no-store').json({ letters });
   });

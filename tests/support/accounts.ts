@@ -99,7 +99,7 @@ export async function memberOf(app: TestApp, roomId: string, role: Role): Promis
 /** The letters that reached an address, oldest first, after everything that waited has been sent. */
 export async function lettersTo(app: TestApp, email: string) {
   while ((await sendWaiting(app.house)) > 0);
-  return (app.house.sink?.letters ?? []).filter((letter) => letter.to.includes(email));
+  return (app.house.sink?.letters ?? []).filter((letter) => letter.to.toLowerCase().includes(email.toLowerCase()));
 }
 
 /** The secret word of the link in the newest letter to an address. */

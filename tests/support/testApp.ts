@@ -48,7 +48,8 @@ export type Person = {
 
 export const START = '2026-05-14T09:12:00.000Z';
 
-export async function testApp(changes: Partial<Config> = {}): Promise<TestApp> {
+/** `log`: where the server's log goes, for tests that read it. */
+export async function testApp(changes: Partial<Config> = {}, log?: House['log']): Promise<TestApp> {
   const folder = mkdtempSync(join(tmpdir(), 'kinwater-'));
   let nowMs = Date.parse(START);
   const config: Config = {
@@ -62,6 +63,7 @@ export async function testApp(changes: Partial<Config> = {}): Promise<TestApp> {
     ...changes,
   };
   const { house, close } = await buildHouse(config, { now: () => new Date(nowMs) });
+  if (log) house.log = log;
   const server: Server = createServer(appOf(house));
   await new Promise<void>((ready) => server.listen(0, '127.0.0.1', ready));
   const { port } = server.address() as AddressInfo;
