@@ -2,7 +2,7 @@ import { FormikProvider, type FormikValues, type useFormik } from 'formik';
 import { type ReactNode, useEffect, useRef } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { space } from '@/components/theme/space';
-import { Notice } from '@/components/ui/Notice';
+import { FormNoticeBlock, NoticeContext } from './FormNotice';
 import { focusFirstError } from './focusFirstError';
 import type { FormNotice } from './useSchemaForm';
 
@@ -12,11 +12,13 @@ type Props<Draft extends FormikValues> = {
   notice: FormNotice | null;
   /** Names the form for a screen reader: "Holding seen". */
   label: string;
+  /** Round a whole `Screen` whose dock has the save button; what is refused then stands above that button. */
+  page?: boolean;
   children: ReactNode;
 };
 
 /** One column of fields. After a refused save the focus moves to the first field with an error. */
-export function Form<Draft extends FormikValues>({ form, notice, label, children }: Props<Draft>) {
+export function Form<Draft extends FormikValues>({ form, notice, label, page = false, children }: Props<Draft>) {
   const box = useRef<View>(null);
   const answered = useRef(0);
   const { submitCount, isSubmitting, isValidating, errors } = form;
@@ -25,16 +27,24 @@ export function Form<Draft extends FormikValues>({ form, notice, label, children
     answered.current = submitCount;
     if (Object.keys(errors).length > 0) focusFirstError(box.current);
   }, [submitCount, isSubmitting, isValidating, errors]);
-  const whole: unknown = 'form' in errors ? errors['form'] : undefined;
   return (
     <FormikProvider value={form}>
-      <View ref={box} role="form" aria-label={label} style={styles.form}>
-        {children}
-        {typeof whole === 'string' ? <Notice tone="look" words={whole} /> : null}
-        {notice ? <Notice tone={notice.kind === 'odd' ? 'look' : 'act'} words={notice.words} alert /> : null}
-      </View>
+      <NoticeContext value={page ? notice : null}>
+        <View ref={box} role="form" aria-label={label} style={page ? styles.page : styles.form}>
+          {children}
+          {page ? null : <FormNoticeBlock notice={notice} />}
+        </View>
+      </NoticeContext>
     </FormikProvider>
   );
 }
 
-const styles = StyleSheet.create({ form: { gap: space[5] } });
+const styles = StyleSheet.create({
+  form: { gap: space[5] },
+  page: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minHeight: 0 },
+});
+
+/** Fields one under the other inside a page's form. */
+export function Fields({ children }: { children: ReactNode }) {
+  return <View style={styles.form}>{children}</View>;
+}

@@ -32,6 +32,8 @@ export type RowProps = MaybeAction & {
   trailing?: ReactNode;
   /** Under the lines, over the whole width right of the rule: day-bars. */
   children?: ReactNode;
+  /** At the far right, in the middle of the row's height: an arrow. */
+  end?: ReactNode;
   /** A button of its own at the end, outside the row's press. */
   action?: ReactNode;
   /** Words in the middle of the row's height. */
@@ -106,6 +108,7 @@ function RowBody(props: RowProps) {
         </View>
         {props.children}
       </View>
+      {props.end ? <View style={styles.lead}>{props.end}</View> : null}
     </>
   );
 }

@@ -4,9 +4,15 @@ const STEPS: Record<string, number> = { ArrowRight: 1, ArrowDown: 1, ArrowLeft: 
 
 /**
  * Arrow keys, Home and End move the focus among the members of a group, as radios, tabs and menus do in a browser.
- * `press` also chooses the member; `columns` makes up and down jump a line of a grid.
+ * `press` also chooses the member; `columns` makes up and down jump a line of a grid; `upDown` leaves the other keys to
+ * the text field among the members.
  */
-export function moveFocus(event: WebKeyEvent, selector: string, how: { press?: boolean; columns?: number } = {}): void {
+export function moveFocus(
+  event: WebKeyEvent,
+  selector: string,
+  how: { press?: boolean; columns?: number; upDown?: boolean } = {},
+): void {
+  if (how.upDown && event.key !== 'ArrowUp' && event.key !== 'ArrowDown') return;
   const group = event.currentTarget;
   if (typeof HTMLElement === 'undefined' || !(group instanceof HTMLElement)) return;
   const members = [...group.querySelectorAll<HTMLElement>(selector)].filter((m) => m.ariaDisabled !== 'true');

@@ -1,0 +1,44 @@
+import { InputBox } from '@/components/form/InputBox';
+import { useIsWide } from '@/components/theme/breakpoint';
+import { Icon } from './Icon';
+import { IconButton } from './IconButton';
+import { Kbd } from './Kbd';
+
+type Props = {
+  value: string;
+  onChange: (value: string) => void;
+  /** What can be found: "Fish, brood, tank, order". */
+  placeholder: string;
+  autoFocus?: boolean;
+  onSubmit?: () => void;
+};
+
+/** Search within a list or the whole fishroom; the key / goes to it. */
+export function SearchField({ value, onChange, placeholder, autoFocus, onSubmit }: Props) {
+  const wide = useIsWide();
+  return (
+    <InputBox
+      value={value}
+      onChangeText={onChange}
+      onSubmitEditing={onSubmit}
+      inputMode="search"
+      enterKeyHint="search"
+      autoComplete="off"
+      autoCapitalize="none"
+      autoCorrect={false}
+      autoFocus={autoFocus}
+      placeholder={placeholder}
+      aria-label={`Search: ${placeholder}`}
+      lead={<Icon name="search" tone="soft" />}
+      end={
+        value !== '' ? (
+          <IconButton icon="close" label="Clear the search" onPress={() => onChange('')} />
+        ) : wide ? (
+          <KeyHint />
+        ) : undefined
+      }
+    />
+  );
+}
+
+const KeyHint = () => <Kbd letter="/" spaced />;
