@@ -1,0 +1,93 @@
+import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
+import { useBreakpoint } from '@/components/theme/breakpoint';
+import { Aside } from '@/components/ui/Aside';
+import { Button } from '@/components/ui/Button';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { ErrorState } from '@/components/ui/ErrorState';
+import { IconButton } from '@/components/ui/IconButton';
+import { Loading } from '@/components/ui/Loading';
+import { Screen } from '@/components/ui/Screen';
+import { Section } from '@/components/ui/Section';
+import { WithAside } from '@/components/ui/TwoPane';
+import { useRoom } from '@/hooks/useRoom';
+import { formatDay } from '@/shared/days';
+import { may } from '@/shared/roles';
+import type { TodayFacts } from '@/shared/today/facts';
+import { type HoldToday, type Today, todayOf } from '@/shared/today/todayOf';
+import { DueRows } from './DueRows';
+import { LeavingRows } from './LeavingRows';
+import { todayQuery } from './queries';
+import { TreatmentRows } from './TreatmentRows';
+import { Troubles } from './Troubles';
+
+type Props = {
+  /** The rows of the holds; another feature's, set in by the route. */
+  holdRows: (holds: HoldToday[]) => ReactNode;
+};
+
+/** What needs doing, worked out and not typed. */
+export function TodayScreen({ holdRows }: Props) {
+  const room = useRoom();
+  const { data: facts, error, refetch } = useQuery(todayQuery(room.id));
+  const title = formatDay(room.today, room.today);
+  if (!facts) {
+    return (
+      <Screen title={title}>
+        {error ? (
+          <ErrorState title="Today could not be loaded" words={error.message} onRetry={() => void refetch()} />
+        ) : (
+          <Loading label="Loading today" />
+        )}
+      </Screen>
+    );
+  }
+  const today = todayOf(facts, room.units);
+  return (
+    <Screen title={title} actions={<IconButton icon="search" label="Search" href={`/r/${room.id}/stock`} />}>
+      <TodayParts facts={facts} today={today} holdRows={holdRows} />
+    </Screen>
+  );
+}
+
+function TodayParts({ facts, today, holdRows }: Props & { facts: TodayFacts; today: Today }) {
+  const full = useBreakpoint() === 'full';
+  const holds = <Holding today={today} females={facts.females} holdRows={holdRows} />;
+  const side = (
+    <>
+      <Troubles today={today} />
+      <LeavingRows orders={today.leaving} today={facts.today} />
+      <DueRows due={today.due} today={facts.today} />
+      <TreatmentRows care={today.treatments} tanks={facts.tanks} today={facts.today} />
+    </>
+  );
+  if (full) return <WithAside aside={<Aside label="Due today">{side}</Aside>}>{holds}</WithAside>;
+  return (
+    <>
+      <Troubles today={today} />
+      {holds}
+      <LeavingRows orders={today.leaving} today={facts.today} />
+      <DueRows due={today.due} today={facts.today} />
+      <TreatmentRows care={today.treatments} tanks={facts.tanks} today={facts.today} />
+    </>
+  );
+}
+
+function Holding({ today, females, holdRows }: Props & { today: Today; females: number }) {
+  const room = useRoom();
+  const { holds } = today;
+  const aside = females > 0 ? `${holds.length} of ${females} females, next date first` : `${holds.length}`;
+  return (
+    <Section title="Holding" aside={holds.length > 0 ? aside : undefined}>
+      {holds.length > 0 ? (
+        holdRows(holds)
+      ) : (
+        <EmptyState small title="Nobody holds" words="When you see a full mouth, record it: the days count from there.">
+          {may(room.role, 'entry:record') ? (
+            <Button label="Holding seen" small href={`/r/${room.id}/record/holding`} />
+          ) : null}
+        </EmptyState>
+      )}
+    </Section>
+  );
+}
