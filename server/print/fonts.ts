@@ -1,6 +1,11 @@
+import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
+import type PDFDocument from 'pdfkit';
 import { cutOf, type LetterSet } from '../../shared/print/measure';
 import type { Face } from '../../shared/print/page';
+import { sfntOf } from './sfnt';
+
+export type PdfDoc = InstanceType<typeof PDFDocument>;
 
 const require = createRequire(import.meta.url);
 
@@ -17,7 +22,7 @@ const FILES: Record<LetterSet, { family: string; subset: string }> = {
   codeExt: { family: 'atkinson-hyperlegible-mono', subset: 'latin-ext' },
 };
 
-const CUTS: Record<string, string> = {
+const CUTS: Record<Face, string> = {
   regular: '400-normal',
   italic: '400-italic',
   semibold: '600-normal',
@@ -26,9 +31,21 @@ const CUTS: Record<string, string> = {
   code: '600-normal',
 };
 
-/** The font file that prints the letters of a set in a face. */
-export function fontFile(set: LetterSet, face: Face): string {
+const unpacked = new Map<string, Buffer>();
+
+/** Unpacked once and kept: about 2 MB for all of them. */
+function fontBytes(file: string): Buffer {
+  const known = unpacked.get(file);
+  if (known) return known;
+  const bytes = sfntOf(readFileSync(require.resolve(`@fontsource/${file}.woff`)));
+  unpacked.set(file, bytes);
+  return bytes;
+}
+
+/** The font that prints the letters of a set in a face, registered with the document under the name that is returned. */
+export function fontFor(doc: PdfDoc, set: LetterSet, face: Face): string {
   const { family, subset } = FILES[set];
-  const cut = CUTS[cutOf(set, face)] ?? CUTS['regular'];
-  return require.resolve(`@fontsource/${family}/files/${family}-${subset}-${cut}.woff`);
+  const file = `${family}/files/${family}-${subset}-${CUTS[cutOf(set, face)]}`;
+  doc.registerFont(file, fontBytes(file));
+  return file;
 }

@@ -1,4 +1,3 @@
-import type PDFDocument from 'pdfkit';
 import QRCode from 'qrcode';
 import { runsOf } from '../../shared/print/measure';
 import {
@@ -13,9 +12,7 @@ import {
   type TextMark,
 } from '../../shared/print/page';
 import { qrRuns } from '../../shared/print/qrRuns';
-import { fontFile } from './fonts';
-
-type Doc = InstanceType<typeof PDFDocument>;
+import { type PdfDoc as Doc, fontFor } from './fonts';
 
 const PT_PER_MM = 72 / 25.4;
 const pt = (mm: number): number => mm * PT_PER_MM;
@@ -70,13 +67,13 @@ function paintPicture(doc: Doc, { x, y, widthMm, heightMm }: PictureMark, pictur
   if (picture) doc.image(picture, pt(x), pt(y), { fit: [pt(widthMm), pt(heightMm)] });
 }
 
-type Printed = { text: string; file: string };
+type Printed = { text: string; font: string };
 
-function printedRuns({ text, face }: TextMark): Printed[] {
+function printedRuns(doc: Doc, { text, face }: TextMark): Printed[] {
   return runsOf(text, face).map((run) =>
     run.set === null
-      ? { text: REPLACEMENT.repeat([...run.text].length), file: fontFile('otherMarks', face) }
-      : { text: run.text, file: fontFile(run.set, face) },
+      ? { text: REPLACEMENT.repeat([...run.text].length), font: fontFor(doc, 'otherMarks', face) }
+      : { text: run.text, font: fontFor(doc, run.set, face) },
   );
 }
 
@@ -86,7 +83,7 @@ const FEATURES = { tnum: true, kern: true, ccmp: false };
 const featureList = FEATURES as unknown as PDFKit.Mixins.OpenTypeFeatures[];
 
 function paintText(doc: Doc, mark: TextMark): void {
-  const runs = printedRuns(mark);
+  const runs = printedRuns(doc, mark);
   const options: PDFKit.Mixins.TextOptions = {
     lineBreak: false,
     baseline: 'alphabetic',
@@ -94,11 +91,11 @@ function paintText(doc: Doc, mark: TextMark): void {
     characterSpacing: pt(mark.tracking * mark.sizeMm),
   };
   doc.fontSize(pt(mark.sizeMm)).fillColor(INKS[mark.ink]);
-  const widths = runs.map((run) => doc.font(run.file).widthOfString(run.text, options));
+  const widths = runs.map((run) => doc.font(run.font).widthOfString(run.text, options));
   const width = widths.reduce((sum, each) => sum + each, 0);
   let x = pt(mark.x) - width * { start: 0, middle: 0.5, end: 1 }[mark.anchor];
   for (const [i, run] of runs.entries()) {
-    doc.font(run.file).text(run.text, x, pt(mark.y), options);
+    doc.font(run.font).text(run.text, x, pt(mark.y), options);
     x += widths[i] ?? 0;
   }
 }

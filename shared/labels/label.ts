@@ -1,5 +1,5 @@
 /** A tank's label names the tank and never the fish, so that it stays right when fish move. */
-export type TankLabel = {
+type TankLabel = {
   kind: 'tank';
   code: string;
   /** "Left rack, middle". */
@@ -13,7 +13,7 @@ export type TankLabel = {
 };
 
 /** A colony's label moves with the colony and says its strain. */
-export type ColonyLabel = {
+type ColonyLabel = {
   kind: 'colony';
   code: string;
   /** The strain's scientific name; null for a colony of mixed or doubtful strain. */

@@ -14,7 +14,7 @@ type Line = { pieces: Piece[]; widthMm: number };
 export const CAP_HEIGHT = 0.668;
 const LINE_HEIGHT = 1.36;
 
-export const trackingOf = (face: Face, sizeMm: number): number => {
+const trackingOf = (face: Face, sizeMm: number): number => {
   if (face === 'code') return -0.02;
   return sizeMm > 7 ? -0.02 : 0;
 };

@@ -11,7 +11,7 @@ const TEXT_SETS = ['latin', 'latinExt', 'otherLatin', 'vietnamese', 'cyrillic', 
 const CODE_SETS = ['code', 'codeExt', 'otherLatin', 'vietnamese', 'cyrillic', 'greek', 'otherMarks'] as const;
 
 /** The cut a set is printed in: sets of another family have a regular and a bold one only. */
-export function cutOf(set: LetterSet, face: Face): string {
+export function cutOf(set: LetterSet, face: Face): Face {
   const cuts: Record<string, string> = LETTERS[set].widths;
   if (face in cuts) return face;
   return face === 'regular' || face === 'italic' ? 'regular' : 'bold';

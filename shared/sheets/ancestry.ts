@@ -1,6 +1,7 @@
 import * as z from 'zod/mini';
 import { DayText } from '../days';
 import { Id } from '../ids';
+import { type Parentage, pairsOf } from '../lineage/pedigree';
 import { words } from './wording';
 
 /**
@@ -29,13 +30,12 @@ const Candidate = z.strictObject({ id: z.nullable(AnimalId), weight: Weight });
 const Candidates = z.array(Candidate).check(z.minLength(1), z.maxLength(200));
 
 /** As in `shared/lineage`: one known animal, none known, one of several, or each young its own draw. */
-export const SheetParentage = z.discriminatedUnion('kind', [
+const SheetParentage = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('known'), id: AnimalId }),
   z.strictObject({ kind: z.literal('unknown') }),
   z.strictObject({ kind: z.literal('oneOf'), key: DrawKey, candidates: Candidates }),
   z.strictObject({ kind: z.literal('mixed'), candidates: Candidates }),
 ]);
-export type SheetParentage = z.output<typeof SheetParentage>;
 
 /** Filial generation from wild founders: F0 is wild, a range where parents are uncertain, null when it can't be told. */
 export const Generation = z.nullable(
@@ -81,16 +81,15 @@ export const Ancestry = z.array(AncestryEntry).check(
   }),
 );
 
-const idsOf = (parentage: SheetParentage): AnimalId[] => {
+const idsOf = (parentage: Parentage): AnimalId[] => {
   if (parentage.kind === 'known') return [parentage.id];
   if (parentage.kind === 'unknown') return [];
   return parentage.candidates.flatMap((candidate) => candidate.id ?? []);
 };
 
 /** Every animal that may be a parent of the entry. */
-export function possibleParents(entry: AncestryEntry): AnimalId[] {
-  const pairs = 'from' in entry ? entry.from : [entry];
-  return pairs.flatMap((pair) => [...idsOf(pair.sire), ...idsOf(pair.dam)]);
+function possibleParents(entry: AncestryEntry): AnimalId[] {
+  return pairsOf(entry).flatMap((pair) => [...idsOf(pair.sire), ...idsOf(pair.dam)]);
 }
 
 /** What is wrong with an ancestry as a whole, in words: an animal twice, a parent left out, a loop. Null when it is sound. */

@@ -28,7 +28,7 @@ const fact = (label: string, text: string): Fact => ({ label, text: [{ text, fac
 /** What the fish are, where their line comes from, how inbred they are; with the photo beside it when there is one. */
 export function identityBlock(content: SheetContent, widthMm: number, setting: Setting, hasPicture: boolean): Block {
   const shown = hasPicture ? content.photos.shown : null;
-  const facts = factsOf(content);
+  const facts = [...factsOf(content), ...photoFacts(content.photos.count, shown !== null)];
   if (shown) {
     const width = widthMm - PICTURE_MM - GUTTER_MM;
     const left = [...nameBlocks(content.strain, width), ...factRows(facts, width, setting)];
@@ -177,6 +177,10 @@ function takenFact({ how, on, holdDay }: NonNullable<SheetContent['birth']['take
 
 const raisedFact = ({ alive, of }: { alive: number; of: number }): Fact =>
   fact('Raised', `${alive} of ${of}, ${shareWords(alive / of)}`);
+
+/** Said where no photo is printed. */
+const photoFacts = (count: number, printed: boolean): Fact[] =>
+  count > 0 && !printed ? [fact('Photos', `${count} recorded`)] : [];
 
 /** The photo in its own proportions, no taller than the setting allows, and what it shows. */
 function pictureBlocks(shown: NonNullable<SheetContent['photos']['shown']>, count: number, setting: Setting): Block[] {

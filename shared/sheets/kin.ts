@@ -1,4 +1,5 @@
-import type { AncestryEntry, AnimalId, SheetParentage } from './ancestry';
+import { type Parentage, pairsOf } from '../lineage/pedigree';
+import type { AncestryEntry, AnimalId } from './ancestry';
 import { generationWords, shareWords } from './sayings';
 
 type Role = 'sire' | 'dam';
@@ -21,7 +22,7 @@ export type KinSlot = {
 const SHOWN_CANDIDATES = 12;
 const CERTAIN = 1 - 1e-9;
 
-function possibleOf(parentage: SheetParentage): Possible[] {
+function possibleOf(parentage: Parentage): Possible[] {
   if (parentage.kind === 'known') return [{ id: parentage.id, share: 1 }];
   if (parentage.kind === 'unknown') return [{ id: null, share: 1 }];
   const all = parentage.candidates.reduce((sum, { weight }) => sum + weight, 0);
@@ -29,8 +30,8 @@ function possibleOf(parentage: SheetParentage): Possible[] {
 }
 
 /** Who may be the sire, or the dam, with the shares of all pairs added up; likeliest first, nobody known last. */
-export function possibleParentsOf(entry: AncestryEntry, role: Role): Possible[] {
-  const pairs = 'from' in entry ? entry.from : [{ sire: entry.sire, dam: entry.dam, weight: 1 }];
+function possibleParentsOf(entry: AncestryEntry, role: Role): Possible[] {
+  const pairs = pairsOf(entry);
   const all = pairs.reduce((sum, { weight }) => sum + weight, 0);
   const shares = new Map<AnimalId | null, number>();
   for (const pair of pairs) {
@@ -148,7 +149,7 @@ const namesOf = (entry: AncestryEntry): AnimalId[] =>
   (['sire', 'dam'] as const).flatMap((role) => possibleParentsOf(entry, role).flatMap(({ id }) => id ?? []));
 
 /** The pairs behind a mixed batch, when there are several: shares of parents alone would lose who goes with whom. */
-export function pairsOf(
+export function pairsBehind(
   ancestry: AncestryEntry[],
   subjectId: AnimalId,
 ): { sires: string[]; dams: string[]; share: number }[] {
@@ -156,7 +157,6 @@ export function pairsOf(
   const subject = ancestry.find((entry) => entry.id === subjectId);
   if (!subject || !('from' in subject) || subject.from.length < 2) return [];
   const all = subject.from.reduce((sum, { weight }) => sum + weight, 0);
-  const names = (parentage: SheetParentage) =>
-    possibleOf(parentage).map(({ id }) => (id && codes.get(id)) || 'not known');
+  const names = (parentage: Parentage) => possibleOf(parentage).map(({ id }) => (id && codes.get(id)) || 'not known');
   return subject.from.map(({ sire, dam, weight }) => ({ sires: names(sire), dams: names(dam), share: weight / all }));
 }

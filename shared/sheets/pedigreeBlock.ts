@@ -2,7 +2,7 @@ import type { Block } from '../print/flow';
 import type { Paragraph } from '../print/lines';
 import type { LineMark, Mark, Point, Sex } from '../print/page';
 import type { SheetContent } from './content';
-import { type Kin, type KinSlot, kinOf, pairsOf } from './kin';
+import { type Kin, type KinSlot, kinOf, pairsBehind } from './kin';
 import { plain, type Setting, smallText } from './parts';
 import {
   type Branch,
@@ -174,7 +174,7 @@ function notesOf(content: SheetContent, kin: Kin): string[] {
     return [subject?.origin === 'wild' ? 'Wild caught: no parents are known.' : 'No parents are recorded.'];
   const unsure = kin.parents.some((slot) => !slot.sure || slot.parents.some((each) => !each.sure));
   const draws = subject && 'sire' in subject ? [drawWords(subject.sire, 'sire'), drawWords(subject.dam, 'dam')] : [];
-  const pairs = pairsOf(content.ancestry, content.subject.id).map(
+  const pairs = pairsBehind(content.ancestry, content.subject.id).map(
     ({ sires, dams, share }) => `${joinOr(sires)} with ${joinOr(dams)} ${shareWords(share)}`,
   );
   return [

@@ -1,5 +1,6 @@
 import { ageWords, daysBetween, formatDate, formatShortDay } from '../days';
-import type { Generation, SheetParentage } from './ancestry';
+import type { Parentage } from '../lineage/pedigree';
+import type { Generation } from './ancestry';
 import type { SheetContent, SheetInbreeding } from './content';
 
 /*
@@ -36,7 +37,7 @@ const coefficient = (f: number): string => (f === 0 ? '0' : f.toFixed(3));
 const SHOWN_OUTCOMES = 4;
 
 /** "0 at 79 %, 0.125 at 13 %, 0.250 at 8 %", likeliest first where there are too many to list. */
-export function outcomesWords(outcomes: NonNullable<SheetInbreeding['outcomes']>): string {
+function outcomesWords(outcomes: NonNullable<SheetInbreeding['outcomes']>): string {
   const say = ({ f, probability }: (typeof outcomes)[number]) =>
     `${coefficient(f)}${NB}at${NB}${shareWords(probability)}`;
   if (outcomes.length <= SHOWN_OUTCOMES)
@@ -111,7 +112,7 @@ export function headsWords({ heads }: SheetContent['subject']): string {
 }
 
 /** What an uncertain parentage means for the young: one draw for all of them, or one each. */
-export function drawWords(parentage: SheetParentage, role: 'sire' | 'dam'): string | null {
+export function drawWords(parentage: Parentage, role: 'sire' | 'dam'): string | null {
   if (parentage.kind === 'oneOf') return `One ${role} for all of them; which one is not certain.`;
   if (parentage.kind === 'mixed') return `Each of them may have another ${role}.`;
   return null;

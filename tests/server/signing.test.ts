@@ -122,7 +122,7 @@ describe.each([
   it('a sheet with one figure changed is altered', async () => {
     const [head, body = '', signature] = (await signed()).split('.');
     const text = new TextDecoder().decode(base64url.decode(body));
-    const better = base64url.encode(text.replace('"f":0.036', '"f":0.006'));
+    const better = base64url.encode(text.replace('"f":0.037', '"f":0.007'));
     expect(better).not.toBe(body);
     expect(await verify([head, better, signature].join('.'), found)).toEqual({ state: 'altered', keyId: THUMBPRINT });
   });

@@ -1,4 +1,5 @@
 import { describe, expect, it, test } from 'vitest';
+import { inbreeding } from '../../shared/lineage/inbreeding';
 import { ancestryFault, animalId, splitAnimalId } from '../../shared/sheets/ancestry';
 import { cautionsFor } from '../../shared/sheets/cautions';
 import { SheetContent } from '../../shared/sheets/content';
@@ -92,6 +93,13 @@ describe('the ancestry as a whole', () => {
     expect(ancestryFault([...young, wild(1, 'A', 'male'), wild(2, 'B', 'female')])).toBeNull();
     expect(performance.now() - start).toBeLessThan(1000);
   });
+});
+
+test('the ancestry is a pedigree as it stands: another fishroom works out the same F from it', () => {
+  // By hand: the first male is no kin of the dam. The second, 7 days of 33, is her brother by W04, and by W03 at 0.4:
+  // kinship (0.4 / 2 + 1 / 2) / 4 = 0.175, so F = 7 / 33 * 0.175 = 0.0371.
+  expect(inbreeding(duboisi.ancestry).get(duboisi.subject.id)).toBeCloseTo(0.0371, 4);
+  expect(duboisi.inbreeding?.f).toBeCloseTo(0.0371, 4);
 });
 
 test('an animal’s id names its fishroom and itself, and nothing else passes for one', () => {

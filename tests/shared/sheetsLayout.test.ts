@@ -93,7 +93,7 @@ test('a sheet says who issued it, what the fish are, how inbred they are and how
     'wild caught, from Oduya Imports, Jun 2018, papers: invoice',
     '16 to 18 Oct 2025, 8 months old',
     '9 Nov 2025, day 24 of the hold',
-    'expected F = 0.036: 0 at 79 %, 0.125 at 13 %, 0.250 at 8 %',
+    'expected F = 0.037: 0 at 79 %, 0.125 at 13 %, 0.250 at 8 %',
     'equal to 2.0 full generations',
     '29 of 34, 85 %',
     'DUMA-A01 F1 · sire, 79 %',
@@ -172,7 +172,7 @@ test('what is not certain is dashed and what is certain is not', () => {
   ]);
 });
 
-test('a photo takes its place in its own proportions, and is not mentioned where it is missing', () => {
+test('a photo takes its place in its own proportions; where it is missing, only their number is said', () => {
   const shown = {
     caption: 'One of the brood, 4.6 cm',
     takenOn: '2026-05-03',
@@ -188,4 +188,5 @@ test('a photo takes its place in its own proportions, and is not mentioned where
   expect((picture[0]?.widthMm ?? 0) / (picture[0]?.heightMm ?? 1)).toBeCloseTo(1280 / 720, 6);
   expect(textOf(sheetPages(content, 'a4', { ...options, hasPicture: true }))).toContain('3May2026.Oneof3photos.');
   expect(textOf(sheetPages(content, 'a4', options))).not.toContain('Oneofthebrood');
+  expect(textOf(sheetPages(content, 'a4', options))).toContain('Photos3recorded');
 });

@@ -79,11 +79,12 @@ export const duboisi: SheetContent = {
   },
   generation: { low: 2, high: 2, oneParentWild: false },
   inbreeding: {
-    f: 0.036,
+    // 7 of 33 days the second male, whose kinship with the dam is (0.4 / 2 + 1 / 2) / 4.
+    f: (7 / 33) * 0.175,
     outcomes: [
-      { f: 0, probability: 0.79 },
-      { f: 0.125, probability: 0.13 },
-      { f: 0.25, probability: 0.08 },
+      { f: 0, probability: 26 / 33 },
+      { f: 0.125, probability: (7 / 33) * 0.6 },
+      { f: 0.25, probability: (7 / 33) * 0.4 },
     ],
     generationsKnown: 2,
   },
