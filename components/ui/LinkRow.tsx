@@ -9,10 +9,12 @@ type Props = Action & {
   icon?: IconName;
   /** Right before the arrow: a value, a count. */
   value?: string;
+  /** Shown in the detail beside. */
+  selected?: boolean;
 };
 
 /** A row that only leads on: settings, sub-pages. */
-export function LinkRow({ title, note, icon, value, href, onPress }: Props) {
+export function LinkRow({ title, note, icon, value, selected, href, onPress }: Props) {
   const action: Action = href === undefined ? { onPress: onPress ?? (() => {}) } : { href };
   return (
     <Row
@@ -23,6 +25,7 @@ export function LinkRow({ title, note, icon, value, href, onPress }: Props) {
       lead={icon ? <Icon name={icon} /> : undefined}
       state={value}
       end={<Icon name="next" tone="soft" />}
+      selected={selected}
       middle
     />
   );

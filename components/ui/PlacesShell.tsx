@@ -30,7 +30,7 @@ export function PlacesShell({ children, place, savedOpen, under, over, bare = fa
       {wide ? <Rail {...rail} /> : null}
       {!wide && !bare ? (
         <View dataSet={{ printHide: true }}>
-          <SavedLine state={rail.saved} place={place} onPress={rail.onSaved} open={savedOpen} />
+          <SavedLine state={rail.saved} place={place} onPress={rail.onSaved} open={savedOpen} onPlace={rail.onPerson} />
         </View>
       ) : null}
       <View style={styles.fill}>

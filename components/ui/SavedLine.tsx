@@ -1,5 +1,5 @@
 import { StyleSheet, View } from 'react-native';
-import { space } from '@/components/theme/space';
+import { space, target } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Icon } from './Icon';
 import type { IconName } from './iconMarks';
@@ -49,44 +49,63 @@ type Props = {
   /** Shows or hides what waits. */
   onPress?: () => void;
   open?: boolean;
+  /** The fishroom's name leads to the account and the other fishrooms. */
+  onPlace?: () => void;
 };
 
 /** The strip on top of a phone's screen. Taller and dashed without a signal. */
-export function SavedLine({ state, place, onPress, open = false }: Props) {
+export function SavedLine({ state, place, onPress, open = false, onPlace }: Props) {
   const theme = useTheme();
   const offline = state.kind === 'offline';
-  const body = (
-    <>
-      <View style={styles.left}>
-        <Icon name={savedIcon[state.kind]} tone={state.kind === 'refused' ? 'trouble' : 'soft'} />
-        <Text size={offline ? 'small' : 'label'} semi={!offline} strong={offline} tone={offline ? 'ink' : 'soft'}>
-          {savedWords(state)}
-        </Text>
-      </View>
-      {offline ? (
-        <Text size="small" semi style={styles.underlined}>
-          {open ? 'Hide' : 'Show'}
-        </Text>
-      ) : (
-        <Text size="label" semi tone="soft" align="right" style={styles.place}>
-          {place}
-        </Text>
-      )}
-    </>
-  );
   const look = offline
     ? [styles.strip, styles.offline, { backgroundColor: theme.sheet, borderColor: theme.control }]
     : styles.strip;
   return (
-    <View role="status" aria-live="polite">
-      {onPress ? (
-        <Press onPress={onPress} aria-expanded={open} aria-label={`${savedWords(state)}. ${place}`} style={look}>
-          {body}
-        </Press>
-      ) : (
-        <View style={look}>{body}</View>
-      )}
+    <View style={look}>
+      <View role="status" aria-live="polite" style={offline ? styles.grow : styles.shrink}>
+        {onPress ? (
+          <Press onPress={onPress} aria-expanded={open} aria-label={savedWords(state)} style={styles.state}>
+            <State state={state} open={open} />
+          </Press>
+        ) : (
+          <View style={styles.state}>
+            <State state={state} />
+          </View>
+        )}
+      </View>
+      {offline ? null : <PlaceWords place={place} onPlace={onPlace} />}
     </View>
+  );
+}
+
+function State({ state, open }: { state: SavedState; open?: boolean }) {
+  const offline = state.kind === 'offline';
+  return (
+    <>
+      <Icon name={savedIcon[state.kind]} tone={state.kind === 'refused' ? 'trouble' : 'soft'} />
+      <Text size={offline ? 'small' : 'label'} semi={!offline} strong={offline} tone={offline ? 'ink' : 'soft'}>
+        {savedWords(state)}
+      </Text>
+      {offline && open !== undefined ? (
+        <Text size="small" semi style={styles.underlined}>
+          {open ? 'Hide' : 'Show'}
+        </Text>
+      ) : null}
+    </>
+  );
+}
+
+function PlaceWords({ place, onPlace }: { place: string; onPlace: (() => void) | undefined }) {
+  const words = (
+    <Text size="label" semi tone="soft" align="right" cut>
+      {place}
+    </Text>
+  );
+  if (!onPlace) return <View style={styles.shrink}>{words}</View>;
+  return (
+    <Press onPress={onPlace} aria-label={`Settings and account: ${place}`} style={[styles.shrink, styles.place]}>
+      {words}
+    </Press>
   );
 }
 
@@ -98,10 +117,12 @@ const styles = StyleSheet.create({
     gap: space[3],
     minHeight: 40,
     paddingHorizontal: space[4],
-    paddingVertical: space[1],
   },
   offline: { minHeight: 52, borderBottomWidth: 2, borderStyle: 'dashed' },
-  left: { flexDirection: 'row', alignItems: 'center', gap: space[2], flexShrink: 1 },
-  place: { flexShrink: 1 },
-  underlined: { textDecorationLine: 'underline', textUnderlineOffset: 4 },
+  state: { flexDirection: 'row', alignItems: 'center', gap: space[2], minHeight: 40 },
+  grow: { flexGrow: 1, flexShrink: 1 },
+  shrink: { flexShrink: 1 },
+  // Reaches over the strip's own edge, to be met by a thumb.
+  place: { minHeight: target.least, justifyContent: 'center', marginVertical: -4, paddingLeft: space[3] },
+  underlined: { marginLeft: 'auto', textDecorationLine: 'underline', textUnderlineOffset: 4 },
 });

@@ -1,15 +1,16 @@
+import { useQuery } from '@tanstack/react-query';
 import { Redirect, usePathname } from 'expo-router';
+import type { ReactNode } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Button } from '@/components/ui/Button';
 import { Mark } from '@/components/ui/Mark';
-import { Row } from '@/components/ui/Row';
-import { Rows } from '@/components/ui/Rows';
 import { Screen } from '@/components/ui/Screen';
 import { Text } from '@/components/ui/Text';
 import type { Me } from '@/shared/accounts/contract';
-import { ROLE_WORDS } from '@/shared/roles';
+import { meQuery } from './queries';
+import { RoomRows } from './RoomRows';
 
 /** To the door, and back here afterwards. */
 export function SignInFirst() {
@@ -36,6 +37,14 @@ export function Trouble({ error, again }: { error: Error; again: () => void }) {
   );
 }
 
+/** For pages that need somebody signed in, and no fishroom. */
+export function SignedInOnly({ children }: { children: ReactNode }) {
+  const { data: me, error, refetch } = useQuery(meQuery);
+  if (me === null) return <SignInFirst />;
+  if (me === undefined) return error ? <Trouble error={error} again={refetch} /> : <StillLoading />;
+  return children;
+}
+
 /** An address of a fishroom that this account does not belong to: whether it exists is not said. */
 export function RoomMissing({ me }: { me: Me }) {
   return (
@@ -46,24 +55,6 @@ export function RoomMissing({ me }: { me: Me }) {
       <RoomRows me={me} />
       <Button label="Start a fishroom" href="/new-fishroom" />
     </Screen>
-  );
-}
-
-/** The fishrooms of an account, each a way in. */
-export function RoomRows({ me, current }: { me: Me; current?: string }) {
-  return (
-    <Rows label="Fishrooms">
-      {me.rooms.map((room) => (
-        <Row
-          key={room.id}
-          href={`/r/${room.id}`}
-          label={`${room.name}, ${ROLE_WORDS[room.role].name}`}
-          title={room.name}
-          trailing={ROLE_WORDS[room.role].name}
-          selected={room.id === current}
-        />
-      ))}
-    </Rows>
   );
 }
 

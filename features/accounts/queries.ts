@@ -1,4 +1,4 @@
-import { queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { type QueryClient, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { call } from '@/features/call';
 import { getMe, type Me, signOut } from '@/shared/accounts/contract';
 import { Refusal } from '@/shared/refusal';
@@ -38,8 +38,14 @@ export function useSignOut() {
   return useMutation({
     mutationFn: () => call(signOut),
     onSuccess: () => {
-      cache.clear();
       cache.setQueryData(meQuery.queryKey, null);
+      forgetFetched(cache);
     },
   });
+}
+
+/** Everything that was fetched for whoever was signed in: the next person at this device must not see it. */
+export function forgetFetched(cache: QueryClient): void {
+  const kept = ['me', 'invitation'];
+  cache.removeQueries({ predicate: ({ queryKey }) => !kept.includes(String(queryKey[0])) });
 }

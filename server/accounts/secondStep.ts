@@ -1,5 +1,9 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { generateSecret, generateURI, verify } from 'otplib';
+import QRCode from 'qrcode';
+import type * as z from 'zod/mini';
+import type { startSecondStep } from '../../shared/accounts/security';
+import { qrRuns } from '../../shared/print/qrRuns';
 import { Refusal } from '../../shared/refusal';
 import { seal, unseal } from '../db/seal';
 import type { Asked, SignedIn } from '../scope';
@@ -14,13 +18,20 @@ const RECOVERY_CODES = 10;
 const wrongCode = () => new Refusal('forbidden', 'That code is not right', { code: 'That code is not right' });
 
 /** A fresh secret, kept beside the account but not in force. */
-export async function proposeSecret(asked: SignedIn): Promise<{ secret: string; address: string }> {
+export async function proposeSecret(asked: SignedIn): Promise<z.input<typeof startSecondStep.output>> {
   const account = await accountOf(asked);
   if (account.totpEnabledAt) throw new Refusal('conflict', 'The second step is on already. Turn it off first.');
   const secret = generateSecret();
   const totpSecret = seal(asked.house.config, PURPOSE, secret);
   await asked.db.updateTable('account').set({ totpSecret }).where('id', '=', account.id).execute();
-  return { secret, address: generateURI({ issuer: 'Kinwater', label: account.email, secret }) };
+  const address = generateURI({ issuer: 'Kinwater', label: account.email, secret });
+  return { secret, address, square: squareOf(address) };
+}
+
+function squareOf(address: string) {
+  const { modules } = QRCode.create(address, { errorCorrectionLevel: 'M' });
+  const bars = qrRuns(modules.size, (row, column) => Boolean(modules.get(row, column)));
+  return { size: modules.size, bars };
 }
 
 /** In force from the first right code on. Answers the recovery codes, once. */

@@ -76,6 +76,7 @@ export async function changeTheRoom(scope: Scope, change: z.output<typeof RoomCh
   const before = await roomPage(scope);
   if (before.version !== version)
     throw new Refusal('conflict', 'The fishroom was changed elsewhere in the meantime', {}, { current: before });
+  if (change.currency !== before.currency) await mustHaveNoMoney(scope);
   try {
     await db
       .updateTable('room')
@@ -93,6 +94,21 @@ export async function changeTheRoom(scope: Scope, change: z.output<typeof RoomCh
   const after = await roomPage(scope);
   await audit(scope, { action: 'changed', about: 'fishroom', aboutId: roomId, change: differences(before, after) });
   return after;
+}
+
+/** Amounts are stored in the currency's own minor unit: once there are any, another currency would turn them into others. */
+async function mustHaveNoMoney({ db, roomId }: Scope): Promise<void> {
+  const sale = await db.selectFrom('purchase').where('roomId', '=', roomId).select('id').executeTakeFirst();
+  const price = await db
+    .selectFrom('listing')
+    .where('roomId', '=', roomId)
+    .where(({ or, eb }) => or([eb('classes', '!=', '[]'), eb('lots', '!=', '[]')]))
+    .select('id')
+    .executeTakeFirst();
+  if (sale ?? price)
+    throw new Refusal('conflict', 'The currency stays: there are prices or orders in it', {
+      currency: 'There are prices or orders in the present currency',
+    });
 }
 
 const AUDITED = ['slug', 'timeZone', 'currency'] as const;

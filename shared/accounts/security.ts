@@ -73,13 +73,23 @@ export const passSecondStep = endpoint({
   output: Done,
 });
 
+export const ProvePassword = z.strictObject({ current: Current });
+
 /** A fresh secret for the authenticator, not in force until a code of it was typed. */
 export const startSecondStep = endpoint({
   method: 'POST',
   path: '/api/me/second-step/secret',
   needs: 'signedIn',
-  body: z.strictObject({ current: Current }),
-  output: z.strictObject({ secret: z.string(), address: z.string() }),
+  body: ProvePassword,
+  output: z.strictObject({
+    secret: z.string(),
+    address: z.string(),
+    /** The address as a square code: its side in modules, and its dark bars. */
+    square: z.strictObject({
+      size: z.number(),
+      bars: z.array(z.strictObject({ row: z.number(), column: z.number(), length: z.number() })),
+    }),
+  }),
 });
 
 const RecoveryCodes = z.strictObject({ recoveryCodes: z.array(z.string()) });

@@ -1,0 +1,5 @@
+import { ForgotScreen } from '@/features/accounts/ForgotScreen';
+
+export default function ForgotPage() {
+  return <ForgotScreen />;
+}

@@ -1,0 +1,5 @@
+import { LinkScreen } from '@/features/accounts/LinkScreen';
+
+export default function LinkPage() {
+  return <LinkScreen />;
+}

@@ -1,0 +1,5 @@
+import { ResetScreen } from '@/features/accounts/ResetScreen';
+
+export default function ResetPage() {
+  return <ResetScreen />;
+}

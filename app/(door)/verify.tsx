@@ -1,0 +1,5 @@
+import { VerifyScreen } from '@/features/accounts/VerifyScreen';
+
+export default function VerifyPage() {
+  return <VerifyScreen />;
+}

@@ -1,0 +1,5 @@
+import { FishroomScreen } from '@/features/settings/FishroomScreen';
+
+export default function FishroomPage() {
+  return <FishroomScreen />;
+}

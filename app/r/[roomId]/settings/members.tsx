@@ -1,0 +1,5 @@
+import { MembersScreen } from '@/features/members/MembersScreen';
+
+export default function MembersPage() {
+  return <MembersScreen />;
+}

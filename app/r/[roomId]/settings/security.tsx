@@ -1,0 +1,5 @@
+import { SecurityScreen } from '@/features/accounts/SecurityScreen';
+
+export default function SecurityPage() {
+  return <SecurityScreen />;
+}

@@ -1,0 +1,5 @@
+import { SignInsScreen } from '@/features/accounts/SignInsScreen';
+
+export default function SignInsPage() {
+  return <SignInsScreen />;
+}

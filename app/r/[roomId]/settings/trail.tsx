@@ -1,0 +1,5 @@
+import { TrailScreen } from '@/features/settings/TrailScreen';
+
+export default function TrailPage() {
+  return <TrailScreen />;
+}

@@ -1,0 +1,5 @@
+import { YouScreen } from '@/features/accounts/YouScreen';
+
+export default function YouPage() {
+  return <YouScreen />;
+}

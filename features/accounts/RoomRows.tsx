@@ -1,0 +1,23 @@
+import { Row } from '@/components/ui/Row';
+import { Rows } from '@/components/ui/Rows';
+import type { Me } from '@/shared/accounts/contract';
+import { ROLE_WORDS } from '@/shared/roles';
+
+/** The fishrooms of an account, each a way in. */
+export function RoomRows({ me, current }: { me: Me; current?: string }) {
+  return (
+    <Rows label="Fishrooms" bleed>
+      {me.rooms.map((room) => (
+        <Row
+          key={room.id}
+          href={`/r/${room.id}`}
+          label={`${room.name}, ${ROLE_WORDS[room.role].name}${room.id === current ? ', shown now' : ''}`}
+          title={room.name}
+          trailing={ROLE_WORDS[room.role].name}
+          selected={room.id === current}
+          middle
+        />
+      ))}
+    </Rows>
+  );
+}

@@ -1,0 +1,16 @@
+import type { Action } from '@/shared/roles';
+
+type RoomPage = { name: string; word: string; note: string; needs: Action };
+
+/** Pages under /settings of the fishroom, in the order of the list. `name` is the last part of the address. */
+export const roomPages: readonly RoomPage[] = [
+  { name: 'fishroom', word: 'Fishroom', note: 'Name, place, time zone, currency, units', needs: 'room:see' },
+  { name: 'members', word: 'Members', note: 'Roles, invitations, leaving', needs: 'member:see' },
+  { name: 'trail', word: 'Audit trail', note: 'Who recorded and changed what, and when', needs: 'audit:see' },
+];
+
+export const yourPages = [
+  { name: 'you', word: 'Name and units', note: 'How you are named, and what you read in' },
+  { name: 'security', word: 'Address and password', note: 'Email, password, second step' },
+  { name: 'sign-ins', word: 'Sign-ins', note: 'Devices that are signed in as you' },
+] as const;
