@@ -45,14 +45,18 @@ function onOnePage({ open, close }: Sheets, roomMm: number): Block[] | undefined
   return whole.find((blocks) => heightOf(blocks) <= roomMm);
 }
 
-/** The sheet itself on the first page if it can be, however close; cautions then have a page to themselves. */
+/**
+ * As much of the sheet on the first page as it holds, however close: all but the cautions, or up to growth and water, or
+ * up to the pedigree. What is left goes on the next ones.
+ */
 function onPages({ open, close, told }: Sheets, cautions: Block[], room: Room): Block[][] {
-  const front = [open, close]
-    .map(({ family, record }) => [...family, ...record])
-    .find((blocks) => heightOf(blocks) <= room.firstMm);
-  if (front) return [front, cautions].filter((blocks) => blocks.length > 0);
-  const family = [open, close, told]
-    .map((sections) => sections.family)
-    .find((blocks) => heightOf(blocks) <= room.firstMm);
-  return paginate([...(family ?? open.family), ...open.record, ...cautions], room);
+  for (const count of [open.record.length, 1, 0]) {
+    const settings = count > 0 ? [open, close] : [open, close, told];
+    const first = settings
+      .map(({ family, record }) => [...family, ...record.slice(0, count)])
+      .find((blocks) => heightOf(blocks) <= room.firstMm);
+    if (first)
+      return [first, ...paginate([...open.record.slice(count), ...cautions], { ...room, firstMm: room.nextMm })];
+  }
+  return paginate([...open.family, ...open.record, ...cautions], room);
 }

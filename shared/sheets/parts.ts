@@ -42,7 +42,7 @@ export const CLOSE: Setting = {
   gapMm: 2.8,
   headMm: 6.8,
   slotMm: 0.6,
-  pictureMm: 50,
+  pictureMm: 54,
   chartMm: 27,
   cautionMm: 3.2,
   told: false,
