@@ -13,6 +13,7 @@ import { members } from './members';
 import { photos } from './photos';
 import { record } from './record';
 import { rooms } from './rooms';
+import { species } from './species';
 import { strains } from './strains';
 import { tanks } from './tanks';
 import { today } from './today';
@@ -34,6 +35,7 @@ export const features: Feature[] = [
   members,
   auditTrail,
   letters,
+  species,
   strains,
   tanks,
   colonies,

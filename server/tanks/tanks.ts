@@ -26,7 +26,8 @@ export async function oneTank(scope: Scope, tankId: string): Promise<Told> {
 
 export async function tankPage(scope: Scope, tankId: string): Promise<z.input<typeof readTank.output>> {
   const tank = await oneTank(scope, tankId);
-  return { tank, stays: await staysOf(scope, { tankId, openOnly: false }) };
+  const stays = await staysOf(scope, { tankId, openOnly: false });
+  return { tank, stays: stays.map(({ resident, fromDay, untilDay }) => ({ resident, fromDay, untilDay })) };
 }
 
 function tankRows({ db, roomId }: Scope, tankId?: string) {
