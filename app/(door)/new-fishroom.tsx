@@ -1,10 +1,13 @@
+import { DoorFrame } from '@/features/accounts/DoorFrame';
 import { SignedInOnly } from '@/features/accounts/gates';
-import { NewRoomScreen } from '@/features/settings/NewRoomScreen';
+import { NewRoomForm } from '@/features/settings/NewRoomForm';
 
 export default function NewRoomPage() {
   return (
     <SignedInOnly>
-      <NewRoomScreen />
+      <DoorFrame title="Start a fishroom" words="All of it can be changed later.">
+        <NewRoomForm />
+      </DoorFrame>
     </SignedInOnly>
   );
 }

@@ -39,7 +39,7 @@ export function SignInScreen({ next }: { next: string | undefined }) {
   if (link.isSuccess) return <LetterSent email={link.variables} goodFor="15 minutes" again={() => link.reset()} />;
   const signUp = { pathname: '/sign-up', params: next ? { next } : {} } as const;
   return (
-    <DoorFrame front title="Sign in" words="Who is holding, since when, and whose they are.">
+    <DoorFrame front title="Sign in" words={'Who is holding, since when,\nand whose they are.'}>
       <Form form={form} notice={notice} label="Sign in">
         <TextField name="email" label="Email" needed inputMode="email" autoComplete="email" autoCapitalize="none" />
         <PasswordField name="password" label="Password" purpose="current" />

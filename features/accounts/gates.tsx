@@ -2,13 +2,12 @@ import { useQuery } from '@tanstack/react-query';
 import { Redirect, usePathname } from 'expo-router';
 import type { ReactNode } from 'react';
 import { StyleSheet, View } from 'react-native';
-import { space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Button } from '@/components/ui/Button';
 import { Mark } from '@/components/ui/Mark';
-import { Screen } from '@/components/ui/Screen';
 import { Text } from '@/components/ui/Text';
 import type { Me } from '@/shared/accounts/contract';
+import { DoorFrame } from './DoorFrame';
 import { meQuery } from './queries';
 import { RoomRows } from './RoomRows';
 
@@ -30,10 +29,9 @@ export function StillLoading() {
 /** Nothing of the page could be fetched. */
 export function Trouble({ error, again }: { error: Error; again: () => void }) {
   return (
-    <Screen title="Not loaded" measure>
-      <Text style={{ marginBottom: space[5] }}>{error.message}</Text>
-      <Button kind="primary" label="Try again" onPress={again} />
-    </Screen>
+    <DoorFrame title="Not loaded" words={error.message}>
+      <Button kind="primary" label="Try again" onPress={again} grow />
+    </DoorFrame>
   );
 }
 
@@ -48,13 +46,16 @@ export function SignedInOnly({ children }: { children: ReactNode }) {
 /** An address of a fishroom that this account does not belong to: whether it exists is not said. */
 export function RoomMissing({ me }: { me: Me }) {
   return (
-    <Screen title="No such fishroom" subtitle={`Signed in as ${me.account.email}`} measure>
-      <Text tone="soft" style={{ marginBottom: space[5] }}>
-        The address is wrong, or you are not a member. Ask its owner for an invitation.
-      </Text>
+    <DoorFrame
+      title="No such fishroom"
+      words="The address is wrong, or you are not a member. Ask its owner for an invitation."
+    >
       <RoomRows me={me} />
-      <Button label="Start a fishroom" href="/new-fishroom" />
-    </Screen>
+      <Button label="Start a fishroom" href="/new-fishroom" grow />
+      <Text size="small" tone="soft">
+        Signed in as {me.account.email}.
+      </Text>
+    </DoorFrame>
   );
 }
 

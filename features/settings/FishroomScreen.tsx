@@ -12,7 +12,7 @@ import { useRoom } from '@/hooks/useRoom';
 import { may } from '@/shared/roles';
 import { changeRoom, getRoom, type RoomPage } from '@/shared/rooms/contract';
 import { RoomFields } from './RoomFields';
-import { RoomForm, systemOf, UNIT_SYSTEMS } from './roomForm';
+import { RoomFormDraft, systemOf, UNIT_SYSTEMS } from './roomForm';
 
 const roomQuery = (roomId: string) =>
   queryOptions({
@@ -43,7 +43,7 @@ export function FishroomScreen() {
 function RoomEdit({ page }: { page: RoomPage }) {
   const cache = useQueryClient();
   const { form, notice } = useSchemaForm({
-    schema: RoomForm,
+    schema: RoomFormDraft,
     start: {
       name: page.name,
       place: page.place ?? '',

@@ -23,12 +23,12 @@ export const systemOf = (units: UnitChoices): z.output<typeof System> => (units.
 const { name, timeZone, currency } = RoomDraft.shape;
 const fields = { name, timeZone, currency, place: TypedPlace, system: System };
 
-export const NewRoomForm = z.pipe(
+export const NewRoomDraft = z.pipe(
   z.strictObject(fields),
   z.transform(({ system, ...room }) => ({ ...room, units: unitsOf(system) })),
 );
 
-export const RoomForm = z.pipe(
+export const RoomFormDraft = z.pipe(
   z.strictObject({ ...fields, slug: RoomChange.shape.slug }),
   z.transform(({ system, ...room }) => ({ ...room, units: unitsOf(system) })),
 );

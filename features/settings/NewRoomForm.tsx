@@ -4,15 +4,14 @@ import { useState } from 'react';
 import { Form } from '@/components/form/Form';
 import { SubmitButton } from '@/components/form/SubmitButton';
 import { useSchemaForm } from '@/components/form/useSchemaForm';
-import { Screen } from '@/components/ui/Screen';
 import { call } from '@/features/call';
 import { createRoom } from '@/shared/rooms/contract';
 import { deviceCurrency, deviceSystem, deviceTimeZone } from './places';
 import { RoomFields } from './RoomFields';
-import { NewRoomForm } from './roomForm';
+import { NewRoomDraft } from './roomForm';
 
 /** The first thing after signing up: name it, and go in. */
-export function NewRoomScreen() {
+export function NewRoomForm() {
   const cache = useQueryClient();
   const router = useRouter();
   const [start] = useState(() => ({
@@ -23,7 +22,7 @@ export function NewRoomScreen() {
     system: deviceSystem(),
   }));
   const { form, notice } = useSchemaForm({
-    schema: NewRoomForm,
+    schema: NewRoomDraft,
     start,
     save: async (body) => {
       const { id } = await call(createRoom, { body });
@@ -33,10 +32,8 @@ export function NewRoomScreen() {
   });
   return (
     <Form form={form} notice={notice} label="New fishroom">
-      <Screen title="Start a fishroom" subtitle="All of it can be changed later" measure low>
-        <RoomFields timeZone={start.timeZone} />
-        <SubmitButton label="Start the fishroom" busyLabel="Starting" />
-      </Screen>
+      <RoomFields timeZone={start.timeZone} />
+      <SubmitButton label="Start the fishroom" busyLabel="Starting" />
     </Form>
   );
 }
