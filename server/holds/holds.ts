@@ -3,6 +3,7 @@ import type { HoldRow, readHold } from '../../shared/holds/contract';
 import { notFound } from '../../shared/refusal';
 import { librarySpecies } from '../../shared/species/library';
 import { BREEDING_MODES } from '../../shared/species/species';
+import { broodRows } from '../broods';
 import { parentagesOf } from '../lineage';
 import type { Scope } from '../scope';
 import { speciesNames } from '../species';
@@ -158,10 +159,37 @@ export async function holdPage(scope: Scope, holdId: string): Promise<z.input<ty
     .orderBy('holdCheck.onDay', 'desc')
     .execute();
   const all = hold.holder ? await holdRows(scope, { holderId: hold.holder.id }) : [];
-  const earlier = all
-    .filter(({ id }) => id !== holdId)
-    .map(({ id, outcome, spawnLatest, endedOn, brood }) => ({ id, outcome, spawnLatest, endedOn, brood }));
+  const others = all.filter(({ id }) => id !== holdId);
+  const fry = await fryOf(
+    scope,
+    others.flatMap(({ brood }) => brood?.id ?? []),
+  );
+  const earlier = others.map(({ id, outcome, spawnLatest, endedOn, brood }) => ({
+    id,
+    outcome,
+    spawnLatest,
+    endedOn,
+    brood,
+    fry: fry.get(brood?.id ?? '') ?? null,
+  }));
   return { hold, note, parentage, possibleHybrid: await mayBeHybrid(scope, strainId, parentage), checks, earlier };
+}
+
+/** Heads with which broods opened; before that, what was counted at the strip. */
+async function fryOf(scope: Scope, broodIds: string[]): Promise<Map<string, number>> {
+  const fry = new Map<string, number>();
+  if (broodIds.length === 0) return fry;
+  const counts = await scope.db
+    .selectFrom('stageCount')
+    .where('roomId', '=', scope.roomId)
+    .where('broodId', 'in', broodIds)
+    .where('total', 'is not', null)
+    .select(['broodId', 'total'])
+    .orderBy('onDay', 'desc')
+    .execute();
+  for (const { broodId, total } of counts) if (total !== null) fry.set(broodId, total);
+  for (const { id, opened } of await broodRows(scope, { ids: broodIds })) if (opened !== null) fry.set(id, opened);
+  return fry;
 }
 
 /** Whether a possible sire is of another strain than the hold's. */

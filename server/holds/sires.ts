@@ -1,13 +1,16 @@
 import type * as z from 'zod/mini';
 import { addDays, daysBetween } from '../../shared/days';
+import type { FishRow } from '../../shared/fish/contract';
 import type { proposeSires } from '../../shared/holds/contract';
 import { notFound, Refusal } from '../../shared/refusal';
-import { librarySpecies, profileOf } from '../../shared/species/library';
 import { fishRows } from '../fish';
 import type { Scope } from '../scope';
 import { oneTank, presenceIn } from '../tanks';
+import { strainsHere } from './strainsHere';
+import { holdsOfFish, lookedInto } from './tankHolds';
 
 type Proposal = z.input<typeof proposeSires.output>;
+type Span = { from: string; until: string };
 
 /** Dominance of the fortnight before the spawn counts as well: a male is courted before he is chosen. */
 const FORTNIGHT = 14;
@@ -16,11 +19,8 @@ const FORTNIGHT = 14;
  * Proposed shares: by the days each male was recorded dominant in the spawn interval and the fortnight before it; equal
  * where nothing is recorded. A male that was never dominant keeps a small share: sneaking happens (common practice, no source).
  */
-export async function siresFor(
-  scope: Scope,
-  tankId: string,
-  { from, until }: { from: string; until: string },
-): Promise<Proposal> {
+export async function siresFor(scope: Scope, tankId: string, span: Span): Promise<Proposal> {
+  const { from, until } = span;
   await oneTank(scope, tankId).catch(() => {
     throw notFound('That tank');
   });
@@ -30,32 +30,40 @@ export async function siresFor(
   const all = (await fishRows(scope)).filter(({ id, exit }) => there.has(id) && (!exit || exit.onDay >= from));
   const adults = all.filter((fish) => isAdult(fish.bornOn, until));
   const strainId = commonest(all.flatMap((fish) => fish.strainId ?? []));
-  const dominantDays = await dominanceDays(
+  const holds = await holdsOfFish(
     scope,
     adults.map(({ id }) => id),
-    addDays(from, -FORTNIGHT),
-    until,
   );
-  const candidates = adults.filter(({ sex }) => sex !== 'female');
-  const ofDays = daysBetween(addDays(from, -FORTNIGHT), until) + 1;
-  const anyDominance = candidates.some(({ id }) => (dominantDays.get(id) ?? 0) > 0);
-  const weights = candidates.map(({ id }) => (anyDominance ? (dominantDays.get(id) ?? 0) + SNEAKER_DAYS : 1));
-  const sum = weights.reduce((total, weight) => total + weight, 0);
-  const speciesId = all.find((fish) => fish.strainId === strainId)?.speciesId ?? null;
+  const strains = await strainsHere(scope, tankId, [...new Set(all.flatMap((fish) => fish.strainId ?? []))], span);
+  const openOf = (fishId: string) => {
+    const open = holds.find((hold) => hold.holderId === fishId && hold.endedOn === null);
+    return { openHoldId: open?.id ?? null, holdingSince: open?.spawnLatest ?? null };
+  };
   return {
-    sires: candidates.map((fish, i) => ({
+    sires: (await sharesOf(scope, adults, span)).map(({ fish, ...shares }) => ({
+      ...shares,
       fishId: fish.id,
       code: fish.code,
       sex: fish.sex === 'male' ? 'male' : 'unknown',
       strainCode: fish.strainCode,
       strainId: fish.strainId,
       foreign: fish.strainId !== strainId,
-      dominantDays: dominantDays.get(fish.id) ?? 0,
-      ofDays,
-      share: (weights[i] ?? 0) / sum,
+      ...openOf(fish.id),
     })),
-    paternity: speciesId && librarySpecies(speciesId) ? profileOf(speciesId).paternity.value.habit : null,
-    females: await femalesOf(scope, adults),
+    females: adults
+      .filter(({ sex, exit }) => sex !== 'male' && !exit)
+      .map((fish) => ({
+        fishId: fish.id,
+        code: fish.code,
+        colonyId: fish.colony?.id ?? null,
+        strainId: fish.strainId,
+        sex: fish.sex === 'female' ? 'female' : 'unknown',
+        ...openOf(fish.id),
+        lastEndedOn: holds.findLast((hold) => hold.holderId === fish.id && hold.endedOn !== null)?.endedOn ?? null,
+      })),
+    paternity: strains.find((strain) => strain.strainId === strainId)?.paternity ?? null,
+    strains,
+    lookedOn: await lookedInto(scope, tankId),
   };
 }
 
@@ -65,6 +73,26 @@ const ADULT_AFTER_DAYS = 180;
 
 /** A fish without a birthday came as an adult. */
 const isAdult = (bornOn: string | null, on: string) => bornOn === null || daysBetween(bornOn, on) >= ADULT_AFTER_DAYS;
+
+async function sharesOf(scope: Scope, adults: FishRow[], { from, until }: Span) {
+  const candidates = adults.filter(({ sex }) => sex !== 'female');
+  const since = addDays(from, -FORTNIGHT);
+  const days = await dominanceDays(
+    scope,
+    candidates.map(({ id }) => id),
+    since,
+    until,
+  );
+  const anyDominance = candidates.some(({ id }) => (days.get(id) ?? 0) > 0);
+  const weights = candidates.map(({ id }) => (anyDominance ? (days.get(id) ?? 0) + SNEAKER_DAYS : 1));
+  const sum = weights.reduce((total, weight) => total + weight, 0);
+  return candidates.map((fish, i) => ({
+    fish,
+    dominantDays: days.get(fish.id) ?? 0,
+    ofDays: daysBetween(since, until) + 1,
+    share: (weights[i] ?? 0) / sum,
+  }));
+}
 
 async function dominanceDays(
   { db, roomId }: Scope,
@@ -96,32 +124,6 @@ async function dominanceDays(
     days.set(fishId, total);
   }
   return days;
-}
-
-async function femalesOf(
-  { db, roomId }: Scope,
-  adults: Awaited<ReturnType<typeof fishRows>>,
-): Promise<Proposal['females']> {
-  const open = await db
-    .selectFrom('hold')
-    .where('roomId', '=', roomId)
-    .where('endedOn', 'is', null)
-    .where('holderId', 'is not', null)
-    .select(['id', 'holderId', 'spawnLatest'])
-    .execute();
-  return adults
-    .filter(({ sex, exit }) => sex !== 'male' && !exit)
-    .map((fish) => {
-      const hold = open.find(({ holderId }) => holderId === fish.id);
-      return {
-        fishId: fish.id,
-        code: fish.code,
-        colonyId: fish.colony?.id ?? null,
-        sex: fish.sex === 'female' ? 'female' : 'unknown',
-        openHoldId: hold?.id ?? null,
-        holdingSince: hold?.spawnLatest ?? null,
-      };
-    });
 }
 
 function commonest(ids: string[]): string | null {

@@ -65,6 +65,16 @@ export const HoldRow = z.strictObject({
 });
 export type HoldRow = z.output<typeof HoldRow>;
 
+/** What a conflict answers: the record that is there already, and who wrote it when. Null: it came with an import. */
+export const HoldClash = z.strictObject({
+  hold: HoldRow,
+  sires: z.array(ParentShare),
+  entryId: z.nullable(Id),
+  by: z.nullable(z.string()),
+  madeAt: z.nullable(z.string()),
+});
+export type HoldClash = z.output<typeof HoldClash>;
+
 export const listHolds = endpoint({
   method: 'GET',
   path: '/api/rooms/:roomId/holds',
@@ -106,6 +116,8 @@ export const readHold = endpoint({
         spawnLatest: DayText,
         endedOn: z.nullable(DayText),
         brood: z.nullable(Place),
+        /** Heads with which the brood's count opened, else what was counted at the strip; null when nothing was. */
+        fry: z.nullable(z.number()),
       }),
     ),
   }),
@@ -132,19 +144,39 @@ export const proposeSires = endpoint({
         dominantDays: z.number(),
         ofDays: z.number(),
         share: z.number(),
+        /** Of a species whose males hold: the hold it has now. */
+        openHoldId: z.nullable(Id),
+        holdingSince: z.nullable(DayText),
       }),
     ),
     /** What the species profile proposes; null where the habit is not known. */
     paternity: z.nullable(z.enum(['single', 'mixed'])),
+    /** The strains of the tank: how each carries its young, and what the clock of a hold that begins now would run on. */
+    strains: z.array(
+      z.strictObject({
+        strainId: Id,
+        strainCode: z.string(),
+        displayName: z.string(),
+        locality: z.nullable(z.string()),
+        mode: z.nullable(z.enum(BREEDING_MODES)),
+        paternity: z.nullable(z.enum(['single', 'mixed'])),
+        clock: ClockFacts,
+      }),
+    ),
+    /** The last day before today on which someone looked into the tank: a hold, a check, "seen well". */
+    lookedOn: z.nullable(DayText),
     /** Females of the tank, those that hold already with the day they are on. */
     females: z.array(
       z.strictObject({
         fishId: Id,
         code: z.nullable(z.string()),
         colonyId: z.nullable(Id),
+        strainId: z.nullable(Id),
         sex: z.enum(['female', 'unknown']),
         openHoldId: z.nullable(Id),
         holdingSince: z.nullable(DayText),
+        /** When her last hold ended: she was not holding then. */
+        lastEndedOn: z.nullable(DayText),
       }),
     ),
   }),

@@ -61,6 +61,29 @@ const HoldCheck = z.strictObject({
 
 const HoldPlanned = z.strictObject({ kind: z.literal('holdPlanned'), holdId: Id, onDay: DayText, plan: Plan });
 
+const HoldFacts = z.strictObject({
+  holderId: z.nullable(Id),
+  spawnSeen: z.boolean('Say yes or no'),
+  spawnEarliest: DayText,
+  spawnLatest: DayText,
+  firstSeenOn: DayText,
+});
+export type HoldFacts = z.output<typeof HoldFacts>;
+
+/**
+ * A hold that goes on is set right: its days, or the female once she can be told. `was` is what the device saw, so that two
+ * corrections do not run over each other. `parentage` null: as it is, with the female as the mother.
+ */
+const HoldCorrected = z.strictObject({
+  kind: z.literal('holdCorrected'),
+  holdId: Id,
+  onDay: DayText,
+  was: HoldFacts,
+  now: HoldFacts,
+  parentage: z.nullable(ParentageDraft),
+  note: Note,
+});
+
 /** Counts of a strip or release: one total at once, the split when there is time. Null: not counted. */
 export const StageNumbers = z.strictObject({
   total: z.nullable(HeadsOrNone),
@@ -92,4 +115,4 @@ const HoldEnded = z.strictObject({
   note: Note,
 });
 
-export const holdEntries = [SpawnSeen, HoldingSeen, HoldCheck, HoldPlanned, HoldEnded] as const;
+export const holdEntries = [SpawnSeen, HoldingSeen, HoldCheck, HoldPlanned, HoldCorrected, HoldEnded] as const;
