@@ -2,7 +2,7 @@ import { open } from 'node:fs/promises';
 import sharp, { type Metadata, type Sharp } from 'sharp';
 import { type Capture, captureOf } from './captureDate';
 import type { Lane } from './lane';
-import { damaged, notAPicture, phoneFormat, tooManyPixels } from './refusals';
+import { damaged, notAPicture, phoneFormat, tooHeavy, tooLong, tooManyPixels } from './refusals';
 
 /** Longest edge in pixels, and the file's name. */
 export const SIZES = { large: 1280, small: 320 } as const;
@@ -11,8 +11,10 @@ export type PictureSize = keyof typeof SIZES;
 export type Developed = { large: Buffer; small: Buffer; width: number; height: number };
 
 const MEGAPIXELS = 60;
-/** AVIF is decoded whole at about 18 bytes a pixel, and slowly: 60 million would take a gigabyte. */
-const AVIF_MEGAPIXELS = 16;
+/** Longest edge taken. A single line of many millions would be held whole, however few its pixels. */
+const MAX_EDGE = 30_000;
+/** What decoding one picture may hold in memory. */
+const MAX_HELD_BYTES = 260_000_000;
 /** Above this a picture is worked on alone, so that two large ones never share the memory. */
 const ALONE_BYTES = 100_000_000;
 const TIMEOUT_SECONDS = 30;
@@ -23,7 +25,7 @@ const WEBP = { effort: 2, quality: 80 } as const;
 export async function develop(file: string, lane: Lane): Promise<Developed & Capture> {
   const about = await headerOf(file);
   const capture = await captureOf(about.exif);
-  const developed = await lane.run(placesFor(about), () => bothSizes(file));
+  const developed = await lane.run(heldBytes(about) > ALONE_BYTES ? 2 : 1, () => bothSizes(file));
   return { ...developed, ...capture };
 }
 
@@ -33,15 +35,19 @@ async function headerOf(file: string): Promise<Metadata> {
     .catch(async (error: unknown) => Promise.reject(await whyNot(file, error)));
   const isAvif = about.format === 'heif' && about.compression === 'av1';
   if (!isAvif && !['jpeg', 'png', 'webp'].includes(about.format)) throw await whyNot(file, new Error('unsupported'));
-  const most = isAvif ? AVIF_MEGAPIXELS : MEGAPIXELS;
-  if (about.width * about.height > most * 1_000_000) throw tooManyPixels(most);
+  if (about.width * about.height > MEGAPIXELS * 1_000_000) throw tooManyPixels(MEGAPIXELS);
+  if (Math.max(about.width, about.height) > MAX_EDGE) throw tooLong(MAX_EDGE);
+  if (heldBytes(about) > MAX_HELD_BYTES) throw tooHeavy();
   return about;
 }
 
-/** Formats that cannot be read in strips are held in memory whole. Bytes a pixel, measured. */
-function placesFor({ format, isProgressive, width, height }: Metadata): 1 | 2 {
-  const bytesPerPixel = format === 'heif' ? 18 : isProgressive ? 6 : 2;
-  return width * height * bytesPerPixel > ALONE_BYTES ? 2 : 1;
+/** What a decoder holds at once, measured: most read in strips, some need the picture whole. */
+function heldBytes({ format, isProgressive, chromaSubsampling, depth, channels, width, height }: Metadata): number {
+  const pixels = width * height;
+  if (format === 'heif') return pixels * 18;
+  if (!isProgressive) return pixels * 2;
+  if (format === 'jpeg') return pixels * (chromaSubsampling === '4:2:0' ? 3 : 2 * channels);
+  return pixels * channels * (depth === 'ushort' ? 2 : 1);
 }
 
 /** One decode: the large size as bare pixels, of which the small one is made. */

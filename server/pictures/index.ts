@@ -1,15 +1,16 @@
 import type { Request, Response } from 'express';
+import { adopted } from './adopt';
 import type { Capture } from './captureDate';
 import { type Claim, openClaims } from './claims';
 import { crashPoint } from './crashPoint';
 import { limitDecoders } from './decoders';
-import { develop, type PictureSize } from './develop';
+import { type Developed, develop, type PictureSize } from './develop';
 import { hashOf, type PictureReport, type PictureRow, reportOn } from './integrity';
 import { openLane } from './lane';
 import { receiver, type Upload } from './receive';
 import { anotherPicture } from './refusals';
 import { sendPicture } from './serving';
-import { openShelf, type PictureKey } from './shelf';
+import { keyOf, openShelf, type PictureKey } from './shelf';
 import { type Swept, sweepShelf } from './sweep';
 
 export type { PictureSize } from './develop';
@@ -34,6 +35,8 @@ export type Pictures = {
   receive<T>(req: Request, res: Response, use: (upload: Upload) => Promise<T>): Promise<T>;
   /** Re-encodes a picture file into both sizes and puts them where they stay. The same picture may be stored twice. */
   store(file: string, roomId: string, id: string): Promise<StoredPicture>;
+  /** Puts both files of a picture from another installation's archive in place, byte for byte, once they prove harmless. */
+  adopt(files: Record<PictureSize, string>, roomId: string, id: string): Promise<StoredPicture>;
   fileOf(roomId: string, id: string, size: PictureSize): string;
   send(res: Response, picture: PictureKey & { size: PictureSize; name: string }): Promise<void>;
   /** After the row is gone. Nothing happens when there is no such picture. */
@@ -58,10 +61,7 @@ export async function openPictures(options: {
   const claim = openClaims(shelf);
   const { incoming, tempPath, removeRoom, bytesOf } = shelf;
 
-  async function store(file: string, roomId: string, id: string): Promise<StoredPicture> {
-    const key = { roomId, id };
-    const files = { large: shelf.fileOf(key, 'large'), small: shelf.fileOf(key, 'small') };
-    const { large, small, ...about } = await develop(file, lane);
+  async function putAway(key: PictureKey, { large, small, ...about }: Developed & Capture): Promise<StoredPicture> {
     const claimed = claim(key);
     try {
       const placed = await shelf.place(key, { large, small });
@@ -70,12 +70,17 @@ export async function openPictures(options: {
       await claimed.discard();
       throw error;
     }
+    const files = { large: shelf.fileOf(key, 'large'), small: shelf.fileOf(key, 'small') };
     return { ...about, ...claimed, bytes: large.length + small.length, sha256: hashOf({ large, small }), files };
   }
 
   return {
     receive: receiver({ incoming, maxBytes: options.maxBytes, maxAtOnce: ARRIVING, isFull: lane.isFull }),
-    store,
+    store: async (file, roomId, id) => putAway(keyOf(roomId, id), await develop(file, lane)),
+    adopt: async (files, roomId, id) => {
+      const known = await lane.run(1, () => adopted(files));
+      return putAway(keyOf(roomId, id), { ...known, takenOn: null, takenAt: null });
+    },
     fileOf: (roomId, id, size) => shelf.fileOf({ roomId, id }, size),
     send: (res, picture) => sendPicture(shelf, res, picture),
     remove: (roomId, id) => shelf.remove({ roomId, id }),

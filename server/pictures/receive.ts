@@ -24,6 +24,8 @@ export function receiver({ incoming, maxBytes, maxAtOnce, isFull }: Options) {
       filename: (_req, _file, name) => name(null, randomBytes(16).toString('hex')),
     }),
     defParamCharset: 'utf8',
+    // The name is used for nothing; without this one such as `..` would count as no file at all.
+    preservePath: true,
     limits: {
       fileSize: maxBytes,
       files: 1,
@@ -50,7 +52,9 @@ export function receiver({ incoming, maxBytes, maxAtOnce, isFull }: Options) {
       throw refusalOf(error, maxBytes);
     } finally {
       arriving -= 1;
-      if (req.file) await rm(req.file.path, { force: true });
+      // Gone already, with its path, when multer itself refused the form.
+      const path = req.file?.path;
+      if (path) await rm(path, { force: true });
     }
   };
 }

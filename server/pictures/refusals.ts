@@ -16,6 +16,15 @@ export const tooLarge = (maxBytes: number) =>
 export const tooManyPixels = (megapixels: number) =>
   new Refusal('too-large', `That picture has over ${megapixels} million pixels. Send a smaller copy.`);
 
+export const tooHeavy = () =>
+  new Refusal(
+    'too-large',
+    'Reading that picture would take too much memory. Send a smaller copy, or save it as a plain JPEG.',
+  );
+
+export const tooLong = (edge: number) =>
+  new Refusal('too-large', `That picture is over ${edge} pixels long. Send a smaller copy.`);
+
 export const notAPicture = () =>
   new Refusal('unsupported', 'That file is not a picture that can be read here. Send a JPEG, PNG, WebP or AVIF.');
 

@@ -88,6 +88,8 @@ export function openShelf(folder: string, crash: (point: CrashPoint) => void) {
 
 const fileName = (size: PictureSize): string => `${SIZES[size]}.webp`;
 
+export const keyOf = (roomId: string, id: string): PictureKey => ({ roomId: mustBeId(roomId), id: mustBeId(id) });
+
 /** Ids come from requests and become paths: nothing but an id may. */
 function mustBeId(id: string): string {
   if (!isId(id)) throw notFound('That picture');
