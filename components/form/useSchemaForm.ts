@@ -17,6 +17,7 @@ type Options<Value, Draft extends FormikValues> = {
   odd?: (value: Value) => string | null;
 };
 
+const NO_SIGNAL = 'No signal. What you typed is still here: try again when the connection is back.';
 const BROKEN = 'That did not work, and the fault is ours. What you typed is still here: try again.';
 
 /** Draft in, value out, refusals on their fields. */
@@ -40,7 +41,10 @@ export function useSchemaForm<Value, Draft extends FormikValues>({ schema, start
       try {
         await save(value);
       } catch (error) {
-        setNotice({ kind: 'refused', words: error instanceof Refusal ? error.message : BROKEN });
+        // Thrown by the browser's only fetch when there is no answer at all.
+        const noSignal = error instanceof Error && error.name === 'Unreachable';
+        setNotice({ kind: 'refused', words: noSignal ? NO_SIGNAL : error instanceof Refusal ? error.message : BROKEN });
+        if (noSignal) return;
         if (!(error instanceof Refusal)) throw error;
         helpers.setErrors(nested<Draft>(error.fields));
       }

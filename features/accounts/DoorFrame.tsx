@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { ScrollView, StyleSheet, View } from 'react-native';
-import { useIsWide } from '@/components/theme/breakpoint';
+import { useBreakpoint } from '@/components/theme/breakpoint';
 import { gutter, line, space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Heading } from '@/components/ui/Heading';
@@ -20,13 +20,14 @@ type Props = {
 /** Every page before a fishroom: one column of a form; on a wide screen the mark stands beside it. */
 export function DoorFrame({ title, words, front = false, children }: Props) {
   const theme = useTheme();
-  const wide = useIsWide();
+  const breakpoint = useBreakpoint();
+  const wide = breakpoint !== 'phone';
   usePageTitle(title);
   return (
     <View style={[styles.page, { backgroundColor: theme.ground }]}>
       {wide ? (
         <View style={[styles.side, { borderRightColor: theme.rule }]}>
-          <Mark width={420} look="stages" />
+          <Mark width={breakpoint === 'full' ? 420 : 220} look="stages" />
         </View>
       ) : null}
       <ScrollView style={styles.fill} contentContainerStyle={wide ? styles.wideBody : styles.phoneBody}>

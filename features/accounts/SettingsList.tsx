@@ -1,6 +1,6 @@
 import { usePathname } from 'expo-router';
 import { View } from 'react-native';
-import { useIsWide } from '@/components/theme/breakpoint';
+import { useBreakpoint } from '@/components/theme/breakpoint';
 import { space } from '@/components/theme/space';
 import { useThemeChoice } from '@/components/theme/ThemeProvider';
 import { Button } from '@/components/ui/Button';
@@ -21,7 +21,7 @@ import { roomPages, yourPages } from './settingsPages';
 export function SettingsList() {
   const room = useRoom();
   const me = useMe();
-  const wide = useIsWide();
+  const beside = useBreakpoint() === 'full';
   const here = usePathname().split('/')[4];
   const rows = (pages: readonly { name: string; word: string; note: string }[]) =>
     pages.map(({ name, word, note }) => (
@@ -30,7 +30,7 @@ export function SettingsList() {
         title={word}
         note={note}
         href={`/r/${room.id}/settings/${name}`}
-        selected={wide && name === here}
+        selected={beside && name === here}
       />
     ));
   return (
@@ -48,13 +48,13 @@ export function SettingsList() {
       <Section title="You">
         <Rows bleed>{rows(yourPages)}</Rows>
       </Section>
-      {wide ? null : <ThemeSection />}
+      {beside ? null : <ThemeSection />}
       <SignOutButton />
     </Screen>
   );
 }
 
-/** On a wide screen the rail has it. */
+/** The full rail has it. */
 function ThemeSection() {
   const { name, choose } = useThemeChoice();
   return (
