@@ -9,6 +9,7 @@ import { holds } from './holds';
 import type { House } from './house';
 import type { Serve } from './http/serve';
 import { letters } from './letters';
+import { lineage } from './lineage';
 import { members } from './members';
 import { photos } from './photos';
 import { record } from './record';
@@ -46,5 +47,6 @@ export const features: Feature[] = [
   photos,
   water,
   today,
+  lineage,
   record,
 ];
