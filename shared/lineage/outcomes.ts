@@ -1,9 +1,17 @@
 import { whole } from '../badValue';
+import { inbreeding } from './inbreeding';
 import type { PedigreeEntry } from './pedigree';
-import { assignedF, type PossibleAncestry, possibleAncestry } from './possibleAncestry';
+import { PedigreeError } from './pedigreeError';
+import { assignedKinships, type PossibleAncestry, possibleAncestry } from './possibleAncestry';
 
 /** Outcomes closer than this are one: they differ by rounding only. */
 const SAME = 1e-12;
+
+/** A table among this many takes 400 MB. */
+const MOST_ANCESTORS = 10_000;
+
+const tooManyAncestors = (id: string) =>
+  new PedigreeError('tooLarge', [id], `${id} has too many possible ancestors to list what its F may be`);
 
 /**
  * Every value that F of `id` takes over the uncertain draws among its possible ancestors, its own included, from low to
@@ -21,16 +29,20 @@ export function inbreedingOutcomes(
   const ancestry = possibleAncestry(pedigree, id);
   const draws = ancestry.options.flatMap((options, place) => (options.length > 1 ? [place] : []));
   const assignments = draws.reduce((count, place) => count * (ancestry.options[place]?.length ?? 1), 1);
-  return assignments > limit ? null : merged(everyOutcome(ancestry, draws));
+  if (assignments > limit) return null;
+  if (draws.length === 0) return [{ f: inbreeding(pedigree).get(id) ?? 0, probability: 1 }];
+  if (ancestry.options.length > MOST_ANCESTORS) throw tooManyAncestors(id);
+  return merged(everyOutcome(ancestry, draws));
 }
 
 /** Counts through the assignments with the youngest draw turning fastest, so that most steps change a few animals only. */
 function everyOutcome(ancestry: PossibleAncestry, draws: number[]): { f: number; probability: number }[] {
   const { options } = ancestry;
+  const kinships = assignedKinships(ancestry);
   const choice = options.map(() => 0);
   const found: { f: number; probability: number }[] = [];
   for (let changed: number | undefined = 0; changed !== undefined; changed = nextAssignment(choice, draws, options)) {
-    const f = assignedF(ancestry, choice, changed);
+    const f = kinships.fOf(choice, changed);
     const probability = draws.reduce((product, place) => {
       return product * (options[place]?.[choice[place] ?? 0]?.weight ?? 0);
     }, 1);

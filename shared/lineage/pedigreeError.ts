@@ -9,8 +9,6 @@ export type PedigreeFault =
   | 'noAnimals'
   | 'badGeneration'
   | 'bothSexes'
-  | 'badCount'
-  | 'badLimit'
   | 'noGroupFits'
   | 'noGroupFound'
   | 'tooLarge';

@@ -6,9 +6,9 @@ import { kinshipAt } from './sweep';
 
 /**
  * One animal's possible ancestors in order, itself last, each with its possible pairs as places in that order (for the one
- * animal behind a `oneOf` key: its candidates, as sires). Kinships among them are kept between assignments.
+ * animal behind a `oneOf` key: its candidates, as sires).
  */
-export type PossibleAncestry = { options: PairOption[][]; isDraw: boolean[]; values: Float64Array };
+export type PossibleAncestry = { options: PairOption[][]; isDraw: boolean[] };
 
 export function possibleAncestry(pedigree: PedigreeEntry[], id: string): PossibleAncestry {
   const sorted = sortPedigree(pedigree);
@@ -18,7 +18,6 @@ export function possibleAncestry(pedigree: PedigreeEntry[], id: string): Possibl
   return {
     options: families.map((family) => optionsOf(sorted, family, (node) => placeOf.get(node) ?? OUTSIDE)),
     isDraw: families.map((family) => sorted.isDraw[family] === 1),
-    values: new Float64Array((nodes.length * (nodes.length + 1)) / 2),
   };
 }
 
@@ -31,18 +30,24 @@ function optionsOf({ pairs }: SortedPedigree, family: number, place: (node: numb
   }));
 }
 
-/** F of the last animal when every draw is settled by `choice`; only places from `changed` on differ from the last call. */
-export function assignedF(ancestry: PossibleAncestry, choice: number[], changed: number): number {
-  const { options, isDraw, values } = ancestry;
+/** `fOf`: F of the last animal when `choice` settles every draw; only places from `changed` on differ from the last call. */
+export function assignedKinships({ options, isDraw }: PossibleAncestry): {
+  fOf(choice: number[], changed: number): number;
+} {
   const last = options.length - 1;
-  for (let place = changed; place < last; place += 1) {
-    const pair = options[place]?.[choice[place] ?? 0];
-    if (!pair) continue;
-    if (isDraw[place]) fillAlias(values, place, pair.sire);
-    else fillChild(values, place, pair);
-  }
-  const parents = options[last]?.[choice[last] ?? 0];
-  return parents ? between(values, parents.sire, parents.dam) : 0;
+  const values = new Float64Array((last * (last + 1)) / 2);
+  return {
+    fOf(choice, changed) {
+      for (let place = changed; place < last; place += 1) {
+        const pair = options[place]?.[choice[place] ?? 0];
+        if (!pair) continue;
+        if (isDraw[place]) fillAlias(values, place, pair.sire);
+        else fillChild(values, place, pair);
+      }
+      const parents = options[last]?.[choice[last] ?? 0];
+      return parents ? between(values, parents.sire, parents.dam) : 0;
+    },
+  };
 }
 
 /** The draw is the chosen candidate itself, or an animal from outside. */
