@@ -1,8 +1,10 @@
 import { useIsMutating, useQuery } from '@tanstack/react-query';
 import { usePathname, useRouter } from 'expo-router';
-import { type ReactNode, useEffect } from 'react';
+import { type ReactNode, useEffect, useState } from 'react';
 import { PlacesShell } from '@/components/ui/PlacesShell';
 import type { SavedState } from '@/components/ui/SavedLine';
+import { LastTold } from '@/features/entries/LastTold';
+import { ToldStrip } from '@/features/entries/ToldStrip';
 import { useClock } from '@/hooks/useClock';
 import { useHotkey } from '@/hooks/useHotkey';
 import { useOnline } from '@/hooks/useOnline';
@@ -14,8 +16,13 @@ import { rememberRoom } from './lastRoom';
 import { placeOf, placesOf } from './places';
 import { meQuery } from './queries';
 
+/** The Record sheet; another feature's, set in by the layout. */
+type RecordSheetOf = (open: boolean, close: () => void) => ReactNode;
+
+type Props = { roomId: string; recordSheet: RecordSheetOf; children: ReactNode };
+
 /** The gate and the frame of one fishroom: who is signed in, as what, and where they are. */
-export function RoomShell({ roomId, children }: { roomId: string; children: ReactNode }) {
+export function RoomShell({ roomId, recordSheet, children }: Props) {
   const { data: me, error, refetch } = useQuery(meQuery);
   if (me === null) return <SignInFirst />;
   if (me === undefined) return error ? <Trouble error={error} again={refetch} /> : <StillLoading />;
@@ -23,7 +30,9 @@ export function RoomShell({ roomId, children }: { roomId: string; children: Reac
   if (!room) return <RoomMissing me={me} />;
   return (
     <RoomProvider room={room}>
-      <Frame>{children}</Frame>
+      <LastTold>
+        <Frame recordSheet={recordSheet}>{children}</Frame>
+      </LastTold>
     </RoomProvider>
   );
 }
@@ -34,10 +43,11 @@ function roomOf({ account, rooms }: Me, roomId: string): Room | null {
   return { ...room, units: account.choices.units ?? room.units, accountId: account.id, accountName: account.name };
 }
 
-function Frame({ children }: { children: ReactNode }) {
+function Frame({ recordSheet, children }: Omit<Props, 'roomId'>) {
   const room = useRoom();
   const router = useRouter();
-  const { place, sub } = placeOf(usePathname());
+  const { place, sub, bare } = placeOf(usePathname());
+  const [recording, setRecording] = useState(false);
   const time = useClock(room.timeZone);
   const saved = useSaved();
   useEffect(() => rememberRoom(room.id), [room.id]);
@@ -48,7 +58,14 @@ function Frame({ children }: { children: ReactNode }) {
       places={placesOf(room.id, room.role)}
       current={place}
       currentSub={sub}
-      onRecord={mayRecord ? () => router.push(`/r/${room.id}/record`) : undefined}
+      onRecord={mayRecord ? () => setRecording(true) : undefined}
+      bare={bare}
+      over={
+        <>
+          <ToldStrip />
+          {recordSheet(recording, () => setRecording(false))}
+        </>
+      }
       saved={saved}
       person={`${room.accountName}, ${ROLE_WORDS[room.role].name.toLowerCase()}`}
       onPerson={() => router.push(`/r/${room.id}/settings`)}

@@ -1,4 +1,5 @@
 import { useMutation } from '@tanstack/react-query';
+import { Redirect } from 'expo-router';
 import { useState } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { Form } from '@/components/form/Form';
@@ -14,7 +15,7 @@ import { SignIn } from '@/shared/accounts/contract';
 import { askSignInLink } from '@/shared/accounts/links';
 import { Email } from '@/shared/accounts/shapes';
 import { DoorFrame } from './DoorFrame';
-import { useDoor } from './door';
+import { useAlreadyIn, useDoor } from './door';
 import { LetterSent } from './LetterSent';
 import { SecondStepScreen } from './SecondStepScreen';
 
@@ -35,6 +36,8 @@ export function SignInScreen({ next }: { next: string | undefined }) {
     if (email.success) link.mutate(email.data);
     else void form.setTouched({ email: true }).then(() => form.setFieldError('email', email.error.issues[0]?.message));
   };
+  const onward = useAlreadyIn(next);
+  if (onward) return <Redirect href={onward} />;
   if (step === 'code') return <SecondStepScreen next={next} />;
   if (link.isSuccess) return <LetterSent email={link.variables} goodFor="15 minutes" again={() => link.reset()} />;
   const signUp = { pathname: '/sign-up', params: next ? { next } : {} } as const;

@@ -1,3 +1,4 @@
+import { Redirect } from 'expo-router';
 import { Form } from '@/components/form/Form';
 import { PasswordField } from '@/components/form/PasswordField';
 import { SubmitButton } from '@/components/form/SubmitButton';
@@ -7,7 +8,7 @@ import { TextLink } from '@/components/ui/TextLink';
 import { SignUp } from '@/shared/accounts/contract';
 import { PASSWORD_MIN } from '@/shared/accounts/shapes';
 import { DoorFrame } from './DoorFrame';
-import { useDoor } from './door';
+import { useAlreadyIn, useDoor } from './door';
 
 type Props = {
   next: string | undefined;
@@ -24,6 +25,8 @@ export function SignUpScreen({ next, invitation, email }: Props) {
     start: { name: '', email: email ?? '', password: '', ...(invitation ? { invitation } : {}) },
     save: door.signUp,
   });
+  const onward = useAlreadyIn(next);
+  if (onward) return <Redirect href={onward} />;
   const signIn = { pathname: '/sign-in', params: next ? { next } : {} } as const;
   return (
     <DoorFrame title="Sign up" words="For breeders and everyone who helps in their fishrooms.">

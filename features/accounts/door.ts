@@ -1,5 +1,5 @@
-import { useQueryClient } from '@tanstack/react-query';
-import { useRouter } from 'expo-router';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { type Href, useRouter } from 'expo-router';
 import type * as z from 'zod/mini';
 import { call } from '@/features/call';
 import { type SignIn, type SignUp, signIn, signUp } from '@/shared/accounts/contract';
@@ -7,6 +7,12 @@ import { signInByLink } from '@/shared/accounts/links';
 import { passSecondStep, type SecondStep } from '@/shared/accounts/security';
 import { nextPage } from './nextPage';
 import { forgetFetched, meQuery } from './queries';
+
+/** Where somebody who is signed in already is sent on to; null for whoever is not, or while it is being asked. */
+export function useAlreadyIn(next: string | undefined): Href | null {
+  const { data: me } = useQuery(meQuery);
+  return me ? nextPage(next) : null;
+}
 
 /** What the door does, each going on to the next page once the person is in. */
 export function useDoor(next: string | undefined) {

@@ -19,11 +19,18 @@ const PLACE_OF: Record<string, PlaceName> = {
   orders: 'buyers',
 };
 
-/** The place and sub-place of an address such as /r/<id>/broods/<id>. */
-export function placeOf(pathname: string): { place: PlaceName | null; sub: string | null } {
+/**
+ * The place and sub-place of an address such as /r/<id>/broods/<id>. `bare`: a Record form, which fills the phone without
+ * the strip and the bottom bar.
+ */
+export function placeOf(pathname: string): { place: PlaceName | null; sub: string | null; bare: boolean } {
   const [, , , first, second] = pathname.split('/');
-  if (!first) return { place: 'today', sub: null };
-  return { place: PLACE_OF[first] ?? null, sub: (first === 'stock' ? second : first) ?? null };
+  if (!first) return { place: 'today', sub: null, bare: false };
+  return {
+    place: PLACE_OF[first] ?? null,
+    sub: (first === 'stock' ? second : first) ?? null,
+    bare: first === 'record',
+  };
 }
 
 const SUB_PLACES = [

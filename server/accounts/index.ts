@@ -3,6 +3,7 @@ import { openLimits } from './limits';
 import { linkRoutes } from './linkRoutes';
 import { accountRoutes } from './routes';
 import { securityRoutes } from './securityRoutes';
+import { startSweep } from './sweep';
 
 export const accounts: Feature = {
   routes: (serve) => {
@@ -11,4 +12,5 @@ export const accounts: Feature = {
     linkRoutes(serve, limits);
     securityRoutes(serve, limits);
   },
+  start: async (house) => startSweep(house),
 };

@@ -109,8 +109,8 @@ describe('S63 a forgotten password', () => {
       return { status, body, took: performance.now() - started };
     };
     await time('warm@mail.example');
-    const known = [];
-    const unknown = [];
+    const known: Awaited<ReturnType<typeof time>>[] = [];
+    const unknown: typeof known = [];
     for (let i = 0; i < 5; i += 1) {
       known.push(await time(EMAIL));
       unknown.push(await time(`nobody${i}@mail.example`));

@@ -1,6 +1,7 @@
 import { createHmac, generateKeyPairSync, randomUUID } from 'node:crypto';
 import { decodeJwt, SignJWT } from 'jose';
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { sweepAccounts } from '@/server/accounts/sweep';
 import { getMe, signIn, signOut, signUp } from '@/shared/accounts/contract';
 import { changePassword, endOneSession, endOtherSessions, listSessions } from '@/shared/accounts/security';
 import { changeRole } from '@/shared/members/contract';
@@ -288,4 +289,24 @@ describe('the role', () => {
     expect(await statusWith(await cookieFor(app, (await personWithAccount(app)).id))).toBe(200);
     expect(await statusWith('__Host-kinwater=garbage')).toBe(401);
   });
+});
+
+test('what is over is swept away after a month; a sign-in that is used, and its account, stay', async () => {
+  const own = await testApp();
+  try {
+    const ended = await personWithAccount(own);
+    const used = await personWithAccount(own);
+    await ended.get(signOut);
+    own.later({ days: 20 });
+    expect(await seenAs(used)).toBe(used.email);
+    own.later({ days: 11 });
+    await sweepAccounts(own.house);
+    const { db } = own.house;
+    const left = await db.selectFrom('session').select('accountId').execute();
+    expect(left.map(({ accountId }) => accountId)).toEqual([used.id]);
+    expect(await seenAs(used)).toBe(used.email);
+    expect(await db.selectFrom('account').select('id').execute()).toHaveLength(2);
+  } finally {
+    await own.close();
+  }
 });
