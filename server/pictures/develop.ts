@@ -60,8 +60,10 @@ async function bothSizes(file: string): Promise<Developed> {
     .catch(async (error: unknown) => Promise.reject(await whyNot(file, error)));
   const { width, height, channels } = info;
   const pixels = sharp(data, { raw: { width, height, channels } });
-  const large = await pixels.clone().webp(WEBP).toBuffer();
-  const small = await inside(pixels.clone(), SIZES.small).webp(WEBP).toBuffer();
+  const [large, small] = await Promise.all([
+    pixels.clone().webp(WEBP).toBuffer(),
+    inside(pixels.clone(), SIZES.small).webp(WEBP).toBuffer(),
+  ]);
   return { large, small, width, height };
 }
 

@@ -13,6 +13,7 @@ import { sendPicture } from './serving';
 import { keyOf, openShelf, type PictureKey } from './shelf';
 import { type Swept, sweepShelf } from './sweep';
 
+export { whileDrawing } from './decoders';
 export type { PictureSize } from './develop';
 export type { PictureReport, PictureRow } from './integrity';
 export { PICTURE_FIELD, type Upload } from './receive';

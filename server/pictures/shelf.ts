@@ -35,7 +35,7 @@ export function openShelf(folder: string, crash: (point: CrashPoint) => void) {
     const draft = tempPath();
     try {
       await mkdir(draft);
-      for (const size of SIZE_NAMES) await writeSafely(join(draft, fileName(size)), files[size], crash);
+      await whenAllEnded(SIZE_NAMES.map((size) => writeSafely(join(draft, fileName(size)), files[size], crash)));
       await flushFolder(draft);
       if (await mkdir(roomOf(key.roomId), { recursive: true })) await flushFolder(folder);
       await rename(draft, homeOf(key));
@@ -120,6 +120,11 @@ async function writeSafely(file: string, bytes: Buffer, crash: (point: CrashPoin
   } finally {
     await handle.close();
   }
+}
+
+/** The draft may only be cleared away once nobody writes to it any more, so one failure waits for the other files. */
+async function whenAllEnded(work: Promise<void>[]): Promise<void> {
+  for (const result of await Promise.allSettled(work)) if (result.status === 'rejected') throw result.reason;
 }
 
 async function flushFolder(path: string): Promise<void> {

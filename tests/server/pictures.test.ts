@@ -1,6 +1,7 @@
 import { readFileSync, writeFileSync } from 'node:fs';
 import sharp from 'sharp';
 import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
+import { whileDrawing } from '@/server/pictures';
 import * as b from '../support/pictureBytes';
 import { type PictureServer, pictureServer } from '../support/pictureServer';
 
@@ -270,4 +271,14 @@ test('once pictures are open, no other decoder answers anywhere in the server', 
   const path = server.pictures.tempPath();
   writeFileSync(path, await b.fourFields().gif().toBuffer());
   await expect(sharp(path).metadata()).rejects.toThrow();
+});
+
+test('while the server draws pictures of its own, an uploaded drawing is refused all the same', async () => {
+  const svg = Buffer.from('<svg xmlns="http://www.w3.org/2000/svg" width="9" height="9"/>');
+  await whileDrawing(async () => {
+    const png = await sharp(svg).png().toBuffer();
+    expect(await sharp(png).metadata()).toMatchObject({ format: 'png', width: 9 });
+    expect((await server.send(svg)).body).toMatchObject({ error: { reason: 'unsupported' } });
+  });
+  await expect(sharp(svg).metadata()).rejects.toThrow();
 });
