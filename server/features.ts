@@ -14,6 +14,7 @@ import { members } from './members';
 import { photos } from './photos';
 import { record } from './record';
 import { rooms } from './rooms';
+import { sheets } from './sheets';
 import { species } from './species';
 import { strains } from './strains';
 import { tanks } from './tanks';
@@ -48,5 +49,6 @@ export const features: Feature[] = [
   water,
   today,
   lineage,
+  sheets,
   record,
 ];

@@ -1,0 +1,103 @@
+import type { Response } from 'express';
+import { isId } from '../../shared/ids';
+import { notFound } from '../../shared/refusal';
+import { SheetContent } from '../../shared/sheets/content';
+import {
+  checkSheetPage,
+  issueSheet,
+  listKeys,
+  listSheets,
+  previewSheet,
+  printCheckedSheet,
+  printSheet,
+  readSheet,
+  rotateKey,
+  withdrawSheet,
+} from '../../shared/sheets/contract';
+import { sheetFileName } from '../../shared/sheets/sheetFile';
+import type { Feature } from '../features';
+import { sheetPdf } from '../print';
+import { keysAddress, publicKeys, rotate } from './keys';
+import {
+  byToken,
+  checkAddress,
+  issue,
+  preview,
+  publicSheet,
+  sheetPage,
+  sheetRows,
+  storedSheet,
+  withdraw,
+} from './sheets';
+import { keySet } from './signing';
+
+export { currentKeyId, openKey } from './keys';
+export { issueInside, sheetRows } from './sheets';
+export { verifySheet } from './signing';
+
+export const sheets: Feature = {
+  routes: (serve) => {
+    serve.read(listSheets, async (scope, { query }) => ({ sheets: await sheetRows(scope, query) }));
+    serve.read(previewSheet, async (scope, { query }) => ({ content: await preview(scope, query) }));
+    serve.work(issueSheet, (scope, { body }) => issue(scope, body));
+    serve.read(readSheet, (scope, { params }) => sheetPage(scope, params.sheetId));
+    serve.write(withdrawSheet, (scope, { params, body }) => withdraw(scope, params.sheetId, body));
+    serve.read(listKeys, async (scope) => ({
+      keysAt: keysAddress(scope.house.config.origin, scope.roomId),
+      keys: await scope.db
+        .selectFrom('roomKey')
+        .where('roomId', '=', scope.roomId)
+        .select(['id', 'createdAt', 'retiredAt'])
+        .orderBy('createdAt', 'desc')
+        .execute(),
+    }));
+    serve.write(rotateKey, async (scope) => ({ id: await rotate(scope) }));
+    serve.read(printSheet, async (scope, { params }, { res }) => {
+      const { content, token } = await storedSheet(scope, params.sheetId);
+      sendPdf(
+        res,
+        content,
+        await sheetPdf(content, params.paper, { checkUrl: checkAddress(scope.house.config.origin, token) }),
+      );
+      return null;
+    });
+    serve.open(checkSheetPage, async (asked, { params }, { res }) => {
+      keepFromSearch(res);
+      return publicSheet(asked, params.token);
+    });
+    serve.open(printCheckedSheet, async (asked, { params }, { res }) => {
+      const { content } = await byToken(asked.db, params.token);
+      keepFromSearch(res);
+      const sheet = SheetContent.parse(JSON.parse(content));
+      sendPdf(
+        res,
+        sheet,
+        await sheetPdf(sheet, params.paper, { checkUrl: checkAddress(asked.house.config.origin, params.token) }),
+      );
+      return null;
+    });
+  },
+  pages: (app, house) => {
+    // Published for anyone, on any site: other installations check our sheets by them.
+    app.get('/keys/:file', async (req, res) => {
+      const roomId = /^([0-9a-f-]{36})\.json$/.exec(req.params.file)?.[1] ?? '';
+      const keys = isId(roomId) ? await publicKeys({ db: house.db, roomId }) : [];
+      if (keys.length === 0) throw notFound('Those keys');
+      res.set({ 'Cache-Control': 'public, max-age=300', 'Access-Control-Allow-Origin': '*' }).json(keySet(keys));
+    });
+  },
+};
+
+function keepFromSearch(res: Response): void {
+  res.set({ 'X-Robots-Tag': 'noindex', 'Referrer-Policy': 'no-referrer' });
+}
+
+function sendPdf(res: Response, content: SheetContent, pdf: Buffer): void {
+  const name = sheetFileName(content.issue.number).replace('.kinwater.json', '.pdf');
+  res.set({
+    'Content-Type': 'application/pdf',
+    'Content-Disposition': `inline; filename="${name}"`,
+    'Cache-Control': 'private, no-store',
+  });
+  res.send(pdf);
+}
