@@ -51,12 +51,15 @@ beforeEach(async () => {
   }
 });
 
-/** Ids that no row has; words where a path takes words. */
+/** Words that some paths take instead of an id. */
+const WORDS: Record<string, string> = { size: 'small', paper: 'a4' };
+
+/** Ids that no row has. */
 const paramsOf = ({ line }: Named, room: string): Record<string, string> =>
   Object.fromEntries(
     [...line.path.matchAll(/:([A-Za-z]+)/g)].map(([, name = '']) => [
       name,
-      name === 'roomId' ? room : name === 'size' ? 'small' : makeId(),
+      name === 'roomId' ? room : (WORDS[name] ?? makeId()),
     ]),
   );
 
