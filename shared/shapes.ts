@@ -51,3 +51,20 @@ export const Heads = z
 export const HeadsOrNone = z
   .number('Type how many')
   .check(z.int('Whole fish only'), z.minimum(0, 'Zero or more'), z.maximum(100_000, 'That is over 100 000'));
+
+/** A line of a form that may stay empty: an empty one is null. */
+export const typedLine = (limit: number) =>
+  z.codec(z.optional(z.string()), z.nullable(line(limit, 'Type it, or leave it empty')), {
+    decode: (text) => text?.trim() || null,
+    encode: (stored) => stored ?? '',
+  });
+
+/** A note of a form: several lines, empty is null. */
+export const TypedNote = z.codec(
+  z.optional(z.string().check(z.maxLength(4000, 'Keep it under 4000 letters'))),
+  z.nullable(z.string()),
+  {
+    decode: (text) => text?.trim() || null,
+    encode: (stored) => stored ?? '',
+  },
+);

@@ -1,6 +1,7 @@
 import { librarySpecies, profileOf, unlistedSpecies } from '../../shared/species/library';
 import { profileFrom, type SpeciesOverrides, type SpeciesProfile } from '../../shared/species/profile';
 import type { Scope } from '../scope';
+import { speciesNames } from './names';
 
 type Room = Pick<Scope, 'db' | 'roomId'>;
 
@@ -37,4 +38,27 @@ export async function profileIn({ db, roomId }: Room, speciesId: string): Promis
     unlistedSpecies({ ...JSON.parse(row.about), id: speciesId, name: row.scientificName ?? 'Not named' }),
     overrides,
   );
+}
+
+type Seen = { id: string; name: string; about: Record<string, unknown> | null; overrides: Record<string, unknown> };
+
+/** Species as `shared/species/profilesIn` takes them: the library is in the app, only what differs is sent. */
+export async function speciesSeen(room: Room, ids: string[]): Promise<Seen[]> {
+  const nameOf = await speciesNames(room);
+  if (ids.length === 0) return [];
+  const rows = await room.db
+    .selectFrom('speciesOverride')
+    .where('roomId', '=', room.roomId)
+    .where('id', 'in', ids)
+    .select(['id', 'about', 'figures'])
+    .execute();
+  return ids.map((id) => {
+    const row = rows.find((one) => one.id === id);
+    return {
+      id,
+      name: nameOf(id),
+      about: row?.about ? JSON.parse(row.about) : null,
+      overrides: row ? valuesOf(row.figures) : {},
+    };
+  });
 }

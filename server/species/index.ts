@@ -2,7 +2,7 @@ import { addSpecies, listSpecies, setSpecies } from '../../shared/species/contra
 import type { Feature } from '../features';
 import { addOne, setOne, speciesRows } from './species';
 
-export { figuresOf, profileIn, valuesOf } from './figures';
+export { figuresOf, profileIn, speciesSeen, valuesOf } from './figures';
 export { speciesNames } from './names';
 
 export const species: Feature = {

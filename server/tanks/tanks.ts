@@ -5,6 +5,8 @@ import type { addTank, changeTank, readTank, TankRow } from '../../shared/tanks/
 import { audit } from '../db/audit';
 import { isUniqueViolation } from '../db/constraint';
 import type { Scope } from '../scope';
+import { speciesSeen } from '../species';
+import { lodgersIn } from './lodgers';
 import { type Stayed, staysOf } from './residents';
 
 type Told = z.input<typeof TankRow>;
@@ -27,7 +29,14 @@ export async function oneTank(scope: Scope, tankId: string): Promise<Told> {
 export async function tankPage(scope: Scope, tankId: string): Promise<z.input<typeof readTank.output>> {
   const tank = await oneTank(scope, tankId);
   const stays = await staysOf(scope, { tankId, openOnly: false });
-  return { tank, stays: stays.map(({ resident, fromDay, untilDay }) => ({ resident, fromDay, untilDay })) };
+  const lodgers = await lodgersIn(scope, tank);
+  const species = await speciesSeen(scope, [...new Set(lodgers.map(({ speciesId }) => speciesId))]);
+  return {
+    tank,
+    lodgers,
+    species,
+    stays: stays.map(({ resident, fromDay, untilDay }) => ({ resident, fromDay, untilDay })),
+  };
 }
 
 function tankRows({ db, roomId }: Scope, tankId?: string) {

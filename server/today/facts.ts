@@ -1,12 +1,11 @@
 import type * as z from 'zod/mini';
 import { headCountOf } from '../../shared/broods/headCount';
 import { addDays } from '../../shared/days';
-import { librarySpecies } from '../../shared/species/library';
 import type { TankToday, TodayFacts } from '../../shared/today/facts';
 import { batchesOf, broodRows } from '../broods';
 import { holdRows } from '../holds';
 import type { Scope } from '../scope';
-import { figuresOf, speciesNames } from '../species';
+import { speciesSeen } from '../species';
 import { allTanks } from '../tanks';
 import { careRows, readingRows } from '../water';
 import { intervalsOf } from './intervals';
@@ -119,28 +118,6 @@ async function batchesNow(scope: Scope, broods: Awaited<ReturnType<typeof broodR
       },
     ];
   });
-}
-
-async function speciesSeen(scope: Scope, ids: string[]): Promise<Told['species']> {
-  const nameOf = await speciesNames(scope);
-  const seen: Told['species'] = [];
-  for (const id of ids) {
-    const row = librarySpecies(id)
-      ? undefined
-      : await scope.db
-          .selectFrom('speciesOverride')
-          .where('roomId', '=', scope.roomId)
-          .where('id', '=', id)
-          .select('about')
-          .executeTakeFirst();
-    seen.push({
-      id,
-      name: nameOf(id),
-      about: row?.about ? JSON.parse(row.about) : null,
-      overrides: await figuresOf(scope, id),
-    });
-  }
-  return seen;
 }
 
 async function failedLetters({ db, roomId }: Scope): Promise<number> {

@@ -52,6 +52,17 @@ export const Resident = z.strictObject({
 });
 export type Resident = z.output<typeof Resident>;
 
+export const Lodging = z.strictObject({
+  name: z.string(),
+  speciesId: z.string(),
+  locality: z.nullable(z.string()),
+  males: z.number(),
+  females: z.number(),
+  unsexed: z.number(),
+  smallestMm: z.nullable(z.number()),
+  largestMm: z.nullable(z.number()),
+});
+
 export const TankRow = z.strictObject({
   id: Id,
   version: Version,
@@ -76,6 +87,17 @@ export const readTank = endpoint({
   params: inRoom({ tankId: Id }),
   output: z.strictObject({
     tank: TankRow,
+    /** Who lives in it as the stocking check takes them: by species, sex and size. */
+    lodgers: z.array(Lodging),
+    /** Their species: the library's id, and what this fishroom set. */
+    species: z.array(
+      z.strictObject({
+        id: z.string(),
+        name: z.string(),
+        about: z.nullable(z.record(z.string(), z.unknown())),
+        overrides: z.record(z.string(), z.unknown()),
+      }),
+    ),
     /** Everyone who ever lived in it, newest first. */
     stays: z.array(z.strictObject({ resident: Resident, fromDay: DayText, untilDay: z.nullable(DayText) })),
   }),
