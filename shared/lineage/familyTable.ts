@@ -1,5 +1,4 @@
 import {
-  certainPair,
   type Numbering,
   numberRows,
   OUTSIDE,
@@ -8,7 +7,7 @@ import {
   pairOptions,
   rowFinder,
 } from './parentOptions';
-import type { PedigreeEntry } from './pedigree';
+import type { Parentage, PedigreeEntry } from './pedigree';
 import { PedigreeError } from './pedigreeError';
 
 /**
@@ -58,23 +57,42 @@ function addEntries(table: FamilyTable, pedigree: PedigreeEntry[], numbering: Nu
   const simple = new Map<number, number>();
   const uncertain = new Map<string, number>();
   for (const entry of pedigree) {
-    const certain = certainPair(entry, numbering);
+    const key = certainKey(entry, numbering);
     table.familyOf.push(
-      certain
-        ? familyFor(simple, pairKey(certain), table, () => [certain])
-        : uncertainFamily(table, uncertain, pairOptions(entry, numbering)),
+      key === undefined
+        ? uncertainFamily(table, uncertain, pairOptions(entry, numbering))
+        : certainFamily(table, simple, key),
     );
   }
 }
 
-function uncertainFamily(table: FamilyTable, families: Map<string, number>, pairs: PairOption[]): number {
-  return familyFor(families, listKey(pairs), table, () => pairs);
+/** Both certain parents as one exact integer, 26 bits each: most entries are such, and nothing else is made for them. */
+function certainKey(entry: PedigreeEntry, { row }: Numbering): number | undefined {
+  if ('from' in entry || isDoubtful(entry.sire) || isDoubtful(entry.dam)) return undefined;
+  const { sire, dam } = entry;
+  const sireRow = sire.kind === 'known' ? row(sire.id) : OUTSIDE;
+  const damRow = dam.kind === 'known' ? row(dam.id) : OUTSIDE;
+  return (sireRow + 1) * KEY_STEP + (damRow + 1);
 }
 
-function familyFor<K>(families: Map<K, number>, key: K, table: FamilyTable, pairs: () => PairOption[]): number {
+const KEY_STEP = 2 ** 26;
+
+const isDoubtful = ({ kind }: Parentage): boolean => kind === 'oneOf' || kind === 'mixed';
+
+function certainFamily(table: FamilyTable, families: Map<number, number>, key: number): number {
   const known = families.get(key);
   if (known !== undefined) return known;
-  const family = addFamily(table, pairs(), false);
+  const sire = Math.floor(key / KEY_STEP) - 1;
+  const family = addFamily(table, [{ sire, dam: (key % KEY_STEP) - 1, weight: 1 }], false);
+  families.set(key, family);
+  return family;
+}
+
+function uncertainFamily(table: FamilyTable, families: Map<string, number>, pairs: PairOption[]): number {
+  const key = listKey(pairs);
+  const known = families.get(key);
+  if (known !== undefined) return known;
+  const family = addFamily(table, pairs, false);
   families.set(key, family);
   return family;
 }
@@ -88,9 +106,6 @@ function addFamily(table: FamilyTable, pairs: PairOption[], isDraw: boolean): nu
   table.start.push(table.sire.length);
   return table.isDraw.push(isDraw) - 1;
 }
-
-// Two numbers of 26 bits each in one exact integer: a number as key is several times faster than a text.
-const pairKey = ({ sire, dam }: PairOption): number => (sire + 1) * 0x4000000 + (dam + 1);
 
 const listKey = (pairs: PairOption[]): string =>
   pairs

@@ -22,7 +22,7 @@ export function founderContributions(pedigree: PedigreeEntry[], ids: string[]): 
   for (const row of rows) {
     const node = sorted.nodeOf[row] ?? 0;
     const family = sorted.familyOf[node] ?? 0;
-    if (sorted.isLeaf[node] !== 1) flow[node] = 1 / rows.length;
+    if (sorted.isLeaf[node] !== 1) flow[node] = (flow[node] ?? 0) + 1 / rows.length;
     else if (isFounder(sorted, family)) founders.set(sorted.ids[row] ?? '', 1 / rows.length);
     else {
       pourParents(sorted, family, flow, 1 / rows.length);

@@ -13,20 +13,6 @@ export type PairOption = { sire: number; dam: number; weight: number };
 /** Gives a number to a candidate's id, and to the one shared animal behind a `oneOf` key. */
 export type Numbering = { row: (id: string) => number; draw: (key: string, options: ParentOption[]) => number };
 
-/** The one pair of an entry without doubt; most entries are such, so nothing else is made for them. */
-export function certainPair(entry: PedigreeEntry, { row }: Numbering): PairOption | undefined {
-  if ('from' in entry) return undefined;
-  const { sire, dam } = entry;
-  if (isDoubtful(sire) || isDoubtful(dam)) return undefined;
-  return {
-    sire: sire.kind === 'known' ? row(sire.id) : OUTSIDE,
-    dam: dam.kind === 'known' ? row(dam.id) : OUTSIDE,
-    weight: 1,
-  };
-}
-
-const isDoubtful = ({ kind }: Parentage): boolean => kind === 'oneOf' || kind === 'mixed';
-
 /** Every pair of parents that `entry` may come from, with its chance. The same pair listed twice is one with both weights. */
 export function pairOptions(entry: PedigreeEntry, numbering: Numbering): PairOption[] {
   const pairs = shares(pairsOf(entry), entry.id).map(({ of, share }) => ({

@@ -22,3 +22,15 @@ export const mixed = (...listed: [string | null, number][]): Parentage => ({
 });
 export const rowsOf = (rows: [string, string | null, string | null][]): PedigreeEntry[] =>
   rows.map(([id, sire, dam]) => child(id, sire, dam));
+
+/** A long pedigree with parents from anywhere before, the same every time (a linear congruential sequence). */
+export function longPedigree(size: number): PedigreeEntry[] {
+  let state = 12_345;
+  const below = (limit: number) => {
+    state = (state * 1_664_525 + 1_013_904_223) % 4_294_967_296;
+    return Math.floor((state / 4_294_967_296) * limit);
+  };
+  return Array.from({ length: size }, (_, place) =>
+    place < 8 ? child(`x${place}`, null, null) : child(`x${place}`, `x${below(place)}`, `x${below(place)}`),
+  );
+}

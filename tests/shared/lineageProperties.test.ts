@@ -1,13 +1,16 @@
 import fc from 'fast-check';
 import Matrix, { EigenvalueDecomposition } from 'ml-matrix';
 import { describe, expect, test } from 'vitest';
+import { equivalentGenerations } from '@/shared/lineage/completeness';
 import { geneDiversity, meanKinship } from '@/shared/lineage/diversity';
 import { founderContributions } from '@/shared/lineage/founders';
+import { generationNumbers } from '@/shared/lineage/generations';
 import { inbreeding } from '@/shared/lineage/inbreeding';
 import { kinship } from '@/shared/lineage/kinship';
 import { kinshipColumns } from '@/shared/lineage/kinshipColumns';
 import type { KinshipMatrix } from '@/shared/lineage/kinshipMatrix';
 import { inbreedingOutcomes } from '@/shared/lineage/outcomes';
+import { parentShares } from '@/shared/lineage/parentShares';
 import type { Parentage, PedigreeEntry } from '@/shared/lineage/pedigree';
 import { solveByColumns } from '@/shared/lineage/solveByColumns';
 import { solveFamilies } from '@/shared/lineage/solveFamilies';
@@ -81,6 +84,30 @@ describe('Uncertain parents are exact expectations', () => {
     );
   });
 
+  test('founder shares and generations known are averages over the assignments, and every generation lies in its range', () => {
+    fc.assert(
+      fc.property(smallPedigrees(400), (pedigree) => {
+        const id = pedigree.at(-1)?.id ?? '';
+        const shares = new Map<string, number>();
+        let depth = 0;
+        const wild = new Map(pedigree.flatMap((entry) => (isFounder(entry) ? [[entry.id, 0] as const] : [])));
+        const range = generationNumbers(pedigree, wild).get(id);
+        for (const { settled, probability } of assignments(pedigree)) {
+          const traced = traceBack(settled, id, (founder) => wild.has(founder));
+          depth += probability * traced.generations;
+          for (const [founder, share] of traced.shares) {
+            shares.set(founder, (shares.get(founder) ?? 0) + probability * share);
+          }
+          if (range) expect(traced.number >= range.low && traced.number <= range.high).toBe(true);
+        }
+        expectSame(equivalentGenerations(pedigree, id), depth, 'generations known');
+        const found = founderContributions(pedigree, [id]);
+        for (const [founder, share] of shares) expectSame(found.get(founder) ?? 0, share, `share of ${founder}`);
+      }),
+      { numRuns: 200 },
+    );
+  });
+
   test('a single candidate is a known parent, whatever its weight and kind', () => {
     fc.assert(
       fc.property(
@@ -109,6 +136,31 @@ describe('Uncertain parents are exact expectations', () => {
     );
   });
 });
+
+const isFounder = (entry: PedigreeEntry): boolean =>
+  parentShares(entry).every(({ id }) => id === null) && !JSON.stringify(entry).includes('oneOf');
+
+/** One fish's genes followed back through certain parents; what ends at no founder came from outside. */
+function traceBack(
+  settled: { id: string; sire: string | null; dam: string | null }[],
+  id: string,
+  founder: (id: string) => boolean,
+) {
+  const parentsOf = new Map(settled.map((entry) => [entry.id, entry]));
+  const shares = new Map<string, number>();
+  let generations = 0;
+  const follow = (of: string | null, share: number): number => {
+    const entry = of === null ? undefined : parentsOf.get(of);
+    const end = of !== null && founder(of) ? of : entry ? null : '?';
+    if (end) shares.set(end, (shares.get(end) ?? 0) + share);
+    if (!entry) return Number.NaN;
+    if (share < 1) generations += share;
+    if (end) return 0;
+    return 1 + Math.min(follow(entry.sire, share / 2), follow(entry.dam, share / 2));
+  };
+  const number = follow(id, 1);
+  return { shares, generations, number };
+}
 
 /** The same certain parents, spelled as a one-of, a mixed clutch, or one pair. */
 function respelled(entry: PedigreeEntry, way: number, weight: number): PedigreeEntry {
@@ -151,7 +203,7 @@ describe('Whatever the pedigree', () => {
             expectSame(mixedUp.between(a, b), plain.between(a, b), `${a}, ${b}`);
           const f = inbreeding(other);
           for (const [id, value] of inbreeding(pedigree)) expectSame(f.get(id) ?? Number.NaN, value, `F of ${id}`);
-          const shares = founderContributions(other, idsOf(pedigree));
+          const shares = founderContributions(other, idsOf(other));
           for (const [id, share] of founderContributions(pedigree, idsOf(pedigree))) {
             expectSame(shares.get(id) ?? Number.NaN, share, `share of ${id}`);
           }
@@ -225,7 +277,7 @@ describe('Whatever the pedigree', () => {
         const plain = meanKinship(asked, ids);
         for (const [id, mean] of meanKinship(kinship(pedigree), ids)) expectSame(mean, plain.get(id) ?? Number.NaN, id);
         expectSame(geneDiversity(asked, ids), geneDiversity(kinship(pedigree), ids), 'gene diversity');
-        const shares = [...founderContributions(pedigree, ids).values()];
+        const shares = [...founderContributions(pedigree, ids.toReversed()).values()];
         expectSame(
           shares.reduce((sum, share) => sum + share, 0),
           1,
