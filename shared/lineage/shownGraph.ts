@@ -5,7 +5,7 @@ import { sortPedigree } from './sortedPedigree';
 /** Shares of one side's parents that no line stands for: `unknown` to anyone, or `hidden` because not among the entries. */
 export type Undrawn = { unknown: number; hidden: number };
 
-export type ShownLine = { parent: string; child: string; side: Side; share: number };
+type ShownLine = { parent: string; child: string; side: Side; share: number };
 
 /** What there is to draw: lines between entries, rows with the oldest as 0, and what no line stands for. */
 export type ShownGraph = {

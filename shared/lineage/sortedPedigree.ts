@@ -4,10 +4,10 @@ import { OUTSIDE } from './parentOptions';
 import type { PedigreeEntry } from './pedigree';
 
 /** Possible pairs of every family, as nodes (`OUTSIDE` for an animal outside); those of family `f` from `start[f]` on. */
-export type PairList = { start: Int32Array; sire: Int32Array; dam: Int32Array; weight: Float64Array };
+type PairList = { start: Int32Array; sire: Int32Array; dam: Int32Array; weight: Float64Array };
 
 /** Where every family's genes come from: the share (0 to 1) of each parent node; those of family `f` from `start[f]` on. */
-export type ParentList = { start: Int32Array; node: Int32Array; share: Float64Array };
+type ParentList = { start: Int32Array; node: Int32Array; share: Float64Array };
 
 /**
  * A pedigree put in order for counting. A node is an animal that is a possible parent, the one animal behind a `oneOf` key,

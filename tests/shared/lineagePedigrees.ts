@@ -9,7 +9,7 @@ export const child = (id: string, sire: string | null, dam: string | null): Pedi
   sire: known(sire),
   dam: known(dam),
 });
-export const candidates = (...listed: [string | null, number][]): Candidate[] =>
+const candidates = (...listed: [string | null, number][]): Candidate[] =>
   listed.map(([id, weight]) => ({ id, weight }));
 export const oneOf = (key: string, ...listed: [string | null, number][]): Parentage => ({
   kind: 'oneOf',
