@@ -41,7 +41,7 @@ const hash = (bytes: Buffer): string => createHash('sha256').update(bytes).diges
 
 /** Ends of the fish along the picture: a column of pixels that it covers in part counts as that part. */
 async function extentOfFish(description: Description): Promise<{ left: number; right: number }> {
-  const { data, info } = await sharp(Buffer.from(svgOf(draw(description), 'subject')))
+  const { data, info } = await sharp(Buffer.from(svgOf(draw(description), ['subject'])))
     .ensureAlpha()
     .raw()
     .toBuffer({ resolveWithObject: true });
@@ -113,7 +113,7 @@ describe('a fish over the ruler', () => {
     const drawing = draw(fish({ lengthMm: 46, spanMm: 64 }));
     const zeroX = drawing.ruler?.zeroX ?? Number.NaN;
     const y = Math.round((drawing.ruler?.topY ?? Number.NaN) + 4);
-    const { data, info } = await sharp(Buffer.from(svgOf(drawing, 'front')))
+    const { data, info } = await sharp(Buffer.from(svgOf(drawing, ['front'])))
       .flatten({ background: '#ffffff' })
       .greyscale()
       .raw()
@@ -133,7 +133,7 @@ describe('a fish over the ruler', () => {
 describe('a tray of fry', () => {
   test('keeps every fry off the ruler and inside the picture', async () => {
     const drawing = draw(tray({ count: 20 }));
-    const { info } = await sharp(Buffer.from(svgOf(drawing, 'subject')))
+    const { info } = await sharp(Buffer.from(svgOf(drawing, ['subject'])))
       .ensureAlpha()
       .trim()
       .toBuffer({ resolveWithObject: true });
@@ -149,6 +149,14 @@ describe('the photograph made of a drawing', () => {
     const read = await exifr.parse(bytes, { reviveValues: false });
     expect(read.DateTimeOriginal).toBe('2025:11:09 18:04:31');
     expect((await sharp(bytes).metadata()).format).toBe('jpeg');
+  });
+
+  test('has the colours of the drawing', async () => {
+    const drawing = draw(fish({ setting: 'tank', companions: 2 }));
+    const means = async (bytes: Buffer) => (await sharp(bytes).removeAlpha().stats()).channels.map(({ mean }) => mean);
+    const photograph = await means(await jpegOf(drawing, { takenAt: '2025-11-09T18:04:31' }));
+    const plain = await means(Buffer.from(svgOf(drawing)));
+    for (const [i, mean] of photograph.entries()) expect(Math.abs(mean - (plain[i] ?? 0))).toBeLessThan(6);
   });
 
   test.each([1, 3, 6, 8] as const)(

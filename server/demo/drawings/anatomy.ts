@@ -53,7 +53,7 @@ export type FinPaint = {
   bands?: readonly FinBand[];
   spots?: readonly FinSpots[];
 };
-export type FinBand = { from: number; to: number; start?: number; end?: number; colour: string; cover: number };
+type FinBand = { from: number; to: number; start?: number; end?: number; colour: string; cover: number };
 /** Rows of spots between two shares of the base (t) and of the height (s). */
 export type FinSpots = {
   t: readonly [number, number];
@@ -100,7 +100,7 @@ export type Colouring = {
   sparkleCover: number;
 };
 
-export type Life = 'male' | 'female' | 'juvenile';
+type Life = 'male' | 'female' | 'juvenile';
 export type Drawn = {
   anatomy: Anatomy;
   adultMm: number;

@@ -121,8 +121,12 @@ export function draw(description: Description): Drawing {
   return description.setting === 'box' ? drawInBox(description) : drawInTank(description);
 }
 
-/** One layer, or all of them, as an SVG document. */
-export function svgOf({ size, ...layers }: Drawing, only?: 'backdrop' | 'subject' | 'front'): string {
-  const inside = only ? layers[only] : layers.backdrop + layers.subject + layers.front;
-  return `<svg xmlns="http://www.w3.org/2000/svg" width="${size.w}" height="${size.h}" viewBox="0 0 ${size.w} ${size.h}">${inside}</svg>`;
+type Layers = readonly ('backdrop' | 'subject' | 'front')[];
+
+/** Some layers of a drawing, or all of them, as an SVG document of the drawing's size or scaled. */
+export function svgOf(drawing: Drawing, layers: Layers = ['backdrop', 'subject', 'front'], scale = 1): string {
+  const { w, h } = drawing.size;
+  const inside = layers.map((layer) => drawing[layer]).join('');
+  const [width, height] = [Math.round(w * scale), Math.round(h * scale)];
+  return `<svg xmlns="http://www.w3.org/2000/svg" width="${width}" height="${height}" viewBox="0 0 ${w} ${h}">${inside}</svg>`;
 }

@@ -1,4 +1,4 @@
-export type { Description, Drawing, FishDescription, TrayDescription } from './description';
+export type { Description, FishDescription, TrayDescription } from './description';
 export { draw, svgOf } from './draw';
-export { type Capture, jpegOf, type Orientation } from './jpeg';
+export { jpegOf, type Orientation } from './jpeg';
 export { DRAWN, type DrawnSpecies } from './species';

@@ -39,8 +39,8 @@ function boulder(frame: Frame, chance: Chance, scenery: Scenery, near: number): 
       const size = rx * between(chance, low, high);
       return smoothPath(oval(p, size, size * between(chance, 0.35, 0.7), between(chance, -0.6, 0.6), 10), true);
     }).join('');
-  const layers = steps(9).map((share) =>
-    fill(smoothPath(outline(1 - 0.62 * share, 0.42 * share), true), lit(tone, 0.6 + 0.85 * share), 0.85),
+  const layers = steps(22).map((share) =>
+    fill(smoothPath(outline(1 - 0.62 * share, 0.42 * share), true), lit(tone, 0.6 + 0.8 * share), 0.6),
   );
   return [
     ...layers,
@@ -69,22 +69,12 @@ function sand(frame: Frame, chance: Chance, scenery: Scenery): string {
     point(frame.w * share, top + frame.h * 0.012 * Math.sin(share * 9 + chance())),
   );
   const ground = linePath([...crest, point(frame.w, frame.h), point(0, frame.h)], true);
-  const base = mix(scenery.sand, scenery.water[1], 0.3);
+  const far = mix(scenery.sand, scenery.water[1], 0.36);
+  const near = mix(scenery.sand, scenery.water[1], 0.12);
   return [
-    fill(ground, base),
-    fill(
-      linePath(
-        [
-          point(0, top + frame.h * 0.07),
-          point(frame.w, top + frame.h * 0.06),
-          point(frame.w, frame.h),
-          point(0, frame.h),
-        ],
-        true,
-      ),
-      mix(scenery.sand, scenery.water[1], 0.08),
-      0.55,
-    ),
+    `<linearGradient id="sand" x1="0" y1="0" x2="0" y2="1"><stop offset="0" stop-color="${far}"/>`,
+    `<stop offset="0.5" stop-color="${near}"/><stop offset="1" stop-color="${lit(near, 0.8)}"/></linearGradient>`,
+    fill(ground, 'url(#sand)'),
   ].join('');
 }
 
