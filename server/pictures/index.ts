@@ -14,11 +14,7 @@ import { keyOf, openShelf, type PictureKey } from './shelf';
 import { type Swept, sweepShelf } from './sweep';
 
 export { whileDrawing } from './decoders';
-export type { PictureSize } from './develop';
-export type { PictureReport, PictureRow } from './integrity';
-export { PICTURE_FIELD, type Upload } from './receive';
 export { mustFitQuota } from './refusals';
-export type { PictureKey } from './shelf';
 
 const AT_ONCE = 2;
 const WAITING = 20;

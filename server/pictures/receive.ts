@@ -9,7 +9,7 @@ import * as refusals from './refusals';
 export type Upload = { file: string; fields: Record<string, string> };
 
 /** The form field that holds the picture; there is exactly one in a request. */
-export const PICTURE_FIELD = 'picture';
+const PICTURE_FIELD = 'picture';
 /** Room for the other fields and the form's own lines. */
 const FORM_BYTES = 128_000;
 const MAX_FIELDS = 20;

@@ -7,7 +7,7 @@ import type { PictureKey, Shelf } from './shelf';
 const LONGEST_NAME = 100;
 
 /** Headers of a served picture. `name` is what the browser calls it when it is saved, without an ending. */
-export function servingHeaders(name: string): Record<string, string> {
+function servingHeaders(name: string): Record<string, string> {
   return {
     'Content-Type': 'image/webp',
     'X-Content-Type-Options': 'nosniff',

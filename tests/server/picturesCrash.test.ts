@@ -2,6 +2,7 @@ import { spawn } from 'node:child_process';
 import { existsSync, mkdtempSync, readdirSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { fileURLToPath } from 'node:url';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { openPictures } from '@/server/pictures';
 import * as b from '../support/pictureBytes';
@@ -24,7 +25,7 @@ function storeIn(
   id: string,
   { crashAt = '', killAfterMs }: { crashAt?: string; killAfterMs?: number },
 ) {
-  const script = join(import.meta.dirname, '../support/storeAndDie.ts');
+  const script = fileURLToPath(new URL('../support/storeAndDie.ts', import.meta.url));
   const child = spawn(process.execPath, ['--import', 'tsx', script, folder, photo, roomId, id, crashAt]);
   let said = '';
   let errors = '';

@@ -2,8 +2,13 @@ import { readFileSync, statSync } from 'node:fs';
 import sharp from 'sharp';
 import { afterAll, afterEach, beforeAll, describe, expect, test } from 'vitest';
 import { STATUS } from '@/shared/refusal';
-import * as hostile from '../support/hostilePictures';
+import type { PictureCase } from '../support/hostileCase';
+import { oddMetadata } from '../support/hostileMetadata';
+import { malformed, spoiled, truncated } from '../support/hostileParts';
+import { notPictures, polyglots } from '../support/hostilePictures';
+import { bombs } from '../support/hostileSizes';
 import { type Answer, eventually, type PictureServer, pictureServer } from '../support/pictureServer';
+import { unusual } from '../support/unusualPictures';
 
 /** What one picture may cost while it is worked on, the largest allowed included. */
 const MEMORY_LIMIT = 250_000_000;
@@ -15,16 +20,18 @@ beforeAll(async () => {
 afterEach(() => server.empty());
 afterAll(() => server.close());
 
-describe.each([
-  ['is no picture', hostile.notPictures],
-  ['carries something else', hostile.polyglots],
-  ['unpacks to something enormous', hostile.bombs],
-  ['is cut off', hostile.truncated],
-  ['is spoiled', hostile.spoiled],
-  ['contradicts its format', hostile.malformed],
-  ['has odd metadata', hostile.oddMetadata],
-  ['is unusual but honest', hostile.unusual],
-])('a file that %s', (_kind, cases) => {
+const KINDS: [string, PictureCase[]][] = [
+  ['is no picture', notPictures],
+  ['carries something else', polyglots],
+  ['unpacks to something enormous', bombs],
+  ['is cut off', truncated],
+  ['is spoiled', spoiled],
+  ['contradicts its format', malformed],
+  ['has odd metadata', oddMetadata],
+  ['is unusual but honest', unusual],
+];
+
+describe.each(KINDS)('a file that %s', (_kind, cases) => {
   test.each(cases)('$name: $outcome', async ({ make, outcome }) => {
     const file = await make();
     const { answer, grown } = await watchingMemory(() => server.send(file));
@@ -40,8 +47,7 @@ describe.each([
 });
 
 test('there are more than a hundred such files', () => {
-  const all = Object.values(hostile).flatMap((list) => (Array.isArray(list) ? list : []));
-  expect(all.length).toBeGreaterThan(150);
+  expect(KINDS.flatMap(([, cases]) => cases).length).toBeGreaterThan(150);
 });
 
 /** Two small WebP files without a trace of what came with the picture. */
