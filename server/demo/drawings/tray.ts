@@ -47,7 +47,7 @@ export function drawTray(tray: TrayDescription): Drawing {
   const drawn = DRAWN[species];
   const chance = chanceOf(`${tray.shot} ${species} tray`);
   // A group needs room: each animal about three times its own area.
-  const span = tray.spanMm ?? spanFor(lengthMm * Math.sqrt(count) * (life === 'eggs' ? 1.5 : 1.25), 1);
+  const span = tray.spanMm ?? spanFor(lengthMm * Math.sqrt(count) * 1.5, 1);
   const pxPerMm = size.w / span;
   const unit = lengthMm * pxPerMm;
   const rulerTop = size.h * 0.875;

@@ -7,16 +7,16 @@ import type { Teller } from './telling';
 
 /** Broods that are photographed over the ruler, with the width in mm that all their pictures keep. */
 const FOLLOWED: Readonly<Record<string, number>> = {
-  m1: 80,
-  m3: 80,
-  m4: 48,
-  l4: 80,
-  l5: 64,
-  e3: 100,
-  e4: 48,
-  s5: 64,
-  c2: 100,
-  a2: 64,
+  m1: 64,
+  m3: 64,
+  m4: 40,
+  l4: 64,
+  l5: 48,
+  e3: 80,
+  e4: 32,
+  s5: 48,
+  c2: 80,
+  a2: 48,
 };
 /** Broods whose young were photographed in the tray as they came. */
 const IN_TRAY = new Set(['m1', 'm4', 'l2', 'e1', 'e4', 's1', 's6', 'f1']);
