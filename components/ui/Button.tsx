@@ -96,7 +96,7 @@ const styles = StyleSheet.create({
     borderWidth: line.control,
   },
   fit: { alignSelf: 'flex-start' },
-  grow: { flexGrow: 1, flexBasis: 0 },
+  grow: { flexGrow: 1, flexShrink: 1 },
   label: { flexShrink: 1, lineHeight: 20 },
   underlined: {
     flexShrink: 1,
