@@ -1,4 +1,6 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
+import { setRole } from '@/server/members/members';
+import type { Scope } from '@/server/scope';
 import { getMe, signUp } from '@/shared/accounts/contract';
 import { listAudit } from '@/shared/audit/contract';
 import {
@@ -207,6 +209,36 @@ describe('roles', () => {
         .execute();
       expect(owners, `round ${round}`).toHaveLength(1);
     }
+  });
+
+  test('S41 a request that was let in before its owner was demoted is refused when its turn to write comes', async () => {
+    const { owner, roomId } = await ownerWithRoom(app);
+    const second = await memberOf(app, roomId, 'owner');
+    const third = await memberOf(app, roomId, 'owner');
+    const { house } = app;
+    // What the second owner's request was given when it came in.
+    const before: Omit<Scope, 'db'> = {
+      house,
+      now: house.clock.now().toISOString(),
+      requestId: 'before',
+      log: house.log,
+      address: '',
+      device: '',
+      accountId: second.id,
+      sessionId: second.id,
+      roomId,
+      actorId: second.id,
+      role: 'owner',
+      timeZone: 'Europe/Oslo',
+      currency: 'EUR',
+      today: '2026-05-14',
+    };
+    await owner.get(changeRole, { params: { roomId, accountId: second.id }, body: { role: 'viewer', version: 1 } });
+    const late = house.db
+      .transaction()
+      .execute((db) => setRole({ ...before, db }, third.id, { role: 'viewer', version: 1 }));
+    await expect(late).rejects.toMatchObject({ reason: 'forbidden' });
+    expect((await rolesIn(owner, roomId))[third.name]).toBe('owner');
   });
 
   test('an owner whose account is closed does not count as one', async () => {
