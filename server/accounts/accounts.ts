@@ -66,7 +66,7 @@ async function isInvited({ db, now }: Asked, token: string, emailFolded: string)
 export const accountOf = ({ db, accountId }: SignedIn) =>
   db.selectFrom('account').where('id', '=', accountId).selectAll().executeTakeFirstOrThrow();
 
-export const choicesOf = (text: string): Choices => {
+const choicesOf = (text: string): Choices => {
   const known = Choices.safeParse(JSON.parse(text));
   return known.success ? known.data : { units: null };
 };

@@ -9,7 +9,7 @@ import { hashOfToken, tokenOf } from '../mail/tokens';
 import { TOKEN_HERE, writeLetter } from '../mail/writeLetter';
 import type { Scope } from '../scope';
 
-export const GOOD_FOR_DAYS = 14;
+const GOOD_FOR_DAYS = 14;
 const DAY_MS = 86_400_000;
 /** Open at once in a fishroom: letters go to addresses that nobody has proved. */
 const OPEN_MAX = 30;

@@ -9,7 +9,7 @@ import { Email, LinkToken, NewPassword } from './shapes';
  */
 
 export const AskForLetter = z.strictObject({ email: Email });
-export const UseLink = z.strictObject({ token: LinkToken });
+const UseLink = z.strictObject({ token: LinkToken });
 
 /** Another letter that asks to confirm the address. */
 export const askVerifyLetter = endpoint({

@@ -24,7 +24,7 @@ export const foldedEmail = (email: string): string => email.normalize('NFKC').to
 export const PersonName = line(80, 'Type your name');
 
 export const PASSWORD_MIN = 8;
-export const PASSWORD_MAX = 128;
+const PASSWORD_MAX = 128;
 
 /** Letters as people count them: an emoji of one code point is one. */
 const lettersOf = (text: string): number => [...text].length;

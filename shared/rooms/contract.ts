@@ -7,9 +7,9 @@ import { ROLES } from '../roles';
 import { line, Version } from '../shapes';
 import { UnitChoices } from '../units';
 
-export const RoomName = line(80, 'Type the fishroom’s name');
+const RoomName = line(80, 'Type the fishroom’s name');
 
-export const TimeZone = z
+const TimeZone = z
   .string('Choose a time zone')
   .check(z.maxLength(60, 'Choose a time zone'), z.refine(isTimeZone, 'Choose a time zone such as Europe/Oslo'));
 
@@ -22,7 +22,7 @@ const Place = z.nullable(
 );
 
 /** The word in public addresses: small letters, digits and hyphens. */
-export const Slug = z
+const Slug = z
   .string('Type a word')
   .check(
     z.regex(/^[a-z0-9]+(?:-[a-z0-9]+)*$/, 'Small letters, digits and hyphens only'),

@@ -244,6 +244,24 @@ describe('the fishroom', () => {
     expect([answer.status, answer.body.error?.fields]).toEqual([409, { slug: 'Another fishroom has that word' }]);
   });
 
+  test('its currency stays once there are orders in it: 1250 pence are not 1250 yen', async () => {
+    const { owner, roomId } = await ownerWithRoom(app);
+    const { slug } = await owner.get(getRoom, { params: { roomId } });
+    const change = (currency: string, version: number) =>
+      owner.ask(changeRoom, { params: { roomId }, body: { ...body, currency, slug, version } });
+    expect((await change('GBP', 1)).status).toBe(200);
+    const at = app.house.clock.now().toISOString();
+    const { db } = app.house;
+    await db.insertInto('buyer').values({ roomId, id: 'buyer', name: 'Ane', createdAt: at }).execute();
+    await db
+      .insertInto('purchase')
+      .values({ roomId, id: 'order', number: 1, buyerId: 'buyer', state: 'reserved', tokenHash: roomId, createdAt: at })
+      .execute();
+    const refused = await change('JPY', 2);
+    expect([refused.status, Object.keys(refused.body.error?.fields ?? {})]).toEqual([409, ['currency']]);
+    expect((await change('GBP', 2)).status).toBe(200);
+  });
+
   test('what other settings it has outlive a change of units', async () => {
     const { owner, roomId } = await ownerWithRoom(app);
     const { db } = app.house;
