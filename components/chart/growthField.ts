@@ -31,7 +31,7 @@ export function growthField(chart: GrowthChartProps, width: number, height: numb
   const end = days.at(-1) ?? today;
   const last = daysBetween(first, end) < 14 ? addDays(first, 14) : end;
   const highest = Math.max(1, target?.value ?? 0, ...[...samples, ...fit, ...forecast].map((point) => point.high));
-  const ticks = niceTicks(0, highest, 6);
+  const ticks = niceTicks(0, highest, 7);
   const [left, right, base] = [LEFT, width - RIGHT, height - FOOT];
   const scaleX = straight([0, daysBetween(first, last)], left, right);
   return {

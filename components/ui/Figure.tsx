@@ -19,7 +19,7 @@ export function Figure({ children, size = 's', after, tone = 'ink' }: Props) {
   return (
     <NativeText style={[face, { color, fontSize: px, lineHeight: px * 0.95 }, size === 'xl' ? tight : null]}>
       {children}
-      {after ? <NativeText style={{ fontSize: Math.round(px * 0.58) }}>{after}</NativeText> : null}
+      {after ? <NativeText style={{ fontSize: Math.round(px * 0.58), lineHeight: 1 }}>{after}</NativeText> : null}
     </NativeText>
   );
 }

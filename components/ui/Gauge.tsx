@@ -30,7 +30,7 @@ function GaugeLine(reading: GaugeReading) {
   const x = (value: number) =>
     (Math.min(most, Math.max(least, value)) - least) * (WIDTH / Math.max(most - least, 1e-9));
   return (
-    <Svg width={WIDTH} height={HEIGHT}>
+    <Svg width="100%" height={HEIGHT} viewBox={`0 0 ${WIDTH} ${HEIGHT}`} preserveAspectRatio="none">
       <Path d={`M0 13.5H${WIDTH}`} stroke={theme.control} />
       <Rect x={x(from)} y={7} width={Math.max(1, x(to) - x(from))} height={13} fill={theme.band} />
       <Rect
@@ -110,7 +110,7 @@ const styles = StyleSheet.create({
     borderBottomWidth: line.row,
     paddingVertical: space[1],
   },
-  name: { flexGrow: 1, flexShrink: 1, flexBasis: 0 },
+  name: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 90 },
   value: { minWidth: 84, flexShrink: 0 },
-  gauge: { width: WIDTH, flexShrink: 0 },
+  gauge: { width: WIDTH, flexShrink: 1, minWidth: 48 },
 });

@@ -51,7 +51,7 @@ export function Screen({ children, dock, fixed, low = false, measure = false, ..
             style={styles.fill}
             contentContainerStyle={[
               styles.body,
-              { paddingHorizontal: side, paddingTop: phone ? 0 : pane === 'list' ? 0 : space[3] },
+              { paddingHorizontal: side },
               measure && !phone ? styles.measure : null,
             ]}
           >

@@ -72,9 +72,10 @@ function WideHead(props: ScreenHeadProps) {
   const pane = usePane();
   const gutter = useGutter();
   const alone = pane === 'alone';
-  const inset = pane === 'list' ? { paddingHorizontal: gutter } : { marginHorizontal: gutter };
+  // A list runs to the pane's edges and so does its rule; elsewhere the first section brings its own.
+  const rule = pane === 'list' ? { borderBottomWidth: line.section, borderBottomColor: theme.ruleStrong } : null;
   return (
-    <View style={[styles.wide, inset, { borderBottomColor: theme.ruleStrong }]}>
+    <View style={[styles.wide, { paddingHorizontal: gutter }, rule]}>
       {alone && props.back ? <IconButton icon="back" label="Back" href={props.back} /> : null}
       {props.close ? <IconButton icon="close" label={props.close.label} onPress={props.close.onPress} /> : null}
       <View style={styles.wideWords}>
@@ -135,7 +136,6 @@ const styles = StyleSheet.create({
     gap: space[3],
     minHeight: 78,
     paddingVertical: space[3],
-    borderBottomWidth: line.section,
   },
   wideWords: {
     flexDirection: 'row',

@@ -105,6 +105,7 @@ export const iconMarks = {
   copy: [{ d: 'M8.5 8.5h12v12h-12zM15.5 8.5v-5h-12v12h5' }],
   eye: [{ d: 'M2 12c5-7.5 15-7.5 20 0-5 7.5-15 7.5-20 0z' }, { d: 'M9 12a3 3 0 1 0 6 0a3 3 0 1 0 -6 0z' }],
   remove: [{ d: 'M4 6.5h16M9 6.5V3.5h6v3M6 6.5V21h12V6.5M10 10.5v6.5M14 10.5v6.5' }],
+  whole: [{ d: 'M3 9V3h6M15 3h6v6M21 15v6h-6M9 21H3v-6' }],
 } satisfies Record<string, IconMark[]>;
 
 export type IconName = keyof typeof iconMarks;
