@@ -37,7 +37,7 @@ const paragraph = (text: string): string =>
   `<p style="margin:0 0 16px;font-size:17px;line-height:1.5">${escaped(text).replace(/\n/g, '<br>')}</p>`;
 
 const factRow = ([name, value]: [string, string]): string =>
-  `<tr><td style="padding:8px 16px 8px 0;border-top:1px solid ${RULE};color:${INK_2}">${escaped(name)}</td>` +
+  `<tr><td style="padding:8px 16px 8px 0;vertical-align:top;white-space:nowrap;border-top:1px solid ${RULE};color:${INK_2}">${escaped(name)}</td>` +
   `<td style="padding:8px 0;border-top:1px solid ${RULE};font-weight:bold">${escaped(value)}</td></tr>`;
 
 const buttonOf = ({ label, url }: { label: string; url: string }): string =>
