@@ -33,7 +33,7 @@ type Props = { holds: readonly CalendarHold[]; today: Day };
 
 const WORDS = 230;
 const ROW = 83;
-const BAR_TOP = 9;
+const BAR_TOP = 0;
 
 /** Every hold on one calendar with one line through today; wide screens only. */
 export function HoldCalendar({ holds, today }: Props) {

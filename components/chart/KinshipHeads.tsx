@@ -3,6 +3,7 @@ import { line } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Code } from '@/components/ui/Code';
 import { SexShape } from '@/components/ui/SexShape';
+import { Text } from '@/components/ui/Text';
 import type { KinFish } from './KinshipTable';
 import type { KinshipSizes } from './kinshipSizes';
 
@@ -25,10 +26,13 @@ export function KinshipColumnHeads({ columns, sizes, width }: HeadsProps) {
     >
       <View
         role="columnheader"
-        aria-label="Fish"
         dataSet={{ stick: 'left' }}
         style={[styles.corner, { width: sizes.rowHead, height, backgroundColor: theme.ground }]}
-      />
+      >
+        <Text size="label" tone="faint">
+          Fish
+        </Text>
+      </View>
       {columns.map(({ fish, left, index }) => (
         <View
           key={fish.id}
@@ -70,7 +74,7 @@ function FishHead({ fish, stacked }: { fish: KinFish; stacked: boolean }) {
 
 const styles = StyleSheet.create({
   heads: { flexDirection: 'row', borderBottomWidth: line.row, zIndex: 2 },
-  corner: { zIndex: 3 },
+  corner: { zIndex: 3, justifyContent: 'flex-end', paddingBottom: 6 },
   column: { position: 'absolute', top: 0, justifyContent: 'center', paddingHorizontal: 5, borderLeftWidth: line.row },
   row: { justifyContent: 'center', zIndex: 1, paddingRight: 4 },
   beside: { flexDirection: 'row', alignItems: 'center', gap: 5 },

@@ -9,7 +9,7 @@ import { usePanZoom } from '@/hooks/usePanZoom';
 type Props = {
   label: string;
   drawing: Box2d;
-  /** Px, or all the room there is. */
+  /** At most so many px, less for a drawing that needs less; left out: all the room there is. */
   height?: number;
   /** Where to look first when the whole would be too small to read. */
   focus?: { x: number; y: number } | null;
@@ -28,7 +28,7 @@ export function PanZoom({ label, drawing, height, focus, readable = 0.6, childre
     return centredOn({ ...fit, k: readable }, focus, window);
   });
   return (
-    <View style={height === undefined ? styles.fill : { height }}>
+    <View style={height === undefined ? styles.fill : { height: heightFor(drawing, window.width, height) }}>
       <View
         ref={box}
         role="group"
@@ -63,6 +63,10 @@ export function PanZoom({ label, drawing, height, focus, readable = 0.6, childre
     </View>
   );
 }
+
+/** Room for the buttons under the drawing as it fits the width. */
+const heightFor = (drawing: Box2d, width: number, most: number): number =>
+  Math.min(most, drawing.height * Math.min(1.4, Math.max(0.6, width / Math.max(1, drawing.width))) + 72);
 
 const styles = StyleSheet.create({
   fill: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minHeight: 0 },

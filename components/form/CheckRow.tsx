@@ -67,12 +67,13 @@ export function CheckField({ name, ...row }: Omit<RowProps, 'on' | 'onChange' | 
 const styles = StyleSheet.create({
   row: {
     flexDirection: 'row',
+    flexWrap: 'wrap',
     alignItems: 'center',
-    gap: space[2] + 2,
+    columnGap: space[2] + 2,
     minHeight: 52,
     paddingVertical: space[2],
     borderBottomWidth: line.row,
   },
   words: { flexDirection: 'row', alignItems: 'center', gap: space[2], flexGrow: 1, flexShrink: 1 },
-  note: { flexShrink: 1 },
+  note: { flexShrink: 1, marginLeft: 'auto' },
 });

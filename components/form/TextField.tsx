@@ -40,7 +40,7 @@ export function TextField({ name, label, hint, aside, long = false, needed, ...i
         onSubmitEditing={long ? undefined : field.submit}
         multiline={long}
         invalid={field.error !== null}
-        aria-labelledby={field.labelId}
+        aria-label={label}
         aria-describedby={describedBy(field, hint)}
         aria-required={needed}
       />

@@ -104,13 +104,14 @@ export function GaugeRow({ name, value, unit, reading, range, href, onPress }: P
 const styles = StyleSheet.create({
   row: {
     flexDirection: 'row',
+    flexWrap: 'wrap',
     alignItems: 'center',
-    gap: 14,
+    columnGap: 14,
     minHeight: 44,
     borderBottomWidth: line.row,
     paddingVertical: space[1],
   },
-  name: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 90 },
+  name: { flexGrow: 1, flexShrink: 1, flexBasis: 104, minWidth: 0 },
   value: { minWidth: 84, flexShrink: 0 },
-  gauge: { width: WIDTH, flexShrink: 1, minWidth: 48 },
+  gauge: { flexGrow: 10, flexShrink: 1, flexBasis: 80, maxWidth: WIDTH },
 });

@@ -39,7 +39,7 @@ export function RailFoot({ saved, onSaved, person, onPerson, narrow }: Props) {
           {narrow ? 'Account' : person}
         </Text>
       </Press>
-      <View role="status" aria-live="polite">
+      <View role="status" aria-live="polite" style={styles.status}>
         {onSaved && saved.kind !== 'saved' ? (
           <Press onPress={onSaved} aria-label={words} style={look}>
             {state}
@@ -63,6 +63,7 @@ const styles = StyleSheet.create({
     paddingTop: 4,
   },
   footNarrow: { alignItems: 'center', paddingTop: 4 },
+  status: { flexShrink: 1, maxWidth: '100%' },
   person: { minHeight: 44, justifyContent: 'center', flexShrink: 1 },
   state: { flexDirection: 'row', alignItems: 'center', gap: 6, minHeight: 44 },
   offline: { borderTopWidth: 2, borderStyle: 'dashed' },

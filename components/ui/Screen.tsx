@@ -43,22 +43,23 @@ export function Screen({ children, dock, fixed, low = false, measure = false, ..
         style={[styles.fill, { backgroundColor: theme.ground }]}
       >
         <ScreenHead {...head} />
-        {fixed ? <View style={{ paddingHorizontal: side }}>{fixed}</View> : null}
-        <ScrollContext value={scroll}>
-          <ScrollView
-            ref={scroll}
-            role={pane === 'alone' ? 'main' : undefined}
-            style={styles.fill}
-            contentContainerStyle={[
-              styles.body,
-              { paddingHorizontal: side },
-              measure && !phone ? styles.measure : null,
-            ]}
-          >
-            {children}
-          </ScrollView>
-        </ScrollContext>
-        {dock ? <DockBar low={low}>{dock}</DockBar> : null}
+        <View role={pane === 'alone' ? 'main' : undefined} style={styles.fill}>
+          {fixed ? <View style={{ paddingHorizontal: side }}>{fixed}</View> : null}
+          <ScrollContext value={scroll}>
+            <ScrollView
+              ref={scroll}
+              style={styles.fill}
+              contentContainerStyle={[
+                styles.body,
+                { paddingHorizontal: side },
+                measure && !phone ? styles.measure : null,
+              ]}
+            >
+              {children}
+            </ScrollView>
+          </ScrollContext>
+          {dock ? <DockBar low={low}>{dock}</DockBar> : null}
+        </View>
       </View>
     </GutterProvider>
   );
