@@ -74,10 +74,11 @@ export function DateField({ name, label, today, choices = [], latest = today, ea
             onChangeText={setTyping}
             onBlur={settle}
             onSubmitEditing={settle}
-            onKeyDown={(event) => {
-              if (event.key !== 'ArrowUp' && event.key !== 'ArrowDown') return;
+            onKeyPress={(event) => {
+              const { key } = event.nativeEvent;
+              if (key !== 'ArrowUp' && key !== 'ArrowDown') return;
               event.preventDefault();
-              step(event.key === 'ArrowUp' ? 1 : -1);
+              step(key === 'ArrowUp' ? 1 : -1);
             }}
             style={[px, styles.input, { color: theme.ink }]}
           />

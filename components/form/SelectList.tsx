@@ -39,7 +39,7 @@ export function SelectList({ id, label, options, value, onPick, onNew, newWord }
             value={search}
             onChange={setSearch}
             placeholder={label}
-            autoFocus
+            onDown={() => firstOf(id)}
             onSubmit={() => shown[0] && onPick(shown[0].value)}
           />
         </View>
@@ -74,6 +74,11 @@ export function SelectList({ id, label, options, value, onPick, onNew, newWord }
       ) : null}
     </View>
   );
+}
+
+/** From the search into the list. */
+function firstOf(listId: string): void {
+  document.getElementById(listId)?.querySelector<HTMLElement>('[role=radio]')?.focus();
 }
 
 function OptionLine({ option, on, onPick }: { option: Option; on: boolean; onPick: () => void }) {

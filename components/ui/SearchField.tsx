@@ -11,16 +11,23 @@ type Props = {
   placeholder: string;
   autoFocus?: boolean;
   onSubmit?: () => void;
+  /** The arrow key that leads from the field into its results. */
+  onDown?: () => void;
 };
 
 /** Search within a list or the whole fishroom; the key / goes to it. */
-export function SearchField({ value, onChange, placeholder, autoFocus, onSubmit }: Props) {
+export function SearchField({ value, onChange, placeholder, autoFocus, onSubmit, onDown }: Props) {
   const wide = useIsWide();
   return (
     <InputBox
       value={value}
       onChangeText={onChange}
       onSubmitEditing={onSubmit}
+      onKeyPress={(event) => {
+        if (event.nativeEvent.key !== 'ArrowDown' || !onDown) return;
+        event.preventDefault();
+        onDown();
+      }}
       inputMode="search"
       enterKeyHint="search"
       autoComplete="off"

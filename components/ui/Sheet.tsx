@@ -39,9 +39,14 @@ function SheetBody({ title, onClose, children, anchor, width = 420, dock }: Omit
   const body = useRef<View>(null);
   useEffect(() => {
     // After the trap has noted what had the focus before, so that it can be given back.
-    const soon = setTimeout(() => elementOf(body.current)?.focus({ preventScroll: true }), 0);
+    const soon = setTimeout(() => {
+      const sheet = elementOf(body.current);
+      // On a phone the search would bring up the keyboard over the list that it searches.
+      const search = wide ? sheet?.querySelector<HTMLElement>('input[type=search]') : null;
+      (search ?? sheet)?.focus({ preventScroll: true });
+    }, 0);
     return () => clearTimeout(soon);
-  }, []);
+  }, [wide]);
   const beside = wide ? placeBeside(elementOf(anchor?.current ?? null), window, width) : null;
   const frame = wide
     ? [styles.popover, { width, borderColor: theme.control }, beside]
