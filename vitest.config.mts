@@ -9,7 +9,12 @@ export default defineConfig({
         extends: true,
         test: {
           name: 'unit',
-          include: ['tests/*.test.ts', 'tests/shared/**/*.test.ts', 'tests/server/**/*.test.ts'],
+          include: [
+            'tests/*.test.ts',
+            'tests/shared/**/*.test.ts',
+            'tests/components/**/*.test.ts',
+            'tests/server/**/*.test.ts',
+          ],
           testTimeout: 30_000,
         },
       },

@@ -4,6 +4,7 @@ import { useTheme } from '@/components/theme/ThemeProvider';
 import { Press } from '@/components/ui/Press';
 import { Text } from '@/components/ui/Text';
 import type { KinFish } from './KinshipTable';
+import { kinshipWord } from './kinshipWord';
 
 export type KinshipValue = {
   /** Expected F of the young, 0 to 1. */
@@ -19,9 +20,6 @@ const LOW = 0.0625;
 const FULL_SIBS = 0.25;
 
 const PX_PER_F = 133;
-
-/** ".125"; 0 is 0. */
-export const kinshipWord = (f: number): string => (f < 0.0005 ? '0' : f.toFixed(3).replace(/^0/, ''));
 
 type Props = {
   down: KinFish;

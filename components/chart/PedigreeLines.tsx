@@ -4,21 +4,12 @@ import { Path, Svg } from 'react-native-svg';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Text } from '@/components/ui/Text';
 import type { GraphPoint, PedigreeEdgeData } from './PedigreeGraph';
+import { isCertain, shareWord } from './shareWord';
 
 const curve = line<GraphPoint>()
   .x((point) => point.x)
   .y((point) => point.y)
   .curve(curveBumpY);
-
-const CERTAIN = 1 - 1e-9;
-
-/** "79 %", and never 0 or 100 for a doubt. */
-export function shareWord(share: number): string {
-  const percent = Math.round(share * 100);
-  if (percent === 0) return '< 1 %';
-  if (percent === 100 && share < CERTAIN) return '> 99 %';
-  return `${percent} %`;
-}
 
 type Props = { width: number; height: number; edges: readonly PedigreeEdgeData[] };
 
@@ -30,7 +21,7 @@ export function PedigreeLines({ width, height, edges }: Props) {
       <View aria-hidden style={StyleSheet.absoluteFill}>
         <Svg width={width} height={height}>
           {edges.map((edge) => {
-            const certain = edge.share >= CERTAIN;
+            const certain = isCertain(edge.share);
             const d = curve(routeOf(edge, certain)) ?? '';
             return [
               <Path key={`${keyOf(edge)} gap`} d={d} fill="none" stroke={theme.ground} strokeWidth={7} />,
@@ -47,7 +38,7 @@ export function PedigreeLines({ width, height, edges }: Props) {
         </Svg>
       </View>
       {edges.map((edge) =>
-        edge.mark && edge.share < CERTAIN ? (
+        edge.mark && !isCertain(edge.share) ? (
           <View key={`${keyOf(edge)} share`} style={[styles.mark, { left: edge.mark.x - 28, top: edge.mark.y - 11 }]}>
             <Text
               aria-hidden

@@ -3,7 +3,7 @@ import { Rect, Svg } from 'react-native-svg';
 import { space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Text } from '@/components/ui/Text';
-import { shareWord } from './PedigreeLines';
+import { shareWord } from './shareWord';
 
 export type Share = {
   key: string;

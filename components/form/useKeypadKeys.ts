@@ -1,5 +1,6 @@
 import { useEffect, useEffectEvent } from 'react';
 import { Vibration } from 'react-native';
+import { withKey } from './withKey';
 
 type Keypad = {
   value: string;
@@ -36,12 +37,4 @@ export function useKeypadKeys({ value, onChange, onNext, digits = 4, extra = '.5
     return () => document.removeEventListener('keydown', typed);
   }, []);
   return { press, erase };
-}
-
-/** "4" and "7" make "47". ".5" ends a number; a point comes once and takes two digits after it. */
-export function withKey(value: string, key: string, digits: number, extra: '.5' | '.'): string {
-  if (key === '.') return value === '' || value.includes('.') ? value : value + extra;
-  const [whole = '', part] = value.split('.');
-  if (part === undefined) return whole === '0' ? key : whole.length >= digits ? value : value + key;
-  return extra === '.5' || part.length >= 2 ? value : value + key;
 }
