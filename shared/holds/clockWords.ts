@@ -1,4 +1,4 @@
-import { type Day, daysBetween, dayWords } from '../days';
+import { type Day, daysBetween, dayWords, formatShortDay } from '../days';
 import { type BroodStage, type CareKind, type Clock, isWithin } from './clock';
 import { dayNumber } from './dayBars';
 
@@ -98,3 +98,18 @@ export function clockBasis(clock: Clock, basedOn: number): string {
 }
 
 const plural = (count: number, one: string) => `${count} ${one}${count === 1 ? '' : 's'}`;
+
+/** "1–8 Jun", "28 May–3 Jun", "16 Jun" when both are one day. */
+export function dayRangeWords(from: Day, to: Day): string {
+  if (from === to) return formatShortDay(to);
+  const isOneMonth = from.slice(0, 7) === to.slice(0, 7);
+  return `${isOneMonth ? Number(from.slice(8)) : formatShortDay(from)}–${formatShortDay(to)}`;
+}
+
+/** Days by which the release may fall before or after the day it is expected, whichever is more. */
+export const releaseDoubtDays = ({ releaseOn, releaseEarliest, releaseLatest }: Clock): number =>
+  Math.max(daysBetween(releaseEarliest, releaseOn), daysBetween(releaseOn, releaseLatest));
+
+/** Days that a hold lasted, or has lasted so far: the day of the spawn is day 1. */
+export const daysHeld = ({ spawnEarliest, spawnLatest }: Pick<Clock, 'spawnEarliest' | 'spawnLatest'>, on: Day): number =>
+  Math.max(1, daysBetween(spawnEarliest, on) + 1 - Math.round(daysBetween(spawnEarliest, spawnLatest) / 2));

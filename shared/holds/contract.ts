@@ -45,6 +45,7 @@ export const HoldRow = z.strictObject({
   holder: z.nullable(z.strictObject({ id: Id, code: z.nullable(z.string()) })),
   colony: z.nullable(Place),
   tank: Place,
+  strainId: z.nullable(Id),
   strainCode: z.nullable(z.string()),
   displayName: z.nullable(z.string()),
   locality: z.nullable(z.string()),

@@ -1,0 +1,32 @@
+import { queryOptions, useQuery } from '@tanstack/react-query';
+import { call } from '@/features/call';
+import { useRoom } from '@/hooks/useRoom';
+import { byNumber } from '@/shared/codes';
+import { listTanks, type TankRow } from '@/shared/tanks/contract';
+
+const tanksQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'record', 'tanks'],
+    queryFn: ({ signal }) => call(listTanks, { params: { roomId }, signal }),
+    select: ({ tanks }) =>
+      tanks
+        .filter(({ retiredOn }) => retiredOn === null)
+        .sort((a, b) => a.walkOrder - b.walkOrder || byNumber(a.code, b.code)),
+  });
+
+/** The tanks in use, in the order in which they are walked by. */
+export function useTanks() {
+  const { id: roomId } = useRoom();
+  return useQuery(tanksQuery(roomId));
+}
+
+/** "DUMA-A, 8 fish", "DUMA-26C, 29 heads", "empty": who lives in a tank, in a few words. */
+export function residentsWords({ residents }: TankRow): string {
+  if (residents.length === 0) return 'empty';
+  return residents
+    .map(({ thing, code, heads }) => {
+      if (thing === 'colony') return `${code}, ${heads} fish`;
+      return thing === 'batch' && heads > 0 ? `${code}, ${heads} heads` : code;
+    })
+    .join(' · ');
+}

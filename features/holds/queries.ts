@@ -1,0 +1,40 @@
+import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
+import { call } from '@/features/call';
+import { useRoom } from '@/hooks/useRoom';
+import { proposeBrood } from '@/shared/broods/contract';
+import type { Day } from '@/shared/days';
+import { listHolds, proposeSires, readHold } from '@/shared/holds/contract';
+
+export const holdQuery = (roomId: string, holdId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'holds', holdId],
+    queryFn: ({ signal }) => call(readHold, { params: { roomId, holdId }, signal }),
+  });
+
+export const openHoldsQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'holds', 'open'],
+    queryFn: ({ signal }) => call(listHolds, { params: { roomId }, query: { which: 'open' }, signal }),
+    select: ({ holds }) => holds,
+  });
+
+/** Who may be the sires of a spawn between two days in a tank; while other days are looked up, what was known stays. */
+export function useProposal(tankId: string, from: Day, until: Day) {
+  const { id: roomId } = useRoom();
+  return useQuery({
+    queryKey: [roomId, 'holds', 'proposal', tankId, from, until],
+    queryFn: ({ signal }) => call(proposeSires, { params: { roomId, tankId }, query: { from, until }, signal }),
+    placeholderData: keepPreviousData,
+  });
+}
+
+/** The next free code for a brood of a strain. */
+export function useBroodCode(strainId: string | null, onDay: Day) {
+  const { id: roomId } = useRoom();
+  return useQuery({
+    queryKey: [roomId, 'holds', 'brood code', strainId, onDay],
+    queryFn: ({ signal }) =>
+      call(proposeBrood, { params: { roomId }, query: { onDay, ...(strainId ? { strainId } : {}) }, signal }),
+    select: ({ code }) => code,
+  });
+}
