@@ -1,5 +1,6 @@
 import { createContext, type ReactNode, use, useEffect, useState } from 'react';
 import { Dimensions } from 'react-native';
+import { usePrinting } from '@/hooks/usePrinting';
 import { BreakpointProvider, breakpointOf } from './breakpoint';
 import { dark } from './dark';
 import { light, paper } from './light';
@@ -20,8 +21,10 @@ const firstTheme = (): ThemeName =>
 /** Colours and breakpoint for all below. */
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const [name, setName] = useState(firstTheme);
-  const theme = byName[name];
-  useEffect(() => paintPage(name, theme.ground), [name, theme.ground]);
+  const printing = usePrinting();
+  const theme = printing ? paper : byName[name];
+  const { ground } = byName[name];
+  useEffect(() => paintPage(name, ground), [name, ground]);
   const choose = (next: ThemeName) => {
     rememberTheme(next);
     setName(next);

@@ -48,6 +48,7 @@ export function Screen({ children, dock, fixed, low = false, measure = false, ..
           <ScrollContext value={scroll}>
             <ScrollView
               ref={scroll}
+              dataSet={{ flow: true }}
               style={styles.fill}
               contentContainerStyle={[
                 styles.body,
