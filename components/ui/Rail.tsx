@@ -19,7 +19,7 @@ export type RailProps = {
   onRecord?: () => void;
   saved: SavedState;
   onSaved?: () => void;
-  /** "Marit, owner". */
+  /** Name and role of who is signed in. */
   person: string;
   onPerson: () => void;
 };
