@@ -1,172 +1,166 @@
 import { addDays, type Day, daysBetween } from '../days';
-import type { AdultSizePrior } from '../species/adultSize';
-import { type AsymptotePrior, fitGrowth, type GrowthFit } from './fitGrowth';
-import { GrowthError } from './growthError';
-import { sampleStats, shareAtLeast } from './sampleStats';
+import type { LengthAtAge } from './ageGroups';
+import { meanOf, standardErrorOf } from './bands';
+import { CannotFit, type CannotFitReason } from './cannotFit';
+import { fitGrowth, type GrowthFit, type GrowthOptions } from './fitGrowth';
+import type { AsymptotePrior } from './fitModel';
+import {
+  ageOn,
+  bornOn,
+  type Measure,
+  pointOf,
+  type SamplePoint,
+  type SampleTaken,
+  type SpawnDays,
+  samplesByDay,
+} from './points';
+import type { BatchSize } from './sizes';
 
-/** One sample as the forecast takes it; lengths in mm. */
-export type SampleTaken = { onDay: Day; measure: 'total' | 'standard'; lengthsMm: number[] };
-
-export type GrowthFacts = {
+export type GrowthFacts = SpawnDays & {
   samples: SampleTaken[];
-  /** What age counts from: the days between which the spawn lies. */
-  spawnEarliest: Day;
-  spawnLatest: Day;
   today: Day;
-  prior: Pick<AdultSizePrior, 'meanMm' | 'sdMm'> | null;
+  /** The species' adult length, measured as `measureOf(samples)` says. */
+  prior: AsymptotePrior | null;
+  /** Fish in the batch, to tell whether the same ones are measured each time. */
+  heads?: number | null;
+  /** When the batch was last sorted by size: lengths before that do not tell how it grows now. */
+  gradedOn?: Day | null;
 };
 
-/** The mean and spread of one day's lengths, as the chart draws them. */
-export type SamplePoint = {
-  onDay: Day;
-  ageDays: number;
-  n: number;
-  meanMm: number;
-  sdMm: number | null;
-  cv: number | null;
+type Unevenness = {
+  cv: number;
+  /** Standard error of `cv`. */
+  cvSd: number;
+  cvAssumed: boolean;
 };
+
+export type CurveForecast = Unevenness & {
+  kind: 'curve';
+  fit: GrowthFit;
+  /** The final length is the species', not these data's. */
+  priorDecides: boolean;
+  /** Three sample days and no prior: length is taken as zero at the spawn. */
+  originFixed: boolean;
+  /** Nearly all fish are measured each time, so the samples are not new evidence and the bands are too narrow. */
+  sameFish: boolean;
+  bornOn: Day;
+  lastOn: Day;
+  /** The last day that the curve speaks for; dates beyond it are said to be far. */
+  untilDay: Day;
+  n: number;
+};
+
+type NoCurve =
+  | { kind: 'none' }
+  | { kind: 'pointsOnly'; needs: number; last: SamplePoint }
+  | { kind: 'notIdentifiable'; reason: CannotFitReason; last: SamplePoint }
+  | { kind: 'stale'; last: SamplePoint; daysSince: number };
 
 export type Forecast = {
-  measure: 'total' | 'standard';
+  measure: Measure;
   points: SamplePoint[];
-  /** Lengths taken the other way, which are left out: the two are never mixed. */
+  /** Lengths taken the other way, which are left out. */
   leftOut: number;
-} & (
-  | { kind: 'none' }
-  | { kind: 'pointsOnly'; needs: number }
-  | { kind: 'notIdentifiable' }
-  | { kind: 'stale'; fit: GrowthFit; last: SamplePoint; daysSince: number }
-  | {
-      kind: 'curve';
-      fit: GrowthFit;
-      cv: number;
-      cvAssumed: boolean;
-      priorDecides: boolean;
-      bornOn: Day;
-      lastOn: Day;
-      n: number;
-    }
-);
+} & (NoCurve | CurveForecast);
 
-/** A forecast needs so many sample dates, and none reaches further than this past the last. */
-export const DATES_NEEDED = 3;
+/** A forecast needs so many sample days, and none reaches further than this past the last. */
+export const DAYS_NEEDED = 3;
 export const STALE_AFTER_DAYS = 60;
-/** Until the fish have grown to this share of the species' adult length, the species decides where the curve ends. */
-const JUVENILE_SHARE = 0.6;
-/** Unevenness of a brood that nobody has measured enough fish of. Common practice, no source. */
+/** Unevenness of a brood of which nobody has measured enough fish, and how sure that is. Common practice, no source. */
 const USUAL_CV = 0.1;
-const CV_FROM = 5;
-
-/** The day that ages count from: the middle of the spawn interval. */
-export const bornOn = ({ spawnEarliest, spawnLatest }: Pick<GrowthFacts, 'spawnEarliest' | 'spawnLatest'>): Day =>
-  addDays(spawnEarliest, Math.floor(daysBetween(spawnEarliest, spawnLatest) / 2));
+const USUAL_CV_SD = 0.03;
+const FISH_FOR_CV = 5;
+/** From this share of the batch on, each sample is the same fish again. */
+const SAME_FISH_FROM = 0.5;
 
 /**
- * What a brood's samples say about its growth, and no more: points alone under three sample dates; the last measured size
- * when the last sample is over 60 days old; else a curve, with the species' adult size as a prior. `priorDecides` is true
- * while the data are juvenile only. Of two kinds of length the one last used counts.
+ * What a brood's samples say about its growth, and no more: points alone under three sample days; the last measured size when
+ * the last sample is over 60 days old; else a curve, for which the species' adult size stands in while the fish are small. Of
+ * total and standard length the one last used counts. Throws `BadValue` for lengths or days that cannot be.
  */
 export function forecast(facts: GrowthFacts): Forecast {
-  const { samples, today, prior } = facts;
-  const ordered = samples
-    .filter(({ lengthsMm }) => lengthsMm.length > 0)
-    .toSorted((a, b) => (a.onDay < b.onDay ? -1 : a.onDay > b.onDay ? 1 : 0));
-  const measure = ordered.at(-1)?.measure ?? 'total';
-  const used = ordered.filter((sample) => sample.measure === measure);
-  const leftOut = ordered
-    .filter((sample) => sample.measure !== measure)
-    .reduce((sum, { lengthsMm }) => sum + lengthsMm.length, 0);
+  const { measure, days, leftOut } = samplesByDay(facts.samples);
   const born = bornOn(facts);
-  const points = pointsOf(used, born);
-  const base = { measure, points, leftOut };
+  const points = days.map((day) => pointOf(day, born, facts.gradedOn ?? null));
+  return { measure, points, leftOut, ...judged(facts, days, points) };
+}
+
+function judged(facts: GrowthFacts, days: SampleTaken[], points: SamplePoint[]): NoCurve | CurveForecast {
   const last = points.at(-1);
-  if (!last) return { ...base, kind: 'none' };
-  if (points.length < DATES_NEEDED) return { ...base, kind: 'pointsOnly', needs: DATES_NEEDED - points.length };
-  const fit = fitOf(used, born, prior);
-  if (!fit) return { ...base, kind: 'notIdentifiable' };
-  const daysSince = daysBetween(last.onDay, today);
-  if (daysSince > STALE_AFTER_DAYS) return { ...base, kind: 'stale', fit, last, daysSince };
-  const { cv, cvAssumed } = unevenness(points);
-  const longest = Math.max(...points.map(({ meanMm }) => meanMm));
+  if (!last) return { kind: 'none' };
+  const used = days.filter((_, i) => !points[i]?.beforeGrading);
+  if (used.length < DAYS_NEEDED) return { kind: 'pointsOnly', needs: DAYS_NEEDED - used.length, last };
+  const daysSince = daysBetween(last.onDay, facts.today);
+  if (daysSince > STALE_AFTER_DAYS) return { kind: 'stale', last, daysSince };
+  const fitted = fitOf(facts, used);
+  if (fitted instanceof CannotFit) return { kind: 'notIdentifiable', reason: fitted.reason, last };
+  const { fit, originFixed } = fitted;
+  const fishADay = fit.n / used.length;
   return {
-    ...base,
     kind: 'curve',
     fit,
-    cv,
-    cvAssumed,
-    priorDecides: prior !== null && longest < JUVENILE_SHARE * prior.meanMm,
-    bornOn: born,
+    ...unevennessOf(points),
+    priorDecides: fit.usedPrior,
+    originFixed,
+    sameFish: Boolean(facts.heads && fishADay >= SAME_FISH_FROM * facts.heads),
+    bornOn: bornOn(facts),
     lastOn: last.onDay,
+    untilDay: addDays(last.onDay, STALE_AFTER_DAYS),
     n: fit.n,
   };
 }
 
-function pointsOf(samples: SampleTaken[], born: Day): SamplePoint[] {
-  const byDay = new Map<Day, number[]>();
-  for (const { onDay, lengthsMm } of samples) byDay.set(onDay, [...(byDay.get(onDay) ?? []), ...lengthsMm]);
-  return [...byDay].map(([onDay, lengths]) => {
-    const { n, mean, sd, cv } = sampleStats(lengths);
-    return { onDay, ageDays: daysBetween(born, onDay), n, meanMm: mean, sdMm: sd, cv };
-  });
+function fitOf(facts: GrowthFacts, used: SampleTaken[]): { fit: GrowthFit; originFixed: boolean } | CannotFit {
+  const born = bornOn(facts);
+  const lengths = used.flatMap(({ onDay, lengthsMm }) =>
+    lengthsMm.map((lengthMm) => ({ ageDays: ageOn(born, onDay), lengthMm })),
+  );
+  const fit = tryFit(lengths, facts.prior ? { asymptotePrior: facts.prior } : {});
+  if (!(fit instanceof CannotFit)) return { fit, originFixed: false };
+  // Fish of unknown birth are counted from their first sample, where they are anything but of no length.
+  const first = Math.min(...lengths.map(({ ageDays }) => ageDays));
+  if (fit.reason !== 'tooFewAges' || first === 0) return fit;
+  const fixed = tryFit(lengths, { models: ['vonBertalanffy'], vonBertalanffyOriginFixed: true });
+  return fixed instanceof CannotFit ? fixed : { fit: fixed, originFixed: true };
 }
 
-function fitOf(samples: SampleTaken[], born: Day, prior: AsymptotePrior | null): GrowthFit | null {
-  const lengths = samples.flatMap(({ onDay, lengthsMm }) =>
-    lengthsMm.map((lengthMm) => ({ ageDays: daysBetween(born, onDay), lengthMm })),
-  );
+function tryFit(lengths: LengthAtAge[], options: GrowthOptions): GrowthFit | CannotFit {
   try {
-    return fitGrowth(lengths, prior ? { asymptotePrior: { meanMm: prior.meanMm, sdMm: prior.sdMm } } : {});
+    return fitGrowth(lengths, { ...options, spread: 'asMeasured' });
   } catch (error) {
-    if (error instanceof GrowthError) return null;
+    if (error instanceof CannotFit) return error;
     throw error;
   }
 }
 
-/** The spread of the last sample that is large enough to show one. */
-function unevenness(points: SamplePoint[]): { cv: number; cvAssumed: boolean } {
-  const shown = points.findLast(({ n, cv }) => n >= CV_FROM && cv !== null && cv > 0);
-  return shown?.cv ? { cv: shown.cv, cvAssumed: false } : { cv: USUAL_CV, cvAssumed: true };
+/** Of the last sample large enough to show it. Standard error of a CV: Sokal & Rohlf, Biometry, 7.1. */
+function unevennessOf(points: SamplePoint[]): Unevenness {
+  const shown = points.findLast(({ n, cv }) => n >= FISH_FOR_CV && cv !== null && cv > 0);
+  if (!shown?.cv) return { cv: USUAL_CV, cvSd: USUAL_CV_SD, cvAssumed: true };
+  const { n, cv } = shown;
+  return { cv, cvSd: cv * Math.sqrt((1 + 2 * cv * cv) / (2 * n)), cvAssumed: false };
 }
-
-/** A date with its 95 % interval. */
-export type DateRange = { on: Day; from: Day; to: Day };
-export type Target = { lengthMm: number; half: DateRange | null; fourFifths: DateRange | null };
-
-/** Standard deviations above which four fifths of a normal distribution lie. */
-const FOUR_FIFTHS = 0.8416212335729143;
-
-/** When half, and four fifths, of the batch are at or over a length; null where the curve never takes them there. */
-export function targetOf(curve: Extract<Forecast, { kind: 'curve' }>, lengthMm: number): Target {
-  const { fit, cv } = curve;
-  const dateOf = (meanMm: number): DateRange | null => {
-    const age = fit.ageAt(meanMm);
-    return (
-      age && {
-        on: dayAt(curve.bornOn, age.mean),
-        from: dayAt(curve.bornOn, age.low),
-        to: dayAt(curve.bornOn, age.high),
-      }
-    );
-  };
-  const later = 1 - FOUR_FIFTHS * cv;
-  return { lengthMm, half: dateOf(lengthMm), fourFifths: later > 0 ? dateOf(lengthMm / later) : null };
-}
-
-const FURTHEST_DAYS = 20_000;
-const dayAt = (born: Day, age: number): Day =>
-  addDays(born, Math.round(Math.max(-FURTHEST_DAYS, Math.min(FURTHEST_DAYS, age))));
 
 /** Mean length on a day, by the curve. */
-export const meanOn = (curve: Extract<Forecast, { kind: 'curve' }>, day: Day): number =>
-  curve.fit.lengthAt(daysBetween(curve.bornOn, day)).mean;
+export const meanOn = ({ fit, bornOn: born }: CurveForecast, day: Day): number =>
+  Math.max(0, meanOf(fit.curves, daysBetween(born, day)));
 
-/** How many of so many heads are at or over a length on a day: the expected number, rounded down. */
-export function headsAtLeast(
-  curve: Extract<Forecast, { kind: 'curve' }>,
-  lengthMm: number,
-  heads: number,
-  day: Day,
-): number {
-  const meanMm = meanOn(curve, day);
-  return meanMm <= 0 ? 0 : Math.floor(heads * shareAtLeast(lengthMm, { meanMm, cv: curve.cv }) + 1e-9);
+/** The size of a batch on a day, with the day it was measured, or null for a day that the curve speaks for. */
+export type SizeOnDay = BatchSize & { measuredOn: Day | null };
+
+/**
+ * How long the fish of a batch are on a day: by the curve up to 60 days after the last sample, else as last measured, when
+ * they have grown since by an unknown amount. Null when never measured. For `headsAtLeast` and the availability page.
+ */
+export function sizeOn(grown: Forecast, day: Day): SizeOnDay | null {
+  const last = grown.points.at(-1);
+  if (!last) return null;
+  if (grown.kind === 'curve' && day <= grown.untilDay) {
+    const seMm = standardErrorOf(grown.fit.curves, daysBetween(grown.bornOn, day));
+    const meanMm = meanOn(grown, day);
+    if (meanMm > 0) return { meanMm, seMm, cv: grown.cv, cvSd: grown.cvSd, measuredOn: null };
+  }
+  const { cv, cvSd } = unevennessOf(grown.points);
+  const seMm = (last.sdMm ?? cv * last.meanMm) / Math.sqrt(last.n);
+  return { meanMm: last.meanMm, seMm, cv, cvSd, measuredOn: last.onDay };
 }
