@@ -7,9 +7,9 @@ import { replay, standingEntries } from './headReplay';
 export type Interval = { share: number; low: number; high: number };
 
 /**
- * A share of 0 to 1 with its score interval (Wilson 1927, J Am Stat Assoc 22:209), without continuity correction. It takes
- * fish to live or die each for itself; after a tank crash the true range is wider. Null without trials. Throws `BadValue`
- * for what is not a count, or more successes than trials.
+ * A share of 0 to 1 with its score interval (Wilson 1927, J Am Stat Assoc 22:209), without continuity correction. It
+ * takes fish to live or die each for itself; after a tank crash the true range is wider. Null without trials. Throws
+ * `BadValue` for what is not a count, or more successes than trials.
  */
 export function wilson(successes: number, trials: number, confidence = 0.95): Interval | null {
   finite('Successes', whole('Successes', successes), { max: whole('Trials', trials) });
@@ -31,7 +31,8 @@ type Counted = { count: number; day: number };
 
 /**
  * Instantaneous mortality Z a day: -ln(Nt / N0) / t (Ricker 1975). Null when nobody was there or is left, for Z is then
- * without bound, or when no time has passed. Throws `BadValue` when more are counted later: a count to look at, not a rate.
+ * without bound, or when no time has passed. Throws `BadValue` when more are counted later: a count to look at, not a
+ * rate.
  */
 export function mortalityRate(from: Counted, to: Counted): number | null {
   const first = whole('First count', from.count);
@@ -52,10 +53,10 @@ export type SurvivalStep = Deaths & {
 };
 
 /**
- * Kaplan & Meier's survival (1958, J Am Stat Assoc 53:457) for fish followed to a `time` in days: `died` false for those
- * sold, moved or alive; `heads` fish share a line, one if left out. Greenwood's standard error, limits on the log-log scale. One row for each
- * time at which fish died; deaths come before departures of the same day. It takes fish to die each for itself: after a
- * tank crash the true range is wider. Throws `BadValue`.
+ * Kaplan & Meier's survival (1958, J Am Stat Assoc 53:457) for fish followed to a `time` in days: `died` false for
+ * those sold, moved or alive; `heads` fish share a line, one if left out. Greenwood's standard error, limits on the
+ * log-log scale. One row for each time at which fish died; deaths come before departures of the same day. It takes fish
+ * to die each for itself: after a tank crash the true range is wider. Throws `BadValue`.
  */
 export function kaplanMeier(
   fates: { time: number; died: boolean; heads?: number }[],
@@ -79,8 +80,8 @@ export function kaplanMeier(
 }
 
 /**
- * The same from deaths and the fish at risk before them, oldest last: for fish that join later and count from then on. Rows
- * without deaths are left out. Throws `BadValue` when more die than are there.
+ * The same from deaths and the fish at risk before them, oldest last: for fish that join later and count from then on.
+ * Rows without deaths are left out. Throws `BadValue` when more die than are there.
  */
 export function survivalOf(deaths: Deaths[], confidence = 0.95): SurvivalStep[] {
   const z = normalReach(confidence);
@@ -99,8 +100,9 @@ export function survivalOf(deaths: Deaths[], confidence = 0.95): SurvivalStep[] 
 }
 
 /**
- * Survival by age, in days since the spawn, out of a batch's ledger: only losses are deaths. Fish sold, moved, held back or culled, and those
- * not found at a count, leave without having died; fish moved in count from then on. Throws `BadValue` for a bad ledger.
+ * Survival by age, in days since the spawn, out of a batch's ledger: only losses are deaths. Fish sold, moved, held
+ * back or culled, and those not found at a count, leave without having died; fish moved in count from then on. Throws
+ * `BadValue` for a bad ledger.
  */
 export function survivalByAge(entries: LedgerEntry[], bornOn: Day, confidence = 0.95): SurvivalStep[] {
   const days = new Map<Day, Deaths>();
@@ -121,9 +123,9 @@ export function survivalByAge(entries: LedgerEntry[], bornOn: Day, confidence = 
 export type StageStep = { stage: string; n: number; step: number | null; survival: Interval };
 
 /**
- * Survival from each stage to the next and from the first count on, the latter with Wilson's interval; empty when the first
- * count is zero. Egg counts may be estimates, and then so is what follows. Throws `BadValue` naming a stage with more fish
- * than the one before it.
+ * Survival from each stage to the next and from the first count on, the latter with Wilson's interval; empty when the
+ * first count is zero. Egg counts may be estimates, and then so is what follows. Throws `BadValue` naming a stage with
+ * more fish than the one before it.
  */
 export function stageSurvival(stages: { stage: string; n: number }[]): StageStep[] {
   const first = whole('First count', stages[0]?.n ?? 0);

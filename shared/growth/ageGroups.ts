@@ -4,8 +4,8 @@ import { finite } from '../badValue';
 export type LengthAtAge = { ageDays: number; lengthMm: number };
 
 /**
- * Samples with the fish of one age drawn together: a curve sees only their mean, and their scatter about it, `withinSs`, is
- * the same for every curve. A brood measured on twelve days is twelve points, however many fish.
+ * Samples with the fish of one age drawn together: a curve sees only their mean, and their scatter about it,
+ * `withinSs`, is the same for every curve. A brood measured on twelve days is twelve points, however many fish.
  */
 export type AgeGroups = {
   n: number;
@@ -50,8 +50,9 @@ export const middleOf = ({ ages, weights }: Pick<AgeGroups, 'ages' | 'weights'>)
   ages.reduce((sum, age, i) => sum + age * (weights[i] ?? 0), 0) / weights.reduce((sum, weight) => sum + weight, 0);
 
 /**
- * The groups weighed for lengths that spread in proportion to the mean (a constant CV): a fish counts by the inverse square of the
- * length expected of it, against one of `typicalMm`, at which the residual's standard deviation is then said.
+ * The groups weighed for lengths that spread in proportion to the mean (a constant CV): a fish counts by the inverse
+ * square of the length expected of it, against one of `typicalMm`, at which the residual's standard deviation is then
+ * said.
  */
 export function weighed(groups: AgeGroups, typicalMm: number, expectedMm: (ageDays: number) => number): AgeGroups {
   const share = groups.ages.map((age) => (typicalMm / expectedMm(age)) ** 2);

@@ -31,8 +31,8 @@ export function standardErrorOf(curves: Curves, ageDays: number): number {
 const reachOf = (curves: Curves, level: number) => studentReach(level, curves[0]?.curve.freedom ?? 1);
 
 /**
- * Mean length in mm at an age in days, with the interval of the mean and of one fish at `level`, by Student's t. Before a von
- * Bertalanffy curve's origin the mean is below zero. Throws `BadValue`.
+ * Mean length in mm at an age in days, with the interval of the mean and of one fish at `level`, by Student's t. Before
+ * a von Bertalanffy curve's origin the mean is below zero. Throws `BadValue`.
  */
 export function lengthOn(curves: Curves, ageDays: number, level = 0.95): LengthSpan {
   const mean = meanOf(curves, finite('Age', ageDays, { min: -1e6, max: 1e6 }));
@@ -49,9 +49,20 @@ export function lengthOn(curves: Curves, ageDays: number, level = 0.95): LengthS
 }
 
 /**
+ * How much longer one brood's mean is than another's at the same age, in mm, with its interval. Student's t with the fewer
+ * degrees of freedom of the two, which errs on the wide side. Throws `BadValue`.
+ */
+export function compareAt(one: Curves, other: Curves, ageDays: number, level = 0.95) {
+  const differenceMm = lengthOn(one, ageDays).mean - lengthOn(other, ageDays).mean;
+  const doubt = Math.hypot(standardErrorOf(one, ageDays), standardErrorOf(other, ageDays));
+  const reach = Math.max(reachOf(one, level), reachOf(other, level)) * doubt;
+  return { differenceMm, low: differenceMm - reach, high: differenceMm + reach };
+}
+
+/**
  * Age in days at which the mean length reaches `lengthMm`, with its interval: the ages whose band of the mean holds the
- * length (inverse regression; Draper & Smith 1998, Applied Regression Analysis, 3.2). `alsoSdMm` is the standard error of
- * the length itself, where that is worked out too. Null when the mean never gets there. Throws `BadValue`.
+ * length (inverse regression; Draper & Smith 1998, Applied Regression Analysis, 3.2). `alsoSdMm` is the standard error
+ * of the length itself, where that is worked out too. Null when the mean never gets there. Throws `BadValue`.
  */
 export function ageSpanAt(curves: Curves, lengthMm: number, level = 0.95, alsoSdMm = 0): AgeSpan | null {
   const mean = meanAge(curves, finite('Length', lengthMm));

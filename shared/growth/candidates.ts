@@ -7,7 +7,9 @@ import type { GrowthModel } from './shapes';
 
 /** Until it has three quarters of its final length, a brood does not show where growth ends. */
 const JUVENILE_BELOW = 0.75;
-/** From here on the brood knows its final length so much better than the species does that the prior says nothing more. */
+/**
+ * From here on the brood knows its final length so much better than the species does that the prior says nothing more.
+ */
 const BROOD_KNOWS = 1 / 3;
 /** A curve that counts for less than this has no say. */
 const COUNTS_FROM = 0.01;
@@ -34,8 +36,8 @@ function fitCandidates(request: Request): Candidates {
 }
 
 /**
- * The same for lengths that spread in proportion to their mean, as those of a brood do: each fish weighs by the inverse square of the
- * length that a first fit expects of it.
+ * The same for lengths that spread in proportion to their mean, as those of a brood do: each fish weighs by the inverse
+ * square of the length that a first fit expects of it.
  */
 function fitWeighed(request: Request): Candidates {
   let { groups } = request;
@@ -53,7 +55,9 @@ function fitWeighed(request: Request): Candidates {
   return { ...found, fits };
 }
 
-/** How fish of one age spread: alike at every size, in proportion to their mean (a constant CV), or as the lengths say. */
+/**
+ * How fish of one age spread: alike at every size, in proportion to their mean (a constant CV), or as the lengths say.
+ */
 export type Spread = 'constant' | 'proportional' | 'asMeasured';
 
 /** The fits for a spread; `asMeasured` takes the likelier of the two by the same criterion as the models. */

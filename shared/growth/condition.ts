@@ -1,9 +1,9 @@
 import { finite } from '../badValue';
 
 /**
- * Fulton's condition factor 100 W / L^3, grams and centimetres, from grams and mm. About 1 to 2 for deep-bodied fish; total
- * and standard length give different factors, so say which. Throws `BadValue` unless both are above zero. (Froese 2006, J Appl
- * Ichthyol 22:241.)
+ * Fulton's condition factor 100 W / L^3, grams and centimetres, from grams and mm. About 1 to 2 for deep-bodied fish;
+ * total and standard length give different factors, so say which. Throws `BadValue` unless both are above zero. (Froese
+ * 2006, J Appl Ichthyol 22:241.)
  */
 export function fultonK(weightG: number, lengthMm: number): number {
   return (100 * finite('Weight', weightG, { above: 0 })) / (finite('Length', lengthMm, { above: 0 }) / 10) ** 3;
@@ -12,8 +12,8 @@ export function fultonK(weightG: number, lengthMm: number): number {
 type LengthWeightRelation = { a: number; b: number };
 
 /**
- * Relative condition W / (a L^b): 1 is the weight usual for the length (Le Cren 1951, J Anim Ecol 20:201). Grams and mm; the
- * relation's a and b are in grams and centimetres. Throws `BadValue`.
+ * Relative condition W / (a L^b): 1 is the weight usual for the length (Le Cren 1951, J Anim Ecol 20:201). Grams and
+ * mm; the relation's a and b are in grams and centimetres. Throws `BadValue`.
  */
 export function relativeCondition(weightG: number, lengthMm: number, { a, b }: LengthWeightRelation): number {
   const lengthCm = finite('Length', lengthMm, { above: 0 }) / 10;

@@ -5,8 +5,9 @@ export type Row = [number, number, number];
 const GONE = 1e-13;
 
 /**
- * Inverse of a symmetric positive 3 x 3 matrix, scaled to a unit diagonal first, since the parameters' units differ by many
- * powers of ten. The third row and column are left out, and come back as zeros, when `third` is false. Null when singular.
+ * Inverse of a symmetric positive 3 x 3 matrix, scaled to a unit diagonal first, since the parameters' units differ by
+ * many powers of ten. The third row and column are left out, and come back as zeros, when `third` is false. Null when
+ * singular.
  */
 export function inverseOf(m: Covariance, third = true): Covariance | null {
   const [s0, s1] = [Math.sqrt(m[0][0]), Math.sqrt(m[1][1])];

@@ -4,9 +4,13 @@ const MOST_STEPS = 200;
 /** Undamped steps this small end the search; a search that gets stuck on larger ones has found no optimum. */
 const ARRIVED = 1e-10;
 const AT_REST = 1e-6;
-/** No step changes K by more than this factor's logarithm: a leap would land where the curve is a jump between two ages. */
+/**
+ * No step changes K by more than this factor's logarithm: a leap would land where the curve is a jump between two ages.
+ */
 const LONGEST = 0.7;
-/** A final length this many times the longest fish is a straight or an exponential line, not a curve that levels off. */
+/**
+ * A final length this many times the longest fish is a straight or an exponential line, not a curve that levels off.
+ */
 const MOST_LINF = 100;
 /** Two parameters that move the curve this nearly alike cannot be told apart. */
 const ALIKE = 1e-13;
@@ -14,8 +18,8 @@ const ALIKE = 1e-13;
 type Step = Point & { size: number };
 
 /**
- * Levenberg-Marquardt from a point down to the nearest optimum (Marquardt 1963; damping on the scaled diagonal as More 1978).
- * Null when there is none this way: the sum of squares keeps falling towards a straight line or a jump.
+ * Levenberg-Marquardt from a point down to the nearest optimum (Marquardt 1963; damping on the scaled diagonal as More
+ * 1978). Null when there is none this way: the sum of squares keeps falling towards a straight line or a jump.
  */
 export function descend(problem: Problem, start: Point): Landing | null {
   const landing = landAt(problem, start);

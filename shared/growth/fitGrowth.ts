@@ -6,7 +6,7 @@ import type { GrowthCurve } from './curve';
 import type { AsymptotePrior } from './fitModel';
 import { GROWTH_MODELS, type GrowthModel } from './shapes';
 
-export const DAYS_PER_YEAR = 365.25;
+const DAYS_PER_YEAR = 365.25;
 
 /** When a final length is no more than an extrapolation: so far above the longest fish, or so uncertain. */
 const FAR_ABOVE = 3;
@@ -34,7 +34,9 @@ export type GrowthFit = {
   candidates: { model: GrowthModel; aicc: number | null; weight: number }[];
   usedPrior: boolean;
   ages: { fromDays: number; toDays: number; distinct: number };
-  /** The final length lies far above the longest fish, is very uncertain, or another curve saw no end to growth at all. */
+  /**
+   * The final length lies far above the longest fish, is very uncertain, or another curve saw no end to growth at all.
+   */
   extrapolated: boolean;
   /** The chosen curve, and all that count with their weights, as plain data for `bands.ts`. */
   curve: GrowthCurve;
@@ -44,17 +46,20 @@ export type GrowthFit = {
 };
 
 /**
- * Fits growth curves to individual lengths (mm) at ages (days since the spawn) by least squares and chooses by AICc: von
- * Bertalanffy L = Linf (1 - exp(-K (t - t0))), Gompertz Linf exp(-exp(-K (t - ti))), logistic Linf / (1 + exp(-K (t - ti))).
- * Standard errors and bands: residual variance RSS / (n - p) and the delta method, Student's t (Seber & Wild 1989, Nonlinear
- * Regression); AICc counts the residual variance (Burnham & Anderson 2002); checked against NIST's reference sets and R's nls.
+ * Fits growth curves to individual lengths (mm) at ages (days since the spawn) by least squares and chooses by AICc:
+ * von Bertalanffy L = Linf (1 - exp(-K (t - t0))), Gompertz Linf exp(-exp(-K (t - ti))), logistic Linf / (1 + exp(-K (t
+ * - ti))). Standard errors and bands: residual variance RSS / (n - p) and the delta method, Student's t (Seber & Wild
+ * 1989, Nonlinear Regression); AICc counts the residual variance (Burnham & Anderson 2002); checked against NIST's
+ * reference sets and R's nls.
  *
- * `asymptotePrior`, the species' adult size, joins the likelihood as a normal penalty on Linf while the fish are juvenile: no
- * curve without it, a mean under three quarters of the prior's or of the fitted Linf, or a standard error of Linf over a
- * third of the prior's. Then `usedPrior` is true. `ageAt` is null when the mean never gets there or, at `level`, perhaps never does.
+ * `asymptotePrior`, the species' adult size, joins the likelihood as a normal penalty on Linf while the fish are
+ * juvenile: no curve without it, a mean under three quarters of the prior's or of the fitted Linf, or a standard error
+ * of Linf over a third of the prior's. Then `usedPrior` is true. `ageAt` is null when the mean never gets there or, at
+ * `level`, perhaps never does.
  *
- * The order of samples does not matter. Fish measured again and again are not independent: the bands are then too narrow.
- * Throws `BadValue` for an age or length that cannot be, `CannotFit` when the lengths do not determine any of the curves.
+ * The order of samples does not matter. Fish measured again and again are not independent: the bands are then too
+ * narrow. Throws `BadValue` for an age or length that cannot be, `CannotFit` when the lengths do not determine any of
+ * the curves.
  */
 export function fitGrowth(samples: LengthAtAge[], options: GrowthOptions = {}): GrowthFit {
   const {

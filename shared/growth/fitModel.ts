@@ -26,7 +26,7 @@ const SETTLED = 1e-9;
 
 export const unknownsOf = (originFixed: boolean): number => (originFixed ? 2 : 3);
 
-/** Least squares for one model, or null when the lengths do not determine it. The numbers of fish and ages are checked before. */
+/** Least squares for one model; null when the lengths do not determine it. Whether there are enough is checked before. */
 export function fitModel({ model, groups, originFixed = false, prior = null, start }: FitRequest): ModelFit | null {
   const problem = problemOf(model, groups, originFixed);
   const freedom = groups.n - unknownsOf(originFixed);
@@ -37,7 +37,7 @@ export function fitModel({ model, groups, originFixed = false, prior = null, sta
   const curve = curveOf(problem, landing);
   const rss = residualSs(groups, curve);
   const variance = rss / freedom;
-  const covariance = covarianceOf(groups, curve, { variance, priorSd: prior?.sdMm ?? null, originFixed });
+  const covariance = covarianceOf(groups, curve, { variance, prior, originFixed });
   if (!covariance) return null;
   const miss = prior ? ((curve.linfMm - prior.meanMm) / prior.sdMm) ** 2 : 0;
   return {
@@ -49,7 +49,7 @@ export function fitModel({ model, groups, originFixed = false, prior = null, sta
 
 const descendFrom = (problem: Problem, start: Point | null) => start && descend(problem, start);
 
-/** With a prior its weight follows from the residual variance, which follows from the fit: repeated until it stands still. */
+/** A prior's weight follows from the residual variance, which follows from the fit: repeated until it stands still. */
 function settle(
   problem: Problem,
   groups: AgeGroups,
@@ -101,8 +101,9 @@ function residualSs({ ages, means, weights, withinSs }: AgeGroups, curve: Growth
 function covarianceOf(
   { ages, weights }: AgeGroups,
   { model, linfMm, kPerDay, originDays }: GrowthCurve,
-  given: { variance: number; priorSd: number | null; originFixed: boolean },
+  given: { variance: number; prior: AsymptotePrior | null; originFixed: boolean },
 ): Covariance | null {
+  const variance = given.prior ? Math.max(ROUNDING, given.variance) : given.variance;
   const shape = SHAPES[model];
   let [m00, m01, m02, m11, m12, m22] = [0, 0, 0, 0, 0, 0];
   for (let i = 0; i < ages.length; i += 1) {
@@ -118,7 +119,7 @@ function covarianceOf(
     m12 += w * toK * toOrigin;
     m22 += w * toOrigin * toOrigin;
   }
-  if (given.priorSd !== null) m00 += Math.max(ROUNDING, given.variance) / given.priorSd ** 2;
+  if (given.prior) m00 += variance / given.prior.sdMm ** 2;
   const inverse = inverseOf(
     [
       [m00, m01, m02],
@@ -127,7 +128,7 @@ function covarianceOf(
     ],
     !given.originFixed,
   );
-  const scaled = (x: number) => x * given.variance;
+  const scaled = (x: number) => x * variance;
   return (
     inverse && [
       [scaled(inverse[0][0]), scaled(inverse[0][1]), scaled(inverse[0][2])],
@@ -138,8 +139,8 @@ function covarianceOf(
 }
 
 /**
- * AIC and AICc with the residual variance counted among the `k` unknowns (Burnham & Anderson 2002, 2.4); `miss`, the prior's
- * share, in standard deviations squared. AICc is null when there are too few fish for it.
+ * AIC and AICc with the residual variance counted among the `k` unknowns (Burnham & Anderson 2002, 2.4); `miss`, the
+ * prior's share, in standard deviations squared. AICc is null when there are too few fish for it.
  */
 function criteria({ n, longestMm, logWeights }: AgeGroups, rss: number, miss: number, k: number) {
   // A perfect fit would have a likelihood without bound.

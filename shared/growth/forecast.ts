@@ -74,9 +74,10 @@ const FISH_FOR_CV = 5;
 const SAME_FISH_FROM = 0.5;
 
 /**
- * What a brood's samples say about its growth, and no more: points alone under three sample days; the last measured size when
- * the last sample is over 60 days old; else a curve, for which the species' adult size stands in while the fish are small. Of
- * total and standard length the one last used counts. Throws `BadValue` for lengths or days that cannot be.
+ * What a brood's samples say about its growth, and no more: points alone under three sample days; the last measured
+ * size when the last sample is over 60 days old; else a curve, for which the species' adult size stands in while the
+ * fish are small. Of total and standard length the one last used counts. Throws `BadValue` for lengths or days that
+ * cannot be.
  */
 export function forecast(facts: GrowthFacts): Forecast {
   const { measure, days, leftOut } = samplesByDay(facts.samples);
@@ -133,7 +134,7 @@ function tryFit(lengths: LengthAtAge[], options: GrowthOptions): GrowthFit | Can
   }
 }
 
-/** Of the last sample large enough to show it. Standard error of a CV: Sokal & Rohlf, Biometry, 7.1. */
+/** Of the last sample large enough to show it. Standard error of a CV: Sokal & Rohlf, Biometry. */
 function unevennessOf(points: SamplePoint[]): Unevenness {
   const shown = points.findLast(({ n, cv }) => n >= FISH_FOR_CV && cv !== null && cv > 0);
   if (!shown?.cv) return { cv: USUAL_CV, cvSd: USUAL_CV_SD, cvAssumed: true };
@@ -149,8 +150,9 @@ export const meanOn = ({ fit, bornOn: born }: CurveForecast, day: Day): number =
 export type SizeOnDay = BatchSize & { measuredOn: Day | null };
 
 /**
- * How long the fish of a batch are on a day: by the curve up to 60 days after the last sample, else as last measured, when
- * they have grown since by an unknown amount. Null when never measured. For `headsAtLeast` and the availability page.
+ * How long the fish of a batch are on a day: by the curve up to 60 days after the last sample, else as last measured,
+ * when they have grown since by an unknown amount. Null when never measured. For `headsAtLeast` and the availability
+ * page.
  */
 export function sizeOn(grown: Forecast, day: Day): SizeOnDay | null {
   const last = grown.points.at(-1);

@@ -10,7 +10,10 @@ export type LengthWeight = {
   b: number;
   seB: number;
   n: number;
-  /** ln of the factor before the correction, its standard error, and the variance about the line that makes the correction. */
+  /**
+   * ln of the factor before the correction, its standard error, and the variance about the line that makes the
+   * correction.
+   */
   lnA: number;
   seLnA: number;
   residualVariance: number;
@@ -23,8 +26,9 @@ export type LengthWeight = {
 
 /**
  * Weight from length, W = a L^b in grams and centimetres (lengths are given in mm): least squares of ln W on ln L, `a`
- * brought back with its correction exp(s^2 / 2) (Sprugel 1983, Ecology 64:209; Baskerville 1972). `b` of 2.5 to 3.5 is usual
- * (Froese 2006). Throws `BadValue` for a length or weight not above zero, `CannotFit` under three fish or with one length.
+ * brought back with its correction exp(s^2 / 2) (Sprugel 1983, Ecology 64:209; Baskerville 1972). `b` of 2.5 to 3.5 is
+ * usual (Froese 2006). Throws `BadValue` for a length or weight not above zero, `CannotFit` under three fish or with
+ * one length.
  */
 export function lengthWeight(pairs: { lengthMm: number; weightG: number }[]): LengthWeight {
   const n = pairs.length;

@@ -7,8 +7,8 @@ const TAIL = 3;
 const density = (z: number) => DENSITY_AT_ZERO * Math.exp((-z * z) / 2);
 
 /**
- * Share of a standard normal distribution below `z`, to 1e-13 of itself. Series of Marsaglia (2004, J Stat Softw 11(4)) near the
- * middle, Laplace's continued fraction in the tails. Throws `BadValue` unless `z` is a number.
+ * Share of a standard normal distribution below `z`, to 1e-13 of itself. Series of Marsaglia (2004, J Stat Softw 11(4))
+ * near the middle, Laplace's continued fraction in the tails. Throws `BadValue` unless `z` is a number.
  */
 export function normalShareBelow(z: number): number {
   finite('Normal deviate', z);

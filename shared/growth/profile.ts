@@ -2,9 +2,9 @@ import { type AgeGroups, middleOf } from './ageGroups';
 import { type GrowthModel, SHAPES } from './shapes';
 
 /**
- * Fitting with the final length profiled out (variable projection: Golub & Pereyra 1973; Kaufman 1975): for a given shape
- * the best final length is a division, so the search is over log K and beta = K origin alone. Everything is scaled: ages
- * to a span of one about their mean, lengths to the longest fish.
+ * Fitting with the final length profiled out (variable projection: Golub & Pereyra 1973; Kaufman 1975): for a given
+ * shape the best final length is a division, so the search is over log K and beta = K origin alone. Everything is
+ * scaled: ages to a span of one about their mean, lengths to the longest fish.
  */
 export type Problem = {
   model: GrowthModel;

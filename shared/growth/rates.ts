@@ -3,9 +3,9 @@ import { finite } from '../badValue';
 type Reading = { value: number; day: number };
 
 /**
- * Specific growth rate in percent a day: 100 (ln to - ln from) / days. Negative for fish that lost. Of length it is a third
- * of that of weight for fish that keep their shape, so say which. Null when a value or the time between is not above zero.
- * Throws `BadValue` for what is not a number. (Ricker 1975, Bull Fish Res Board Can 191.)
+ * Specific growth rate in percent a day: 100 (ln to - ln from) / days. Negative for fish that lost. Of length it is a
+ * third of that of weight for fish that keep their shape, so say which. Null when a value or the time between is not
+ * above zero. Throws `BadValue` for what is not a number. (Ricker 1975, Bull Fish Res Board Can 191.)
  */
 export function specificGrowthRate(from: Reading, to: Reading): number | null {
   const [before, after] = [finite('First value', from.value), finite('Last value', to.value)];
@@ -26,8 +26,8 @@ export function dailyGain(from: Reading, to: Reading): number | null {
 }
 
 /**
- * Growth performance phi' = log10 K (a year) + 2 log10 final length (cm), by which broods of one species compare (Pauly &
- * Munro 1984, Fishbyte 2(1)). Takes mm. Throws `BadValue` unless both are above zero.
+ * Growth performance phi' = log10 K (a year) + 2 log10 final length (cm), by which broods of one species compare (Pauly
+ * & Munro 1984, Fishbyte 2(1)). Takes mm. Throws `BadValue` unless both are above zero.
  */
 export function growthPerformance(linfMm: number, kPerYear: number): number {
   const lengthCm = finite('Final length', linfMm, { above: 0 }) / 10;

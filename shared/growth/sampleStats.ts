@@ -17,9 +17,9 @@ export type SampleStats = {
 };
 
 /**
- * Mean, spread and 95 % interval of the mean of measured values (lengths in mm, weights in g), by Student's t with n - 1
- * degrees of freedom; sd with n - 1; cv = sd / mean as a fraction (Sokal & Rohlf, Biometry). The order does not matter.
- * Throws `BadValue` for an empty list or a value that is not a number.
+ * Mean, spread and 95 % interval of the mean of measured values (lengths in mm, weights in g), by Student's t with n -
+ * 1 degrees of freedom; sd with n - 1; cv = sd / mean as a fraction (Sokal & Rohlf, Biometry). The order does not
+ * matter. Throws `BadValue` for an empty list or a value that is not a number.
  */
 export function sampleStats(values: number[]): SampleStats {
   const n = values.length;
@@ -36,14 +36,16 @@ export function sampleStats(values: number[]): SampleStats {
   return { n, mean, sd, cv, standardError, low95: mean - reach, high95: mean + reach, min, max };
 }
 
-/** CV with its small-sample correction (1 + 1/4n) cv (Sokal & Rohlf, Biometry): a few fish look more even than they are. */
+/**
+ * CV with its small-sample correction (1 + 1/4n) cv (Sokal & Rohlf, Biometry): a few fish look more even than they are.
+ */
 export const correctedCv = (cv: number, n: number): number =>
   finite('CV', cv, { min: 0 }) * (1 + 1 / (4 * whole('Number of fish', n, 2)));
 
 /**
- * Fish to measure so that the mean is within `relativeError` (0.05 is 5 %) of the batch's, at `confidence`: (z cv / E)^2,
- * rounded up. With `heads`, the fish in the batch, fewer do: n / (1 + (n - 1) / heads) (Cochran 1977, Sampling Techniques).
- * Throws `BadValue` for values that cannot be.
+ * Fish to measure so that the mean is within `relativeError` (0.05 is 5 %) of the batch's, at `confidence`: (z cv /
+ * E)^2, rounded up. With `heads`, the fish in the batch, fewer do: n / (1 + (n - 1) / heads) (Cochran 1977, Sampling
+ * Techniques). Throws `BadValue` for values that cannot be.
  */
 export function samplesNeeded(cv: number, relativeError: number, confidence = 0.95, heads?: number): number {
   const ratio = finite('CV', cv, { min: 0 }) / finite('Relative error', relativeError, { above: 0 });
@@ -53,7 +55,10 @@ export function samplesNeeded(cv: number, relativeError: number, confidence = 0.
   return Math.max(1, Math.ceil(finite('Fish needed', needed) - 1e-9));
 }
 
-/** Standard deviations that a value may lie from the others before it is asked about, and how many others it takes to judge. */
+/**
+ * Standard deviations that a value may lie from the others before it is asked about, and how many others it takes to
+ * judge.
+ */
 const ODD_SD = 3.5;
 const FISH_TO_JUDGE = 5;
 /** A brood measured to the millimetre can have no spread at all among the first few. */

@@ -2,8 +2,9 @@ export type GrowthModel = 'vonBertalanffy' | 'gompertz' | 'logistic';
 export const GROWTH_MODELS = ['vonBertalanffy', 'gompertz', 'logistic'] as const;
 
 /**
- * Each model is the final length times a shape g(u) of u = -K (age - origin), so the three differ in g alone. `straight`
- * turns a share of the final length y into something linear in e^u, from which starting values are regressed.
+ * Each model is the final length times a shape g(u) of u = -K (age - origin), so the three differ in g alone.
+ * `straight` turns a share of the final length y into something linear in e^u, from which starting values are
+ * regressed.
  */
 type Shape = {
   g(u: number): number;

@@ -3,8 +3,8 @@ import { normalQuantile, normalShareBelow } from './normal';
 import { logGamma } from './studentT';
 
 /**
- * The share of a batch at or over a length, 0 to 1, its lengths being normal about `meanMm` with `cv` = sd / mean as a fraction.
- * Throws `BadValue` for a mean or length that is not above zero, or a cv below zero.
+ * The share of a batch at or over a length, 0 to 1, its lengths being normal about `meanMm` with `cv` = sd / mean as a
+ * fraction. Throws `BadValue` for a mean or length that is not above zero, or a cv below zero.
  */
 export function shareAtLeast(lengthMm: number, at: { meanMm: number; cv: number }): number {
   finite('Length', lengthMm, { min: 0 });
@@ -14,7 +14,10 @@ export function shareAtLeast(lengthMm: number, at: { meanMm: number; cv: number 
   return normalShareBelow((meanMm - lengthMm) / (cv * meanMm));
 }
 
-/** Mean length that a batch needs for a share of it to be at or over a length; null when it is too uneven for that at all. */
+/**
+ * Mean length that a batch needs for a share of it to be at or over a length; null when it is too uneven for that at
+ * all.
+ */
 export function meanNeeded(lengthMm: number, share: number, cv: number): number | null {
   const shortfall = 1 - normalQuantile(share) * finite('CV', cv, { min: 0 });
   return shortfall > 0 ? finite('Length', lengthMm, { above: 0 }) / shortfall : null;
@@ -30,8 +33,9 @@ const NEARLY = 0.05;
 const NODES = Array.from({ length: 41 }, (_, i) => (i - 20) / 5);
 
 /**
- * How many of so many heads are at or over a length: the expected number rounded down, and the 95 % range. The range holds
- * both doubts: which fish grew (binomial) and how well mean and cv are known (normal, by the delta method). Throws `BadValue`.
+ * How many of so many heads are at or over a length: the expected number rounded down, and the 95 % range. The range
+ * holds both doubts: which fish grew (binomial) and how well mean and cv are known (normal, by the delta method).
+ * Throws `BadValue`.
  */
 export function headsAtLeast(size: BatchSize, lengthMm: number, heads: number): HeadsSpan {
   whole('Head count', heads);

@@ -8,9 +8,9 @@ const MOST_STARTS = 3;
 const K_GRID = Array.from({ length: 18 }, (_, i) => 0.02 * 10 ** (i / 5));
 
 /**
- * The best point to start from, without a guess from anyone. Each model is linear in e^(-K age) after a transformation, so
- * for a grid of K the origin is a straight-line regression; the best of these are followed down on ages drawn together
- * into bins, and the lowest optimum is the start for all the data. Null when the lengths do not rise.
+ * The best point to start from, without a guess from anyone. Each model is linear in e^(-K age) after a transformation,
+ * so for a grid of K the origin is a straight-line regression; the best of these are followed down on ages drawn
+ * together into bins, and the lowest optimum is the start for all the data. Null when the lengths do not rise.
  */
 export function bestStart(problem: Problem): Point | null {
   const coarse = binned(problem);

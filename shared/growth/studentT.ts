@@ -45,8 +45,8 @@ function betaShare(x: number, y: number, a: number, b: number): number {
 const shareAbove = (t: number, df: number) => betaShare(df / (df + t * t), (t * t) / (df + t * t), df / 2, 0.5) / 2;
 
 /**
- * Share of Student's t distribution with `df` degrees of freedom at least as far from zero as `t`: the two-sided p value.
- * Throws `BadValue` for a `df` that is not above zero.
+ * Share of Student's t distribution with `df` degrees of freedom at least as far from zero as `t`: the two-sided p
+ * value. Throws `BadValue` for a `df` that is not above zero.
  */
 export function studentTwoSided(t: number, df: number): number {
   return 2 * shareAbove(Math.abs(finite('t', t)), finite('Degrees of freedom', df, { above: 0 }));
@@ -58,9 +58,9 @@ function startOf(z: number, df: number): number {
 }
 
 /**
- * How many standard errors a two-sided interval by Student's t reaches either way, to 1e-9: 2.262 for 0.95 and 9 degrees of
- * freedom (Student 1908). Solved on the incomplete beta function; one and two degrees of freedom are closed forms.
- * Throws `BadValue` for a confidence outside 0 to 1 or a `df` that is not above zero.
+ * How many standard errors a two-sided interval by Student's t reaches either way, to 1e-9: 2.262 for 0.95 and 9
+ * degrees of freedom (Student 1908). Solved on the incomplete beta function; one and two degrees of freedom are closed
+ * forms. Throws `BadValue` for a confidence outside 0 to 1 or a `df` that is not above zero.
  */
 export function studentReach(confidence: number, df: number): number {
   const tail = (1 - finite('Confidence', confidence, { above: 0, max: 1 - 1e-12 })) / 2;

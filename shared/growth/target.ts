@@ -25,9 +25,9 @@ export type Target = {
 const FOUR_FIFTHS = 0.8;
 
 /**
- * The days by which half and four fifths of a batch are at or over a length, their lengths being normal about the curve with the
- * batch's CV. Half are there when the mean is; four fifths when the mean is at length / (1 - 0.84 CV), and its interval holds
- * the doubt about the CV too. Throws `BadValue` for a length that is not above zero.
+ * The days by which half and four fifths of a batch are at or over a length, their lengths being normal about the curve
+ * with the batch's CV. Half are there when the mean is; four fifths when the mean is at length / (1 - 0.84 CV), and its
+ * interval holds the doubt about the CV too. Throws `BadValue` for a length that is not above zero.
  */
 export function targetOf(curve: CurveForecast, lengthMm: number, level = 0.95): Target {
   const { fit, cv, cvSd } = curve;

@@ -1,6 +1,7 @@
 import { addMonths, type Day, formatDate, formatShortDay } from '../days';
 import { TENTHS_MM_PER, type UnitChoices } from '../units';
 import { formatLength } from '../unitWords';
+import type { Curves } from './bands';
 import type { CannotFitReason } from './cannotFit';
 import { type CurveForecast, DAYS_NEEDED, type Forecast, type SizeOnDay, STALE_AFTER_DAYS } from './forecast';
 import type { GradingAdvice } from './grading';
@@ -10,8 +11,8 @@ import type { HeadsSpan } from './sizes';
 import type { DateRange, Target } from './target';
 
 /*
- * The sentences of growth, so that screen, PDF and letters say the same. Lengths come in mm and are said in the reader's
- * unit; dates carry the year when it is over six months away.
+ * The sentences of growth, so that screen, PDF and letters say the same. Lengths come in mm and are said in the
+ * reader's unit; dates carry the year when it is over six months away.
  */
 
 export const MEASURE_WORDS: Record<Measure, string> = { total: 'total length', standard: 'standard length' };
@@ -121,21 +122,20 @@ export function curveBasis(grown: Forecast & CurveForecast, target: Target | nul
   ];
   return [
     `${plural(n, 'length')} from ${plural(fitted, 'day')}, ages ${fromDays} to ${toDays} days.`,
-    curveSentence(fit.candidates),
+    curveSentence(fit.curves),
     ...notes.filter(([holds]) => holds).map(([, sentence]) => sentence),
   ];
 }
 
-/** "A Gompertz curve; logistic fits nearly as well (97 to 3 in 100)" would hide the third: all that count are named. */
-function curveSentence(candidates: { model: GrowthModel; weight: number }[]): string {
-  const [best, ...others] = candidates.filter(({ weight }, i) => i === 0 || weight >= 0.01);
-  if (!best) return '';
-  const name = `${CURVE_NAMES[best.model]} curve`;
-  if (others.length === 0) return candidates.length > 1 ? `${name}, by far the best fit.` : `${name}.`;
-  const share = ({ model, weight }: { model: GrowthModel; weight: number }) =>
-    `${CURVE_NAMES[model]} ${percent(weight)}`;
-  return `${name}, best of those that fit: ${[best, ...others].map(share).join(', ')}.`;
+/** "Average of the curves that fit: Gompertz 53 %, logistic 47 %." */
+function curveSentence(curves: Curves): string {
+  const share = ({ curve, weight }: Curves[number]) => `${CURVE_NAMES[curve.model]} ${percent(weight)}`;
+  const [only, ...others] = curves;
+  if (only && others.length === 0) return `${sentenceCase(CURVE_NAMES[only.curve.model])} curve, by far the best fit.`;
+  return `Average of the curves that fit: ${curves.map(share).join(', ')}.`;
 }
+
+const sentenceCase = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
 
 /** "4.9 cm today" by the curve, else "4.7 cm on 11 May": the availability page and the tank. */
 export function sizeWords({ meanMm, measuredOn }: SizeOnDay, day: Day, today: Day, choices: UnitChoices): string {

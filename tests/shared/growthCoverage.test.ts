@@ -6,8 +6,8 @@ import { type GrowthModel, SHAPES } from '@/shared/growth/shapes';
 import { seeded } from './growthRows';
 
 /*
- * Broods are invented around a known curve, so that it is known what an interval has to hold. Out of 1,000 broods a true 95 %
- * interval holds it in 936 to 964 nineteen times out of twenty; 920 to 980 is asked.
+ * Broods are invented around a known curve, so that it is known what an interval has to hold. Out of 1,000 broods a
+ * true 95 % interval holds it in 936 to 964 nineteen times out of twenty; 920 to 980 is asked.
  */
 
 const BROODS = 1000;

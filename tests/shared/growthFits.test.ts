@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import * as z from 'zod/mini';
 import { BadValue } from '@/shared/badValue';
 import { groupByAge, type LengthAtAge } from '@/shared/growth/ageGroups';
+import { compareAt } from '@/shared/growth/bands';
 import { akaikeWeights } from '@/shared/growth/candidates';
 import { CannotFit } from '@/shared/growth/cannotFit';
 import { ageWhen, type GrowthCurve, meanLength } from '@/shared/growth/curve';
@@ -167,7 +168,7 @@ describe('the choice among the three curves', () => {
     },
   );
 
-  // Worked by hand: n = 7, p = 3, so k = 4 with the residual's variance, and the correction is 2 * 4 * 5 / (7 - 4 - 1) = 20.
+  // Worked by hand: n = 7, p = 3, so k = 4 with the residual's variance; the correction is 2 * 4 * 5 / (7 - 4 - 1) = 20.
   test('AICc counts the residual variance, and is null when there are too few fish for it', () => {
     const orange = seriesOf('B-fit-orange1-logistic');
     const fit = fitGrowth(orange, { models: ['logistic'] });
@@ -191,6 +192,18 @@ const truths = fc.record({
   origin: fc.double({ min: -0.1, max: 0.4, noNaN: true }),
 });
 const AGES = [14, 30, 52, 75, 110, 150, 200, 270, 350] as const;
+
+test('two broods compare at one age by the doubt about both', () => {
+  const [a, c] = [
+    fitGrowth(seriesOf('B-fit-synthA-vbgf')),
+    fitGrowth(seriesOf('B-fit-synthC-gompertz'), { models: ['gompertz'] }),
+  ];
+  const { differenceMm, low, high } = compareAt(c.curves, a.curves, 200);
+  // 74.0923 with a standard error of 0.551847, less 70.4075 with 0.464089; t for 23 degrees of freedom, the fewer, is 2.06866.
+  near(differenceMm, 3.684826, 1e-5);
+  near(high - low, 2 * 2.0686576 * Math.hypot(0.551847, 0.464089), 1e-5);
+  expect(compareAt(a.curves, c.curves, 200).differenceMm).toBe(-differenceMm);
+});
 
 describe('whatever the brood', () => {
   test('lengths without scatter give their own curve back', () => {
@@ -255,7 +268,7 @@ describe('whatever the brood', () => {
     const fit = fitGrowth(samples, { models: [model] });
     const { chance } = seeded(7);
     for (let i = 0; i < 100; i += 1) {
-      // Half-grown once or eight times over within the ages measured; bent at one of them, or begun as long before the first.
+      // K of half to eight over the ages measured; bent at one of them, or begun as long before the first.
       const start = ({ tau }: Problem) => {
         const [k, first] = [0.5 * 16 ** chance(), tau[0] ?? 0];
         const origin = model === 'vonBertalanffy' ? first - chance() : first + chance();
@@ -335,6 +348,13 @@ describe('the species’ adult size', () => {
     expect(linf(15)).toBeGreaterThan(linf(60));
     expect(linf(60)).toBeGreaterThan(free);
     near(linf(0.5), 150, 0.01);
+  });
+
+  test('decides alone when the fish grow in a perfectly straight line', () => {
+    const straight = [30, 60, 90, 120, 150].map((ageDays) => ({ ageDays, lengthMm: 8 + 0.3 * ageDays }));
+    const fit = fitGrowth(straight, { models: ['vonBertalanffy'], asymptotePrior: prior });
+    near(fit.parameters['linfMm'], 120, 0.35);
+    expect(fit.standardErrors['linfMm']).toBeGreaterThan(3);
   });
 
   test('says nothing once the fish have shown theirs', () => {

@@ -5,8 +5,8 @@ import type { GrowthModel } from '@/shared/growth/shapes';
 import checks from './growthChecks.json';
 
 /*
- * Published check values; each row names its source and how it was obtained. R stands for R 4.2.2's nls, lm and survival. Left out of NIST's sets are those
- * whose model is none of ours: Rat43 (four parameters), Misra1b, DanWood.
+ * Published check values; each row names its source and how it was obtained. R stands for R 4.2.2's nls, lm and
+ * survival. Left out of NIST's sets are those whose model is none of ours: Rat43 (four parameters), Misra1b, DanWood.
  */
 
 const Row = z.object({
