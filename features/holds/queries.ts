@@ -1,4 +1,5 @@
 import { keepPreviousData, queryOptions, useQuery } from '@tanstack/react-query';
+import type * as z from 'zod/mini';
 import { call } from '@/features/call';
 import { useRoom } from '@/hooks/useRoom';
 import { proposeBrood } from '@/shared/broods/contract';
@@ -10,6 +11,8 @@ export const holdQuery = (roomId: string, holdId: string) =>
     queryKey: [roomId, 'holds', holdId],
     queryFn: ({ signal }) => call(readHold, { params: { roomId, holdId }, signal }),
   });
+
+export type HoldTold = z.output<typeof readHold.output>;
 
 export const openHoldsQuery = (roomId: string) =>
   queryOptions({

@@ -57,7 +57,7 @@ export const holdKinds: Pick<KindRules, Kinds> = {
         .execute();
       return { onDay, about: aboutHold(hold) };
     },
-    say: ({ seen }) => `Check: ${CHECK_WORDS[seen].toLowerCase()}`,
+    say: ({ seen, note }) => `Check: ${CHECK_WORDS[seen].toLowerCase()}${note ? `, ${note}` : ''}`,
   },
   holdPlanned: {
     async store(scope, { holdId, onDay, plan }) {
