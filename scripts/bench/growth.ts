@@ -12,8 +12,8 @@ const CASES = [
 ] as const;
 
 /**
- * Three curves fitted and compared, with standard errors, beside Levenberg-Marquardt as a textbook gives it: differences
- * for the Jacobian, every fish by itself, one start. Throws when the two do not find the same curves.
+ * Three curves fitted and compared, with standard errors, beside Levenberg-Marquardt as a textbook gives it:
+ * differences for the Jacobian, every fish by itself, one start. Throws when the two do not find the same curves.
  */
 export async function bench(): Promise<Figure[]> {
   return CASES.map(({ fish, days, goal }) => {

@@ -202,7 +202,19 @@ type HeadEntryTable = {
   roomId: string;
   id: string;
   batchId: string;
-  kind: 'opening' | 'loss' | 'cull' | 'recount' | 'movedOut' | 'movedIn' | 'heldBack' | 'sold' | 'given' | 'traded' | 'auctioned' | 'returned';
+  kind:
+    | 'opening'
+    | 'loss'
+    | 'cull'
+    | 'recount'
+    | 'movedOut'
+    | 'movedIn'
+    | 'heldBack'
+    | 'sold'
+    | 'given'
+    | 'traded'
+    | 'auctioned'
+    | 'returned';
   onDay: string;
   at: string;
   heads: number;
@@ -469,7 +481,16 @@ type PurchaseTable = {
   number: number;
   buyerId: string;
   requestId: string | null;
-  state: 'requested' | 'reserved' | 'depositAsked' | 'depositPaid' | 'ready' | 'collected' | 'sent' | 'closed' | 'cancelled';
+  state:
+    | 'requested'
+    | 'reserved'
+    | 'depositAsked'
+    | 'depositPaid'
+    | 'ready'
+    | 'collected'
+    | 'sent'
+    | 'closed'
+    | 'cancelled';
   way: Generated<'sale' | 'gift' | 'trade' | 'auction'>;
   discountCents: Generated<number>;
   depositCents: number | null;

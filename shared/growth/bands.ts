@@ -87,7 +87,7 @@ function meanAge(curves: Curves, lengthMm: number): number | null {
   const ages = curves.map(({ curve }) => ageWhen(curve, lengthMm));
   const known = ages.filter((age) => age !== null);
   const [first, last] = [Math.min(...known), known.length < ages.length ? LATEST_DAYS : Math.max(...known)];
-  const age = first < last ? bisected((at) => meanOf(curves, at) - lengthMm, first, last) : first;
+  const age = first < last ? rootBetween((at) => meanOf(curves, at) - lengthMm, first, last) : first;
   return Math.abs(age) < LATEST_DAYS - 1 ? age : null;
 }
 
@@ -98,20 +98,23 @@ function crossing(f: (age: number) => number, way: { from: number; stride: numbe
   let [near, step] = [from, stride / 4];
   while (near !== limit) {
     const far = Math.abs(near + step - from) >= Math.abs(limit - from) ? limit : near + step;
-    if (Math.sign(f(far)) !== sign) return bisected(f, near, far);
+    if (Math.sign(f(far)) !== sign) return rootBetween(f, near, far);
     near = far;
     step *= 1.2;
   }
   return null;
 }
 
-function bisected(f: (age: number) => number, near: number, far: number): number {
-  let [inside, outside] = [near, far];
-  const sign = Math.sign(f(inside));
-  for (let i = 0; i < 60; i += 1) {
-    const middle = (inside + outside) / 2;
-    if (Math.sign(f(middle)) === sign) inside = middle;
-    else outside = middle;
+/** False position, halving the weight of an end that stays (Dowell & Jarratt 1971): the bracket shrinks from both sides. */
+function rootBetween(f: (age: number) => number, one: number, other: number): number {
+  let [a, b, fa, fb] = [one, other, f(one), f(other)];
+  for (let i = 0; i < 200 && Math.abs(b - a) > 1e-10 * (1 + Math.abs(b)) && fb !== 0; i += 1) {
+    const c = fa === fb ? (a + b) / 2 : b - (fb * (b - a)) / (fb - fa);
+    const fc = f(c);
+    if (Math.sign(fc) === Math.sign(fb)) fa /= 2;
+    else [a, fa] = [b, fb];
+    if (Math.abs(c - b) < 1e-11 * (1 + Math.abs(c))) return c;
+    [b, fb] = [c, fc];
   }
-  return (inside + outside) / 2;
+  return b;
 }

@@ -1,7 +1,6 @@
 import { type AgeGroups, middleOf, weighed } from './ageGroups';
-import type { Curves } from './bands';
+import { type Curves, meanOf } from './bands';
 import { CannotFit } from './cannotFit';
-import { meanLength } from './curve';
 import { type AsymptotePrior, fitModel, type ModelFit, unknownsOf } from './fitModel';
 import type { GrowthModel } from './shapes';
 
@@ -25,48 +24,46 @@ export type Request = {
 /** Best first, with Akaike weights; `ranAway` when another model fits best as a straight line or a jump. */
 export type Candidates = { fits: ModelFit[]; weights: number[]; usedPrior: boolean; ranAway: boolean };
 
-/** Fits every model, with the prior while the brood is juvenile. Throws `CannotFit` when the lengths determine none. */
-function fitCandidates(request: Request): Candidates {
-  const { prior } = request;
-  const alone = fitAll({ ...request, prior: null });
-  const withPrior = prior && isJuvenile(alone, prior, request.groups) ? fitAll(request) : null;
+/** How fish of one age spread: alike at every size, in proportion to their mean (a constant CV), or as the lengths say. */
+export type Spread = 'constant' | 'proportional' | 'asMeasured';
+
+/**
+ * Fits every model, with the prior while the brood is juvenile. Of the two spreads `asMeasured` takes the likelier, by the
+ * same criterion as the models. Throws `CannotFit` when the lengths determine none.
+ */
+export function fitCandidates(spread: Spread, request: Request): Candidates {
+  const plain = fitPlain(request);
+  const proportional = spread === 'constant' ? null : fitProportional(request, plain);
+  if (!proportional) return plain;
+  return spread === 'asMeasured' && aicOf(plain) < aicOf(proportional) ? plain : proportional;
+}
+
+const aicOf = ({ fits }: Candidates) => fits[0]?.aic ?? 0;
+
+function fitPlain(request: Request): Candidates {
+  const { prior, groups } = request;
+  const small = prior !== null && lastMean(groups) < JUVENILE_BELOW * prior.meanMm;
+  const alone = small ? null : fitAll({ ...request, prior: null });
+  const juvenile = prior !== null && (alone === null || isJuvenile(alone, prior, groups));
+  const withPrior = juvenile ? fitAll(request) : null;
   const used = withPrior && withPrior.fits.length > 0 ? withPrior : alone;
-  if (used.fits.length === 0) throw whyNot(request);
+  if (!used || used.fits.length === 0) throw whyNot(request);
   return used;
 }
 
-/**
- * The same for lengths that spread in proportion to their mean, as those of a brood do: each fish weighs by the inverse
- * square of the length that a first fit expects of it.
- */
-function fitWeighed(request: Request): Candidates {
-  let { groups } = request;
+const lastMean = ({ means }: AgeGroups) => means.at(-1) ?? 0;
+
+/** Each fish weighs by the inverse square of the length that the plain fit expects of it. */
+function fitProportional(request: Request, plain: Candidates): Candidates | null {
+  const { groups } = request;
   const typicalMm = groups.means.reduce((sum, mean, i) => sum + mean * (groups.weights[i] ?? 0), 0) / groups.n;
   const least = Math.min(...groups.means) / 2;
-  let found = fitCandidates(request);
-  for (let round = 0; round < 2; round += 1) {
-    const curves = curvesOf(found);
-    const expected = (age: number) =>
-      curves.reduce((sum, { curve, weight }) => sum + weight * meanLength(curve, age), 0);
-    groups = weighed(request.groups, typicalMm, (age) => Math.max(least, expected(age)));
-    found = fitCandidates({ ...request, groups });
-  }
-  const fits = found.fits.map((fit) => ({ ...fit, curve: { ...fit.curve, typicalMm } }));
-  return { ...found, fits };
-}
-
-/**
- * How fish of one age spread: alike at every size, in proportion to their mean (a constant CV), or as the lengths say.
- */
-export type Spread = 'constant' | 'proportional' | 'asMeasured';
-
-/** The fits for a spread; `asMeasured` takes the likelier of the two by the same criterion as the models. */
-export function fitWith(spread: Spread, request: Request): Candidates {
-  if (spread === 'constant') return fitCandidates(request);
-  const weighed = fitWeighed(request);
-  if (spread === 'proportional') return weighed;
-  const plain = fitCandidates(request);
-  return (plain.fits[0]?.aic ?? 0) < (weighed.fits[0]?.aic ?? 0) ? plain : weighed;
+  const prior = plain.usedPrior ? request.prior : null;
+  const curves = curvesOf(plain);
+  const expected = (age: number) => Math.max(least, meanOf(curves, age));
+  const found = fitAll({ ...request, prior, groups: weighed(groups, typicalMm, expected) }, plain);
+  if (found.fits.length === 0) return null;
+  return { ...found, fits: found.fits.map((fit) => ({ ...fit, curve: { ...fit.curve, typicalMm } })) };
 }
 
 /** The curves that count, their weights adding up to one. */
@@ -80,11 +77,13 @@ export function curvesOf({ fits, weights }: Candidates): Curves {
 
 const isFixed = ({ originFixed }: Request, model: GrowthModel) => originFixed && model === 'vonBertalanffy';
 
-function fitAll(request: Request): Candidates {
+/** All that can be fitted, starting from curves found before where there are any. */
+function fitAll(request: Request, from?: Candidates): Candidates {
   const { models, groups, prior } = request;
+  const known = (model: GrowthModel) => from?.fits.find(({ curve }) => curve.model === model)?.curve;
   const tried = models
     .filter((model) => shortage(request, model) === null)
-    .map((model) => fitModel({ model, groups, prior, originFixed: isFixed(request, model) }));
+    .map((model) => fitModel({ model, groups, prior, originFixed: isFixed(request, model), from: known(model) }));
   const fits = tried.filter((fit) => fit !== null);
   // By AICc where every model has one, else by AIC: the numbers of unknowns are nearly the same.
   const of = fits.every(({ aicc }) => aicc !== null)
@@ -111,12 +110,11 @@ function shortage(request: Request, model: GrowthModel): CannotFit | null {
   return there < agesNeeded ? new CannotFit('tooFewAges', { needed: agesNeeded, there }) : null;
 }
 
-/** By the species' length or by the brood's own curves, any of those that count. */
-function isJuvenile(alone: Candidates, prior: AsymptotePrior, { means }: AgeGroups): boolean {
-  const now = means.at(-1) ?? 0;
-  if (alone.fits.length === 0 || alone.ranAway || now < JUVENILE_BELOW * prior.meanMm) return true;
+/** Whether the brood's own curves, any of those that count, leave open where growth ends. */
+function isJuvenile(alone: Candidates, prior: AsymptotePrior, groups: AgeGroups): boolean {
+  if (alone.fits.length === 0 || alone.ranAway) return true;
   return curvesOf(alone).some(({ curve: { linfMm, covariance } }) => {
-    return now < JUVENILE_BELOW * linfMm || Math.sqrt(covariance[0][0]) > BROOD_KNOWS * prior.sdMm;
+    return lastMean(groups) < JUVENILE_BELOW * linfMm || Math.sqrt(covariance[0][0]) > BROOD_KNOWS * prior.sdMm;
   });
 }
 

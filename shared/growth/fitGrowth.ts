@@ -1,7 +1,7 @@
 import { BadValue, finite } from '../badValue';
 import { groupByAge, type LengthAtAge } from './ageGroups';
 import { ageSpanAt, type Curves, type LengthSpan, lengthOn } from './bands';
-import { type Candidates, curvesOf, fitWith, type Spread } from './candidates';
+import { type Candidates, curvesOf, fitCandidates, type Spread } from './candidates';
 import type { GrowthCurve } from './curve';
 import type { AsymptotePrior } from './fitModel';
 import { GROWTH_MODELS, type GrowthModel } from './shapes';
@@ -73,7 +73,7 @@ export function fitGrowth(samples: LengthAtAge[], options: GrowthOptions = {}): 
   if (prior) finite('SD of the asymptote prior', prior.sdMm, { above: 0 });
   const groups = groupByAge(samples);
   const request = { models: [...new Set(models)], groups, prior, originFixed: vonBertalanffyOriginFixed };
-  const found = fitWith(spread, request);
+  const found = fitCandidates(spread, request);
   const [fromDays = 0, toDays = 0] = [groups.ages[0], groups.ages.at(-1)];
   const ages = { fromDays, toDays, distinct: groups.ages.length };
   const { longestMm, n } = groups;

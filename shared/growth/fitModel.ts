@@ -2,7 +2,7 @@ import type { AgeGroups } from './ageGroups';
 import { type Covariance, inverseOf } from './covariance';
 import { type GrowthCurve, meanLength } from './curve';
 import { descend } from './descend';
-import { type Landing, type Point, type Problem, problemOf } from './profile';
+import { type Landing, type Point, type Problem, pointAt, problemOf } from './profile';
 import { type GrowthModel, SHAPES } from './shapes';
 import { bestStart } from './starts';
 
@@ -16,23 +16,23 @@ export type FitRequest = {
   groups: AgeGroups;
   originFixed?: boolean;
   prior?: AsymptotePrior | null;
-  /** For the tests: where to start instead of where the data say. */
-  start?: (problem: Problem) => Point;
+  /** Where to start, instead of where the lengths say. */
+  from?: Pick<GrowthCurve, 'kPerDay' | 'originDays'> | undefined;
 };
 
 /** Lengths are kept to a tenth of a millimetre: no curve knows them better than that rounding. Variance in mm^2. */
 const ROUNDING = 0.1 ** 2 / 12;
-const SETTLED = 1e-9;
+const SETTLED = 1e-8;
+const MOST_ROUNDS = 100;
 
 export const unknownsOf = (originFixed: boolean): number => (originFixed ? 2 : 3);
 
 /** Least squares for one model; null when the lengths do not determine it. Whether there are enough is checked before. */
-export function fitModel({ model, groups, originFixed = false, prior = null, start }: FitRequest): ModelFit | null {
+export function fitModel({ model, groups, originFixed = false, prior = null, from }: FitRequest): ModelFit | null {
   const problem = problemOf(model, groups, originFixed);
   const freedom = groups.n - unknownsOf(originFixed);
-  const landing = prior
-    ? settle(problem, groups, { ...prior, freedom }, start)
-    : descendFrom(problem, start ? start(problem) : bestStart(problem));
+  const start = from && pointAt(problem, from);
+  const landing = prior ? settle(problem, groups, { ...prior, freedom }, start) : descendFrom(problem, start);
   if (!landing) return null;
   const curve = curveOf(problem, landing);
   const rss = residualSs(groups, curve);
@@ -47,28 +47,40 @@ export function fitModel({ model, groups, originFixed = false, prior = null, sta
   };
 }
 
-const descendFrom = (problem: Problem, start: Point | null) => start && descend(problem, start);
+function descendFrom(problem: Problem, start: Point | undefined): Landing | null {
+  const point = start ?? bestStart(problem);
+  return point && descend(problem, point);
+}
 
-/** A prior's weight follows from the residual variance, which follows from the fit: repeated until it stands still. */
-function settle(
-  problem: Problem,
-  groups: AgeGroups,
-  prior: AsymptotePrior & { freedom: number },
-  start: FitRequest['start'],
-): Landing | null {
+/**
+ * A prior's weight follows from the residual variance, which follows from the fit: solved for the variance that gives
+ * itself back, by secants on its logarithm.
+ */
+function settle(problem: Problem, groups: AgeGroups, prior: Settling, start: Point | undefined): Landing | null {
   const length = prior.meanMm / groups.longestMm;
-  const spread = groups.n - groups.ages.length;
-  let variance = Math.max(ROUNDING, spread > 0 ? groups.withinSs / spread : (groups.longestMm / 20) ** 2);
+  const repeats = groups.n - groups.ages.length;
+  let variance = Math.max(ROUNDING, repeats > 0 ? groups.withinSs / repeats : (groups.longestMm / 20) ** 2);
   let landing: Landing | null = null;
-  for (let i = 0; i < 100; i += 1) {
+  let last: { at: number; off: number } | null = null;
+  for (let i = 0; i < MOST_ROUNDS; i += 1) {
     problem.prior = { length, weight: variance / prior.sdMm ** 2 };
-    landing = descendFrom(problem, landing ?? (start ? start(problem) : bestStart(problem)));
+    landing = descendFrom(problem, landing ?? start);
     if (!landing) return null;
     const next = Math.max(ROUNDING, residualSs(groups, curveOf(problem, landing)) / prior.freedom);
-    if (Math.abs(next - variance) <= SETTLED * variance) return landing;
-    variance = next;
+    const here = { at: Math.log(variance), off: Math.log(next / variance) };
+    if (Math.abs(here.off) <= SETTLED) return landing;
+    variance = Math.exp(here.at + secantStep(here, last));
+    last = here;
   }
   return landing;
+}
+
+type Settling = AsymptotePrior & { freedom: number };
+
+/** Where `off` would be zero, on the line through two points; without a second one, or with a wild one, a plain repetition. */
+function secantStep(here: { at: number; off: number }, last: { at: number; off: number } | null): number {
+  const slope = last && here.at !== last.at ? (here.off - last.off) / (here.at - last.at) : -1;
+  return slope < -0.1 && slope > -10 ? -here.off / slope : here.off;
 }
 
 /** From the search's terms back to mm and days; the spread of the parameters is filled in later. */

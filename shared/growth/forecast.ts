@@ -113,9 +113,10 @@ function judged(facts: GrowthFacts, days: SampleTaken[], points: SamplePoint[]):
 
 function fitOf(facts: GrowthFacts, used: SampleTaken[]): { fit: GrowthFit; originFixed: boolean } | CannotFit {
   const born = bornOn(facts);
-  const lengths = used.flatMap(({ onDay, lengthsMm }) =>
-    lengthsMm.map((lengthMm) => ({ ageDays: ageOn(born, onDay), lengthMm })),
-  );
+  const lengths = used.flatMap(({ onDay, lengthsMm }) => {
+    const ageDays = ageOn(born, onDay);
+    return lengthsMm.map((lengthMm) => ({ ageDays, lengthMm }));
+  });
   const fit = tryFit(lengths, facts.prior ? { asymptotePrior: facts.prior } : {});
   if (!(fit instanceof CannotFit)) return { fit, originFixed: false };
   // Fish of unknown birth are counted from their first sample, where they are anything but of no length.

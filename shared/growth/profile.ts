@@ -18,18 +18,20 @@ export type Problem = {
   longestMm: number;
   /** What the species says of the final length, as one more observation: scaled length, and weight against one fish. */
   prior: { length: number; weight: number } | null;
-  /** Room for the shape and its slope at each age, written anew at every point. */
+  /** Room for the shape, its slope and its bend at each age, written anew at every point. */
   g: Float64Array;
   slope: Float64Array;
+  bend: Float64Array;
 };
 
 /** A point of the search: log of K (per span), and u at the middle age. */
 export type Point = { logK: number; beta: number };
 
-/** The problem at a point: final length, sum of squares with the prior's share, and the reduced normal equations. */
-export type Landing = Point & { linf: number; cost: number; normal: Normal };
-/** `[[aKK, aKB], [aKB, aBB]] step = [bK, bB]`. */
-type Normal = { aKK: number; aKB: number; aBB: number; bK: number; bB: number };
+/** The problem at a point: final length, sum of squares with the prior's share, and what the next step needs. */
+export type Landing = Point & { linf: number; cost: number } & Slopes;
+/** Half the downhill gradient, half the curvature, and the curvature's Gauss-Newton part, which is never negative. */
+export type Slopes = { down: { k: number; beta: number }; exact: Curvature; gauss: Curvature };
+export type Curvature = { kk: number; kb: number; bb: number };
 
 /** Slower than this over the ages measured is a straight line, faster is over between two of them. */
 const [SLOWEST, FASTEST] = [Math.log(1e-3), Math.log(1e3)];
@@ -50,13 +52,20 @@ export function problemOf(model: GrowthModel, groups: AgeGroups, originFixed = f
     prior: null,
     g: new Float64Array(ages.length),
     slope: new Float64Array(ages.length),
+    bend: new Float64Array(ages.length),
   };
+}
+
+/** Where a curve with this K a day and origin lies in a problem's own terms. */
+export function pointAt(problem: Problem, { kPerDay, originDays }: { kPerDay: number; originDays: number }): Point {
+  const { originFixed, spanDays, middleAge } = problem;
+  return { logK: Math.log(kPerDay * spanDays), beta: originFixed ? 0 : kPerDay * (originDays - middleAge) };
 }
 
 /** The problem at a point, or null where the point lies beyond what lengths can tell. */
 export function landAt(problem: Problem, { logK, beta }: Point): Landing | null {
   if (!(logK >= SLOWEST && logK <= FASTEST)) return null;
-  const { tau, y, weights, prior, g, slope } = problem;
+  const { tau, y, weights, prior, g, slope, bend } = problem;
   const shape = SHAPES[problem.model];
   const k = Math.exp(logK);
   let gg = prior ? prior.weight : 0;
@@ -70,6 +79,7 @@ export function landAt(problem: Problem, { logK, beta }: Point): Landing | null 
     const weighted = (weights[i] ?? 0) * value;
     g[i] = value;
     slope[i] = s;
+    bend[i] = shape.bend(beta - kt, value, s);
     gg += weighted * value;
     gy += weighted * (y[i] ?? 0);
     alongK -= weighted * s * kt;
@@ -77,36 +87,46 @@ export function landAt(problem: Problem, { logK, beta }: Point): Landing | null 
   }
   const linf = gy / gg;
   if (!(linf > 0 && linf < Number.POSITIVE_INFINITY)) return null;
-  return { logK, beta, linf, ...normalAt(problem, { k, linf, alongK: alongK / gg, alongBeta: alongBeta / gg }) };
+  return { logK, beta, linf, ...slopesAt(problem, { k, linf, gg, alongK: alongK / gg, alongBeta: alongBeta / gg }) };
 }
 
-type Sides = { k: number; linf: number; alongK: number; alongBeta: number };
+type Sides = { k: number; linf: number; gg: number; alongK: number; alongBeta: number };
 
-/** Normal equations of the shape's two parameters with their part along g, which the final length takes up, removed. */
-function normalAt(problem: Problem, { k, linf, alongK, alongBeta }: Sides): { cost: number; normal: Normal } {
-  const { tau, y, weights, prior, g, slope } = problem;
+/**
+ * Gradient and curvature in log K and beta with the final length taken up: the shape's derivatives less their part along
+ * g, and for the exact curvature the residuals times the second derivatives (Schur's complement of the full Hessian).
+ */
+function slopesAt(problem: Problem, sides: Sides): Slopes & { cost: number } {
+  const { tau, y, weights, prior, g, slope, bend } = problem;
+  const { k, linf, gg, alongK, alongBeta } = sides;
   const weight = prior ? prior.weight : 0;
   let cost = prior ? weight * (prior.length - linf) ** 2 : 0;
-  let aKK = weight * alongK * alongK;
-  let aKB = weight * alongK * alongBeta;
-  let aBB = weight * alongBeta * alongBeta;
-  let bK = 0;
-  let bB = 0;
+  let [pKK, pKB, pBB] = [weight * alongK * alongK, weight * alongK * alongBeta, weight * alongBeta * alongBeta];
+  let [rK, rB, rKK, rKB, rBB] = [0, 0, 0, 0, 0];
   for (let i = 0; i < tau.length; i += 1) {
     const w = weights[i] ?? 0;
     const value = g[i] ?? 0;
     const dB = slope[i] ?? 0;
-    const dK = -dB * k * (tau[i] ?? 0);
-    const r = (y[i] ?? 0) - linf * value;
-    const pK = dK - value * alongK;
+    const by = -k * (tau[i] ?? 0);
+    const r = w * ((y[i] ?? 0) - linf * value);
+    const pK = dB * by - value * alongK;
     const pB = dB - value * alongBeta;
-    cost += w * r * r;
-    aKK += w * pK * pK;
-    aKB += w * pK * pB;
-    aBB += w * pB * pB;
-    bK += w * r * dK;
-    bB += w * r * dB;
+    const bent = r * (bend[i] ?? 0);
+    cost += r * ((y[i] ?? 0) - linf * value);
+    pKK += w * pK * pK;
+    pKB += w * pK * pB;
+    pBB += w * pB * pB;
+    rK += r * dB * by;
+    rB += r * dB;
+    rKK += (bent * by + r * dB) * by;
+    rKB += bent * by;
+    rBB += bent;
   }
-  const square = linf * linf;
-  return { cost, normal: { aKK: aKK * square, aKB: aKB * square, aBB: aBB * square, bK: bK * linf, bB: bB * linf } };
+  const gauss = { kk: linf * linf * pKK, kb: linf * linf * pKB, bb: linf * linf * pBB };
+  const exact = {
+    kk: gauss.kk + 2 * linf * alongK * rK - (rK * rK) / gg - linf * rKK,
+    kb: gauss.kb + linf * (alongK * rB + alongBeta * rK) - (rK * rB) / gg - linf * rKB,
+    bb: gauss.bb + 2 * linf * alongBeta * rB - (rB * rB) / gg - linf * rBB,
+  };
+  return { cost, down: { k: linf * rK, beta: linf * rB }, exact, gauss };
 }

@@ -10,6 +10,8 @@ type Shape = {
   g(u: number): number;
   /** g'(u), from u and g(u). */
   slope(u: number, g: number): number;
+  /** g''(u), from u, g(u) and g'(u). */
+  bend(u: number, g: number, slope: number): number;
   /** u of a share of the final length between 0 and 1. */
   inverse(share: number): number;
   straight: Straight;
@@ -30,6 +32,7 @@ const exp = (u: number) => Math.exp(Math.min(u, MOST));
 const vonBertalanffy: Shape = {
   g: (u) => 1 - exp(u),
   slope: (u) => -exp(u),
+  bend: (_u, _g, slope) => slope,
   inverse: (share) => Math.log1p(-share),
   straight: { of: (y) => y, weight: () => 1, origin: (intercept, slope) => -slope / intercept },
 };
@@ -37,6 +40,7 @@ const vonBertalanffy: Shape = {
 const gompertz: Shape = {
   g: (u) => Math.exp(-exp(u)),
   slope: (u, g) => -exp(u) * g,
+  bend: (u, _, slope) => slope * (1 - exp(u)),
   inverse: (share) => Math.log(-Math.log(share)),
   straight: { of: Math.log, weight: (y) => y * y, origin: (_, slope) => -slope },
 };
@@ -44,6 +48,7 @@ const gompertz: Shape = {
 const logistic: Shape = {
   g: (u) => 1 / (1 + exp(u)),
   slope: (_, g) => -g * (1 - g),
+  bend: (_, g, slope) => -slope * (1 - 2 * g),
   inverse: (share) => Math.log(1 / share - 1),
   straight: { of: (y) => 1 / y, weight: (y) => y ** 4, origin: (intercept, slope) => slope / intercept },
 };

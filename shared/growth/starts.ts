@@ -3,14 +3,16 @@ import { type Landing, landAt, type Point, type Problem } from './profile';
 import { SHAPES } from './shapes';
 
 const MOST_BINS = 32;
-const MOST_STARTS = 3;
+const MOST_STARTS = 2;
+/** A start is good enough from here: all the data do the rest. */
+const NEAR = 1e-3;
 /** K over the span of ages, from nearly straight to done within a tenth of it. */
-const K_GRID = Array.from({ length: 18 }, (_, i) => 0.02 * 10 ** (i / 5));
+const K_GRID = Array.from({ length: 11 }, (_, i) => 0.04 * 1.9 ** i);
 
 /**
  * The best point to start from, without a guess from anyone. Each model is linear in e^(-K age) after a transformation,
  * so for a grid of K the origin is a straight-line regression; the best of these are followed down on ages drawn
- * together into bins, and the lowest optimum is the start for all the data. Null when the lengths do not rise.
+ * together into bins, and the lowest optimum is the start for all the data. Null when there is none.
  */
 export function bestStart(problem: Problem): Point | null {
   const coarse = binned(problem);
@@ -20,8 +22,8 @@ export function bestStart(problem: Problem): Point | null {
     .filter((here) => here !== null)
     .sort(byCost)
     .slice(0, MOST_STARTS);
-  const found = starts.map((start) => descend(coarse, start)).filter((landing) => landing !== null);
-  return found.sort(byCost)[0] ?? starts[0] ?? null;
+  const found = starts.map((start) => descend(coarse, start, NEAR)).filter((landing) => landing !== null);
+  return found.sort(byCost)[0] ?? (coarse === problem ? null : (starts[0] ?? null));
 }
 
 const byCost = (p: Landing, q: Landing) => p.cost - q.cost;
@@ -79,6 +81,6 @@ function binned(problem: Problem): Problem {
     add(y, bin, weight * (problem.y[i] ?? 0));
   }
   const mean = (sum: number, bin: number) => sum / (weights[bin] ?? 1);
-  const [g, slope] = [new Float64Array(MOST_BINS), new Float64Array(MOST_BINS)];
-  return { ...problem, weights, tau: tau.map(mean), y: y.map(mean), g, slope };
+  const room = () => new Float64Array(MOST_BINS);
+  return { ...problem, weights, tau: tau.map(mean), y: y.map(mean), g: room(), slope: room(), bend: room() };
 }

@@ -9,7 +9,6 @@ import { CannotFit } from '@/shared/growth/cannotFit';
 import { ageWhen, type GrowthCurve, meanLength } from '@/shared/growth/curve';
 import { fitGrowth, type GrowthFit } from '@/shared/growth/fitGrowth';
 import { fitModel } from '@/shared/growth/fitModel';
-import type { Problem } from '@/shared/growth/profile';
 import { GROWTH_MODELS, type GrowthModel } from '@/shared/growth/shapes';
 import { lengthsAt, modelNamed, Named, Numbers, near, rowsOf, seeded } from './growthRows';
 
@@ -266,15 +265,13 @@ describe('whatever the brood', () => {
     const samples = seriesOf(id);
     const groups = groupByAge(samples);
     const fit = fitGrowth(samples, { models: [model] });
+    const [first, spanDays] = [groups.ages[0] ?? 0, (groups.ages.at(-1) ?? 0) - (groups.ages[0] ?? 0)];
     const { chance } = seeded(7);
     for (let i = 0; i < 100; i += 1) {
       // K of half to eight over the ages measured; bent at one of them, or begun as long before the first.
-      const start = ({ tau }: Problem) => {
-        const [k, first] = [0.5 * 16 ** chance(), tau[0] ?? 0];
-        const origin = model === 'vonBertalanffy' ? first - chance() : first + chance();
-        return { logK: Math.log(k), beta: k * origin };
-      };
-      const found = fitModel({ model, groups, start });
+      const kPerDay = (0.5 * 16 ** chance()) / spanDays;
+      const originDays = first + spanDays * chance() * (model === 'vonBertalanffy' ? -1 : 1);
+      const found = fitModel({ model, groups, from: { kPerDay, originDays } });
       near(found?.curve.linfMm, fit.curve.linfMm, 1e-5);
       near(found?.curve.kPerDay, fit.curve.kPerDay, 1e-5);
       near(found?.curve.originDays, fit.curve.originDays, 1e-5);

@@ -54,6 +54,7 @@ export async function testApp(changes: Partial<Config> = {}, log?: House['log'])
   let nowMs = Date.parse(START);
   const config: Config = {
     ...readConfig({
+      NODE_ENV: 'test',
       DATA_FOLDER: join(folder, 'data'),
       UPLOADS_FOLDER: join(folder, 'uploads'),
       LOG_LEVEL: 'silent',
