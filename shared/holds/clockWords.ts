@@ -111,5 +111,7 @@ export const releaseDoubtDays = ({ releaseOn, releaseEarliest, releaseLatest }: 
   Math.max(daysBetween(releaseEarliest, releaseOn), daysBetween(releaseOn, releaseLatest));
 
 /** Days that a hold lasted, or has lasted so far: the day of the spawn is day 1. */
-export const daysHeld = ({ spawnEarliest, spawnLatest }: Pick<Clock, 'spawnEarliest' | 'spawnLatest'>, on: Day): number =>
-  Math.max(1, daysBetween(spawnEarliest, on) + 1 - Math.round(daysBetween(spawnEarliest, spawnLatest) / 2));
+export const daysHeld = (
+  { spawnEarliest, spawnLatest }: Pick<Clock, 'spawnEarliest' | 'spawnLatest'>,
+  on: Day,
+): number => Math.max(1, daysBetween(spawnEarliest, on) + 1 - Math.round(daysBetween(spawnEarliest, spawnLatest) / 2));
