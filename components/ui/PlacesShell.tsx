@@ -1,6 +1,7 @@
 import type { ReactNode } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { useIsWide } from '@/components/theme/breakpoint';
+import { space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { useHotkey } from '@/hooks/useHotkey';
 import { BottomBar } from './BottomBar';
@@ -26,7 +27,9 @@ export function PlacesShell({ children, place, savedOpen, under, over, bare = fa
   const wide = useIsWide();
   useHotkey('r', rail.onRecord);
   return (
-    <View style={[wide ? styles.wide : styles.phone, { backgroundColor: theme.ground }]}>
+    <View
+      style={[wide ? styles.wide : styles.phone, bare && !wide ? styles.bare : null, { backgroundColor: theme.ground }]}
+    >
       {wide ? <Rail {...rail} /> : null}
       {!wide && !bare ? (
         <View dataSet={{ printHide: true }}>
@@ -45,6 +48,8 @@ export function PlacesShell({ children, place, savedOpen, under, over, bare = fa
 
 const styles = StyleSheet.create({
   phone: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minHeight: 0 },
+  // No strip above: the head keeps its distance from the edge.
+  bare: { paddingTop: space[2] },
   wide: { flexGrow: 1, flexShrink: 1, flexBasis: 0, flexDirection: 'row', minHeight: 0 },
   fill: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minHeight: 0, minWidth: 0 },
 });

@@ -47,6 +47,18 @@ export function TankLine({ tank, onChange, suits = () => true }: Props) {
   );
 }
 
+/** Under a form's title, where the tank is not to be changed any more. */
+export function TankWords({ tank }: { tank: TankRow | null }) {
+  if (!tank) return null;
+  return (
+    <Text size="small" tone="soft">
+      {'In '}
+      <Code>{tank.code}</Code>
+      {` ${residentsWords(tank)}`}
+    </Text>
+  );
+}
+
 const styles = StyleSheet.create({
   line: { flexDirection: 'row', alignItems: 'center', justifyContent: 'space-between', gap: space[3], minHeight: 48 },
   words: { flexShrink: 1 },

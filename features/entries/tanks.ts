@@ -23,7 +23,9 @@ export function useTanks() {
 /** "DUMA-A, 8 fish", "DUMA-26C, 29 heads", "empty": who lives in a tank, in a few words. */
 export function residentsWords({ residents }: TankRow): string {
   if (residents.length === 0) return 'empty';
+  const order = { colony: 0, batch: 1, fish: 2 };
   return residents
+    .toSorted((a, b) => order[a.thing] - order[b.thing])
     .map(({ thing, code, heads }) => {
       if (thing === 'colony') return `${code}, ${heads} fish`;
       return thing === 'batch' && heads > 0 ? `${code}, ${heads} heads` : code;

@@ -20,7 +20,8 @@ type Options<Value, Draft extends FormikValues> = {
   draft: string;
   schema: z.core.$ZodType<Value, Draft>;
   start: Draft;
-  content: (value: Value, idOf: IdOf) => EntryContent;
+  /** `typed` is the draft itself: what a kit showed, in its own unit. */
+  content: (value: Value, idOf: IdOf, typed: Draft) => EntryContent;
   odd?: (value: Value) => string | null;
   /** Where to go after; null: back to where it was opened. */
   saved?: (kept: Kept, value: Value) => Href | null;
@@ -45,7 +46,7 @@ export function useEntryForm<Value, Draft extends FormikValues>(options: Options
     start: found ? mergedDraft(start, found) : start,
     odd,
     save: async (value) => {
-      const made = content(value, once.idOf);
+      const made = content(value, once.idOf, form.values);
       try {
         const kept = await record(made, { id: once.entryIdOf(made) });
         done.current = true;

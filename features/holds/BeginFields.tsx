@@ -1,9 +1,9 @@
 import { useEffect } from 'react';
 import { SegmentedField } from '@/components/form/SegmentedField';
 import { TextField } from '@/components/form/TextField';
-import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { EntryPage } from '@/features/entries/EntryPage';
+import { Part } from '@/features/entries/Part';
 import { useEntryForm } from '@/features/entries/useEntryForm';
 import { useRoom } from '@/hooks/useRoom';
 import { type Day, daysBetween, isDay } from '@/shared/days';
@@ -99,7 +99,7 @@ export function BeginFields({ seen, tank, colonyId, proposal, onDays }: Props) {
       {asksSires ? (
         <SireFields sires={proposal.sires} strainId={strain?.strainId ?? null} tankCode={tank.code} />
       ) : null}
-      <Section title="Plan">
+      <Part title="Plan">
         {strips ? (
           <SegmentedField
             name="plan"
@@ -113,7 +113,7 @@ export function BeginFields({ seen, tank, colonyId, proposal, onDays }: Props) {
         ) : (
           <Text tone="soft">{leaveWords(strain?.mode ?? null)}</Text>
         )}
-      </Section>
+      </Part>
       <TextField name="note" label="Note" aside="not needed" long />
     </EntryPage>
   );

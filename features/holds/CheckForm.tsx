@@ -5,9 +5,9 @@ import { PickField } from '@/components/form/PickGrid';
 import { TextField } from '@/components/form/TextField';
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
-import { Section } from '@/components/ui/Section';
 import { EntryPage } from '@/features/entries/EntryPage';
 import { NoteDraft } from '@/features/entries/note';
+import { Part } from '@/features/entries/Part';
 import { useEntryForm } from '@/features/entries/useEntryForm';
 import { useRoom } from '@/hooks/useRoom';
 import { type Day, DayText } from '@/shared/days';
@@ -53,22 +53,22 @@ function Fields({ hold }: { hold: HoldRow }) {
       saveLabel="Save check"
       clash={useEndedClash(entry.clash)}
     >
-      <Section title="What was seen?">
+      <Part title="What was seen?">
         <PickField
           name="seen"
           label="What was seen?"
           picks={CHECK_SEEN.map((value) => ({ value, word: checkWord(value, hold) }))}
         />
-      </Section>
+      </Part>
       {seen === 'notHolding' ? (
         <Notice words="If it is over, say how it ended instead: the days stop there.">
           <Button label={words.ends.released} small href={`${to}/release?hold=${hold.id}`} />
           <Button label={`${words.ends.swallowed} or lost`} small href={`${to}/swallowed?hold=${hold.id}`} />
         </Notice>
       ) : null}
-      <Section title="When">
+      <Part title="When">
         <DateField name="onDay" label="When" quiet today={room.today} earliest={hold.spawnEarliest} />
-      </Section>
+      </Part>
       <View>
         <TextField name="note" label="Note" aside="not needed" long />
       </View>

@@ -3,9 +3,9 @@ import { CheckField } from '@/components/form/CheckRow';
 import { DateField } from '@/components/form/DateField';
 import { TextField } from '@/components/form/TextField';
 import { Loading } from '@/components/ui/Loading';
-import { Section } from '@/components/ui/Section';
 import { EntryPage } from '@/features/entries/EntryPage';
 import { NoteDraft } from '@/features/entries/note';
+import { Part } from '@/features/entries/Part';
 import { useEntryForm } from '@/features/entries/useEntryForm';
 import { useRoom } from '@/hooks/useRoom';
 import { DayText } from '@/shared/days';
@@ -93,17 +93,17 @@ function Fields({ hold, proposal }: { hold: HoldRow; proposal: Proposal }) {
       clash={useEndedClash(entry.clash)}
     >
       <WhichHolds proposal={proposal} words={words} />
-      <Section title="When she spawned">
+      <Part title="When she spawned">
         <CheckField name="spawnSeen" label="The spawn was seen" />
-      </Section>
+      </Part>
       {values.spawnSeen ? null : (
-        <Section title={words.notYet}>
+        <Part title={words.notYet}>
           <DateField name="spawnEarliest" label={words.notYet} quiet today={room.today} latest={values.firstSeenOn} />
-        </Section>
+        </Part>
       )}
-      <Section title={values.spawnSeen ? 'Spawned on' : words.first}>
+      <Part title={values.spawnSeen ? 'Spawned on' : words.first}>
         <DateField name="firstSeenOn" label={values.spawnSeen ? 'Spawned on' : words.first} quiet today={room.today} />
-      </Section>
+      </Part>
       {now.spawnEarliest <= now.spawnLatest ? <HoldPreview facts={hold.clock} spawn={now} plan={hold.plan} /> : null}
       <TextField name="note" label="Why" aside="not needed" long />
     </EntryPage>

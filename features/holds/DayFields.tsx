@@ -1,6 +1,6 @@
 import { useFormikContext } from 'formik';
 import { DateField } from '@/components/form/DateField';
-import { Section } from '@/components/ui/Section';
+import { Part } from '@/features/entries/Part';
 import { useRoom } from '@/hooks/useRoom';
 import { addDays, type Day, daysBetween, isDay } from '@/shared/days';
 import type { BeginDraft } from './beginning';
@@ -17,27 +17,22 @@ export function HoldingDays({ words, lookedOn, lastEndedOn, longest }: HoldingPr
   const choices = lastLookedChoices({ firstSeenOn, today, lookedOn, lastEndedOn, longest });
   const back = values.notYetOn && isDay(values.notYetOn) ? daysBetween(values.notYetOn, firstSeenOn) : 0;
   return (
-    <Section title={words.notYet} aside="spawn not seen">
-      <DateField
-        name="notYetOn"
-        label={words.notYet}
-        quiet
-        today={today}
-        latest={firstSeenOn}
-        choices={choices}
-        {...(back > 14 ? { hint: `The spawn may be up to ${back} days back: the dates below are wide.` } : {})}
-      />
-      <FirstSeen label={words.first} />
-    </Section>
-  );
-}
-
-function FirstSeen({ label }: { label: string }) {
-  const { today } = useRoom();
-  return (
-    <Section title={label}>
-      <DateField name="firstSeenOn" label={label} quiet today={today} />
-    </Section>
+    <>
+      <Part title={words.notYet} aside="spawn not seen">
+        <DateField
+          name="notYetOn"
+          label={words.notYet}
+          quiet
+          today={today}
+          latest={firstSeenOn}
+          choices={choices}
+          {...(back > 14 ? { hint: `The spawn may be up to ${back} days back: the dates below are wide.` } : {})}
+        />
+      </Part>
+      <Part title={words.first}>
+        <DateField name="firstSeenOn" label={words.first} quiet today={today} />
+      </Part>
+    </>
   );
 }
 
@@ -45,7 +40,7 @@ function FirstSeen({ label }: { label: string }) {
 export function SpawnDay() {
   const { today } = useRoom();
   return (
-    <Section title="Spawned on">
+    <Part title="Spawned on">
       <DateField
         name="firstSeenOn"
         label="Spawned on"
@@ -56,6 +51,6 @@ export function SpawnDay() {
           { word: 'Yesterday', day: addDays(today, -1) },
         ]}
       />
-    </Section>
+    </Part>
   );
 }

@@ -6,9 +6,10 @@ import { SelectField } from '@/components/form/Select';
 import { TextField } from '@/components/form/TextField';
 import { space } from '@/components/theme/space';
 import { Caution } from '@/components/ui/Caution';
-import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
+import { Beside } from '@/features/entries/Beside';
 import { EntryPage } from '@/features/entries/EntryPage';
+import { Part } from '@/features/entries/Part';
 import { residentsWords } from '@/features/entries/tanks';
 import { useEntryForm } from '@/features/entries/useEntryForm';
 import { useRoom } from '@/hooks/useRoom';
@@ -53,7 +54,7 @@ export function EndFields({ hold, outcome, tanks, proposedCode, proposedTankId }
       clash={clash}
     >
       {outcome === 'stripped' ? <Caution words={STRIP_CAUTION} /> : null}
-      <Section title="How many?" aside="empty if not counted">
+      <Part title="How many?" aside="empty if not counted">
         <View style={{ gap: space[4] }}>
           <NumberField name="total" label="In all, alive" unit={unitOf(found)} whole />
           <SegmentedField
@@ -63,8 +64,8 @@ export function EndFields({ hold, outcome, tanks, proposedCode, proposedTankId }
           />
           {found === 'mixed' ? <Split /> : null}
           <Beside>
-            <NumberField name="dead" label="Dead" aside="not needed" whole />
-            <NumberField name="deformed" label="Deformed" aside="not needed" whole />
+            <NumberField name="dead" label="Dead" whole />
+            <NumberField name="deformed" label="Deformed" whole />
           </Beside>
           <Text size="small" tone="soft">
             {found === 'freeSwimming'
@@ -72,8 +73,8 @@ export function EndFields({ hold, outcome, tanks, proposedCode, proposedTankId }
               : 'The head count opens when they swim free. The split can wait: record it on the brood’s page.'}
           </Text>
         </View>
-      </Section>
-      <Section title="The brood">
+      </Part>
+      <Part title="The brood">
         <View style={{ gap: space[4] }}>
           <SelectField
             name="tankId"
@@ -90,7 +91,7 @@ export function EndFields({ hold, outcome, tanks, proposedCode, proposedTankId }
           />
           <TextField name="note" label="Note" aside="not needed" long />
         </View>
-      </Section>
+      </Part>
     </EntryPage>
   );
 }
@@ -103,10 +104,6 @@ function Split() {
       <NumberField name="freeSwimming" label="Swimming" whole />
     </Beside>
   );
-}
-
-function Beside({ children }: { children: React.ReactNode }) {
-  return <View style={{ flexDirection: 'row', gap: space[3] }}>{children}</View>;
 }
 
 /** What she would have in her mouth by the clock. */

@@ -2,10 +2,10 @@ import * as z from 'zod/mini';
 import { DateField } from '@/components/form/DateField';
 import { SegmentedField } from '@/components/form/SegmentedField';
 import { TextField } from '@/components/form/TextField';
-import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { EntryPage } from '@/features/entries/EntryPage';
 import { NoteDraft } from '@/features/entries/note';
+import { Part } from '@/features/entries/Part';
 import { useEntryForm } from '@/features/entries/useEntryForm';
 import { useRoom } from '@/hooks/useRoom';
 import { type Day, DayText } from '@/shared/days';
@@ -54,7 +54,7 @@ function Fields({ hold }: { hold: HoldRow }) {
       saveLabel="Save the end"
       clash={useEndedClash(entry.clash)}
     >
-      <Section title="How did it end?">
+      <Part title="How did it end?">
         <SegmentedField
           name="outcome"
           label="How did it end?"
@@ -64,8 +64,8 @@ function Fields({ hold }: { hold: HoldRow }) {
         <Text size="small" tone="soft" style={{ marginTop: 8 }}>
           {meaning(entry.form.values.outcome, words)}
         </Text>
-      </Section>
-      <Section title="Last day of it">
+      </Part>
+      <Part title="Last day of it">
         <DateField
           name="onDay"
           label="Last day of it"
@@ -74,7 +74,7 @@ function Fields({ hold }: { hold: HoldRow }) {
           earliest={hold.spawnEarliest}
           hint={`Recorded by ${room.accountName}`}
         />
-      </Section>
+      </Part>
       <TextField name="note" label="Note" aside="not needed" long />
     </EntryPage>
   );

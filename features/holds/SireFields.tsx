@@ -6,10 +6,10 @@ import { InputBox } from '@/components/form/InputBox';
 import { SegmentedField } from '@/components/form/SegmentedField';
 import { space } from '@/components/theme/space';
 import { Code } from '@/components/ui/Code';
-import { Section } from '@/components/ui/Section';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
 import { TextLink } from '@/components/ui/TextLink';
+import { Part } from '@/features/entries/Part';
 import { type Sire, type SireDraft, type SireLine, sireLines } from './sireDraft';
 
 type Props = {
@@ -35,7 +35,7 @@ export function SireFields({ sires, strainId, tankCode }: Props) {
     else void setValue({ ...draft, off: on ? [...draft.off, key] : draft.off.filter((other) => other !== key) });
   };
   return (
-    <Section title="Possible sires" aside={`males in ${tankCode} then`}>
+    <Part title="Possible sires" aside={`males in ${tankCode} then`}>
       <View>
         {lines.map((line) => (
           <View key={line.key} style={styles.line}>
@@ -43,10 +43,10 @@ export function SireFields({ sires, strainId, tankCode }: Props) {
               <CheckRow
                 on={line.on}
                 onChange={() => toggle(line)}
-                label={sireName(line)}
-                note={editing ? undefined : sireNote(line, strainId, inNow.length > 1)}
+                label={`${sireName(line)}${line.on && inNow.length > 1 ? `, ${percent(line.share)} %` : ''}`}
+                note={editing ? undefined : <Share line={line} several={inNow.length > 1} />}
               >
-                <SireName line={line} />
+                <SireName line={line} strainId={strainId} />
               </CheckRow>
             </View>
             {editing && line.on ? (
@@ -91,29 +91,38 @@ export function SireFields({ sires, strainId, tankCode }: Props) {
           />
         </View>
       ) : null}
-    </Section>
+    </Part>
   );
 }
 
-function SireName({ line: { sire, on } }: { line: SireLine }) {
+function SireName({ line, strainId }: { line: SireLine; strainId: string | null }) {
+  const { sire, on } = line;
   const tone = on ? 'ink' : 'faint';
-  if (!sire) return <Text tone={tone}>A male not known</Text>;
   return (
-    <>
-      <SexShape sex={sire.sex} possible={sire.sex === 'unknown'} tone={tone} />
-      {sire.code ? <Code tone={tone}>{sire.code}</Code> : <Text tone={tone}>not told apart</Text>}
-    </>
+    <View style={styles.name}>
+      <View style={styles.code}>
+        {sire ? <SexShape sex={sire.sex} possible={sire.sex === 'unknown'} tone={tone} /> : null}
+        {sire?.code ? <Code tone={tone}>{sire.code}</Code> : <Text tone={tone}>{sireName(line)}</Text>}
+      </View>
+      {sire ? (
+        <Text size="small" tone="soft">
+          {sireNote(sire, strainId)}
+        </Text>
+      ) : null}
+    </View>
   );
+}
+
+function Share({ line: { on, share }, several }: { line: SireLine; several: boolean }) {
+  return on && several ? <Text strong whole>{`${percent(share)} %`}</Text> : null;
 }
 
 const sireName = ({ sire }: SireLine): string => (sire ? (sire.code ?? 'A male not told apart') : 'A male not known');
 
-function sireNote({ sire, on, share }: SireLine, strainId: string | null, several: boolean): string {
-  const part = on && several ? `${percent(share)} %` : '';
-  if (!sire) return part || 'not seen here';
-  const seen = sire.dominantDays > 0 ? `dominant ${sire.dominantDays} of ${sire.ofDays} days` : 'present';
-  const foreign = strainId && sire.strainId !== strainId ? `${sire.strainCode ?? 'other strain'}: possible hybrid` : '';
-  return [part, foreign || seen].filter(Boolean).join(' · ');
+function sireNote({ dominantDays, ofDays, strainId, strainCode }: Sire, motherStrainId: string | null): string {
+  const seen = dominantDays > 0 ? `Dominant ${dominantDays} of ${ofDays} days` : 'Present';
+  const foreign = motherStrainId !== null && strainId !== motherStrainId;
+  return foreign ? `${seen}. Of ${strainCode ?? 'another strain'}: possible hybrid` : seen;
 }
 
 const percent = (share: number): string => String(Math.round(share * 100));
@@ -121,6 +130,8 @@ const percent = (share: number): string => String(Math.round(share * 100));
 const styles = StyleSheet.create({
   line: { flexDirection: 'row', alignItems: 'center', gap: space[2] },
   row: { flexGrow: 1, flexShrink: 1, minWidth: 0 },
+  name: { flexShrink: 1 },
+  code: { flexDirection: 'row', alignItems: 'center', gap: space[2] },
   share: { width: 112, paddingVertical: space[1] },
   under: { marginTop: space[3] },
 });

@@ -1,5 +1,5 @@
 import { type Pick, PickField } from '@/components/form/PickGrid';
-import { Section } from '@/components/ui/Section';
+import { Part } from '@/features/entries/Part';
 import { useRoom } from '@/hooks/useRoom';
 import { daysBetween } from '@/shared/days';
 import { CANNOT_TELL, type Proposal } from './beginning';
@@ -30,13 +30,13 @@ export function WhichHolds({ proposal, words, onPicked }: Props) {
     ...(anonymous > 0 ? { note: `${anonymous} not told apart` } : {}),
   };
   return (
-    <Section title={words.which} aside={holding > 0 ? `${holding} already holding` : undefined}>
+    <Part title={words.which} aside={holding > 0 ? `${holding} already holding` : undefined}>
       <PickField
         name="holderId"
         label={words.which}
         picks={[...picks, cannotTell]}
         {...(onPicked ? { onPicked } : {})}
       />
-    </Section>
+    </Part>
   );
 }

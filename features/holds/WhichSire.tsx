@@ -1,5 +1,5 @@
 import { PickField } from '@/components/form/PickGrid';
-import { Section } from '@/components/ui/Section';
+import { Part } from '@/features/entries/Part';
 import { CANNOT_TELL } from './beginning';
 import { shortCodes } from './shortCode';
 import type { Sire } from './sireDraft';
@@ -9,7 +9,7 @@ export function WhichSire({ sires }: { sires: readonly Sire[] }) {
   const coded = sires.filter(({ code }) => code !== null);
   const short = shortCodes(coded.flatMap(({ code }) => code ?? []));
   return (
-    <Section title="Which male?">
+    <Part title="Which male?">
       <PickField
         name="sireId"
         label="Which male?"
@@ -23,6 +23,6 @@ export function WhichSire({ sires }: { sires: readonly Sire[] }) {
           { value: CANNOT_TELL, word: 'Several, or can’t tell' },
         ]}
       />
-    </Section>
+    </Part>
   );
 }

@@ -12,8 +12,8 @@ export function lastLookedChoices({ firstSeenOn, today, lookedOn, lastEndedOn, l
   const choices: DayChoice[] = [
     { word: isToday ? 'Yesterday' : 'The day before', day: ago(1) },
     ...(check && check !== ago(1) ? [{ word: `Last check, ${formatShortDay(check)}`, day: check }] : []),
-    { word: isToday ? 'A week ago' : 'A week before', day: ago(7) },
-    { word: isToday ? 'Two weeks ago' : 'Two weeks before', day: ago(14) },
+    { word: isToday ? 'A week' : 'A week before', day: ago(7) },
+    { word: isToday ? 'Two weeks' : 'Two weeks before', day: ago(14) },
   ];
   return [
     ...choices.filter(({ day }, i) => day > bound && choices.findIndex((other) => other.day === day) === i),

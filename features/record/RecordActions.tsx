@@ -85,7 +85,7 @@ function ActionCell({ action, second, last, onPress }: CellProps) {
       onPress={onPress}
       style={({ pressed, hovered }) => [
         styles.cell,
-        { minHeight: wide ? 46 : 54, borderColor: theme.rule },
+        { minHeight: wide ? 46 : 50, borderColor: theme.rule },
         second ? styles.second : null,
         last ? null : styles.ruled,
         pressed || hovered ? { backgroundColor: theme.well } : null,
