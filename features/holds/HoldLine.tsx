@@ -3,7 +3,7 @@ import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { daysHeld } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
-import { whoHolds } from './HoldRows';
+import { whoHolds } from './whoHolds';
 
 /** Under a form's title: "DUMA-A04 in T07 · day 22". */
 export function HoldLine({ hold }: { hold: HoldRow }) {

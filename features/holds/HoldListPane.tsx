@@ -10,10 +10,10 @@ import { useRoom } from '@/hooks/useRoom';
 import { clockOf } from '@/shared/holds/clockOf';
 import { clockSentence, daysHeld, nextInClock } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
-import { dayBars } from '@/shared/holds/dayBars';
+import { barsOf } from './clockWindow';
 import { HoldName, HoldPlace } from './HoldName';
-import { whoHolds } from './HoldRows';
 import { openHoldsQuery } from './queries';
+import { whoHolds } from './whoHolds';
 
 /** The open holds beside the one that is shown, on wide screens. */
 export function HoldListPane({ selected }: { selected: string }) {
@@ -57,7 +57,7 @@ function PaneRow({ hold, selected }: { hold: HoldRow; selected: boolean }) {
     >
       {clock ? (
         <>
-          <MiniDayBars bars={dayBars(clock)} sentence={clockSentence(clock)} width={200} />
+          <MiniDayBars bars={barsOf(clock, hold.plan)} sentence={clockSentence(clock)} width={200} />
           <Text size="small" tone="soft">
             {next}
           </Text>

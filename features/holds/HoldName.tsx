@@ -1,9 +1,10 @@
+import { StyleSheet, View } from 'react-native';
 import { Code } from '@/components/ui/Code';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
 import type { HoldRow } from '@/shared/holds/contract';
-import { whoHolds } from './HoldRows';
 import { modeWords } from './modeWords';
+import { whoHolds } from './whoHolds';
 
 /** The carer's shape and code, or that one can't tell which. */
 export function HoldName({ hold }: { hold: HoldRow }) {
@@ -26,3 +27,27 @@ export function HoldPlace({ hold }: { hold: HoldRow }) {
     </Text>
   );
 }
+
+/** In a row: "T. duboisi Maswa · T07". A long name gives way, the tank does not. */
+export function HoldPlaceShort({ hold }: { hold: HoldRow }) {
+  return (
+    <View style={styles.place}>
+      <Text size="small" tone="soft" cut style={styles.name}>
+        {hold.displayName ? <Text italic>{shortName(hold.displayName)}</Text> : 'Species not known'}
+        {hold.locality ? ` ${hold.locality}` : ''}
+      </Text>
+      <Text size="small" tone="soft" whole>
+        {'\u00a0· '}
+        <Code>{hold.tank.code}</Code>
+      </Text>
+    </View>
+  );
+}
+
+/** "T. duboisi": the genus is the same for half the room. */
+const shortName = (name: string): string => name.replace(/^(\p{Lu})\p{Ll}+ (?=\p{Ll})/u, '$1. ');
+
+const styles = StyleSheet.create({
+  place: { flexDirection: 'row', minWidth: 0 },
+  name: { flexShrink: 1 },
+});

@@ -9,11 +9,11 @@ import { HoldClockPart } from './HoldClockPart';
 import { HoldHead } from './HoldHead';
 import { HoldMenu } from './HoldMenu';
 import { HoldPlace } from './HoldName';
-import { whoHolds } from './HoldRows';
 import { modeWords } from './modeWords';
 import { PlanChoice } from './PlanChoice';
 import type { HoldTold } from './queries';
 import { SireRows } from './SireRows';
+import { whoHolds } from './whoHolds';
 
 /** Head, bars, what to do; then the sires, her earlier holds, and what was recorded. */
 export function HoldPage({ told, history }: { told: HoldTold; history: ReactNode }) {

@@ -5,7 +5,7 @@ import { clockOf } from '@/shared/holds/clockOf';
 import { daysHeld, nextInClock } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
 import { HoldName, HoldPlace } from './HoldName';
-import { whoHolds } from './HoldRows';
+import { whoHolds } from './whoHolds';
 
 /** Open holds to choose from, the next date first. */
 export function HoldPicks({ holds, onPick }: { holds: readonly HoldRow[]; onPick: (holdId: string) => void }) {

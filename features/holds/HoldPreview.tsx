@@ -8,8 +8,7 @@ import type { Clock, SpawnInterval } from '@/shared/holds/clock';
 import { clockOf } from '@/shared/holds/clockOf';
 import { clockSentence, clockState, dayRangeWords, releaseDoubtDays } from '@/shared/holds/clockWords';
 import type { ClockFacts } from '@/shared/holds/contract';
-import { dayBars } from '@/shared/holds/dayBars';
-import { windowOf } from './clockWindow';
+import { barsOf, windowOf } from './clockWindow';
 
 type Props = { facts: ClockFacts | null; spawn: SpawnInterval; plan: 'strip' | 'leave' };
 
@@ -36,7 +35,7 @@ export function PreviewBars({ clock, plan }: { clock: Clock; plan: Props['plan']
   const state = clockState(clock, plan);
   return (
     <DayBars
-      bars={dayBars(clock)}
+      bars={barsOf(clock, plan)}
       sentence={clockSentence(clock)}
       windowOpen={state === 'strip' || state === 'handOver'}
       {...windowOf(clock, plan)}

@@ -13,7 +13,7 @@ import type { Refusal } from '@/shared/refusal';
 import { may } from '@/shared/roles';
 import { type Around, type Begun, parentageOf } from './beginning';
 import { ClashFacts } from './ClashFacts';
-import { whoHolds } from './HoldRows';
+import { whoHolds } from './whoHolds';
 
 type Settling = {
   clash: Refusal | null;

@@ -7,7 +7,7 @@ const UUID = /[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12
  * bear the code alone. Null: not of this fishroom.
  */
 export function tankOnLabel(text: string, tanks: readonly TankRow[]): TankRow | null {
-  const ids = text.toLowerCase().match(UUID) ?? [];
+  const ids: readonly string[] = text.toLowerCase().match(UUID) ?? [];
   const byId = tanks.find(({ id, residents }) => ids.includes(id) || residents.some((one) => ids.includes(one.id)));
   if (byId) return byId;
   const word = text.trim().toLowerCase();

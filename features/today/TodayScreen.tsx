@@ -17,6 +17,7 @@ import type { TodayFacts } from '@/shared/today/facts';
 import { type HoldToday, type Today, todayOf } from '@/shared/today/todayOf';
 import { DueRows } from './DueRows';
 import { LeavingRows } from './LeavingRows';
+import { NextStrip } from './NextStrip';
 import { todayQuery } from './queries';
 import { TreatmentRows } from './TreatmentRows';
 import { Troubles } from './Troubles';
@@ -43,33 +44,45 @@ export function TodayScreen({ holdRows }: Props) {
     );
   }
   const today = todayOf(facts, room.units);
-  return (
-    <Screen title={title} actions={<IconButton icon="search" label="Search" href={`/r/${room.id}/stock`} />}>
-      <TodayParts facts={facts} today={today} holdRows={holdRows} />
-    </Screen>
-  );
+  return <TodayParts title={title} facts={facts} today={today} holdRows={holdRows} />;
 }
 
-function TodayParts({ facts, today, holdRows }: Props & { facts: TodayFacts; today: Today }) {
+/** One column, what cannot wait first; on a wide screen the calendar with what is due beside it. */
+function TodayParts({ title, facts, today, holdRows }: Props & { title: string; facts: TodayFacts; today: Today }) {
+  const room = useRoom();
   const full = useBreakpoint() === 'full';
-  const holds = <Holding today={today} females={facts.females} holdRows={holdRows} />;
-  const side = (
+  const holding = <Holding today={today} females={facts.females} holdRows={holdRows} />;
+  const trouble = <Troubles today={today} />;
+  const due = (
     <>
-      <Troubles today={today} />
       <LeavingRows orders={today.leaving} today={facts.today} />
       <DueRows due={today.due} today={facts.today} />
       <TreatmentRows care={today.treatments} tanks={facts.tanks} today={facts.today} />
     </>
   );
-  if (full) return <WithAside aside={<Aside label="Due today">{side}</Aside>}>{holds}</WithAside>;
+  const search = <IconButton icon="search" label="Search" href={`/r/${room.id}/stock`} />;
+  if (!full) {
+    return (
+      <Screen title={title} actions={search}>
+        {trouble}
+        {holding}
+        {due}
+      </Screen>
+    );
+  }
+  const aside = (
+    <Aside label="Due today">
+      {trouble}
+      {due}
+    </Aside>
+  );
   return (
-    <>
-      <Troubles today={today} />
-      {holds}
-      <LeavingRows orders={today.leaving} today={facts.today} />
-      <DueRows due={today.due} today={facts.today} />
-      <TreatmentRows care={today.treatments} tanks={facts.tanks} today={facts.today} />
-    </>
+    <WithAside aside={aside}>
+      <Screen title={title} actions={search}>
+        {holding}
+        <NextStrip holds={today.holds} />
+      </Screen>
+    </WithAside>
   );
 }
 

@@ -4,7 +4,7 @@ import { ActRow } from '@/components/ui/ActRow';
 import { Code } from '@/components/ui/Code';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
-import { dayOf, fromToday } from '@/shared/days';
+import { fromToday } from '@/shared/days';
 import type { Today } from '@/shared/today/todayOf';
 
 /** On a phone the loudest few; the rest are on their tanks' pages. */
@@ -27,7 +27,7 @@ export function Troubles({ today }: { today: Today }) {
           label={`Order ${order.number} falls short by ${order.short} fish`}
         />
       ))}
-      {troubles.slice(0, SHOWN).map(({ tank, finding, at }) => (
+      {troubles.slice(0, SHOWN).map(({ tank, finding }) => (
         <ActRow
           key={`${tank.id}:${finding.of}`}
           level={finding.level}
@@ -37,7 +37,7 @@ export function Troubles({ today }: { today: Today }) {
               <Code>{tank.code}</Code> {finding.says}
             </Text>
           }
-          note={`Measured ${fromToday(dayOf(Date.parse(at), room.timeZone), room.today)}`}
+          note={tank.latest ? `Measured ${fromToday(tank.latest.onDay, room.today)}` : ''}
           label={`${tank.code}: ${finding.says}`}
         />
       ))}
