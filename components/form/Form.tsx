@@ -30,7 +30,8 @@ export function Form<Draft extends FormikValues>({ form, notice, label, page = f
   return (
     <FormikProvider value={form}>
       <NoticeContext value={page ? notice : null}>
-        <View ref={box} role="form" aria-label={label} style={page ? styles.page : styles.form}>
+        {/* Round a whole page it is no landmark: the page's own stand inside. */}
+        <View ref={box} role={page ? 'group' : 'form'} aria-label={label} style={page ? styles.page : styles.form}>
           {children}
           {page ? null : <FormNoticeBlock notice={notice} />}
         </View>

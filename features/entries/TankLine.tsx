@@ -23,7 +23,7 @@ export function TankLine({ tank, onChange, suits = () => true }: Props) {
           <>
             <Text tone="soft">In </Text>
             <Code>{tank.code}</Code>
-            {` ${residentsWords(tank)}`}
+            {`${tank.residents.length === 0 ? ',' : ''} ${residentsWords(tank)}`}
           </>
         ) : (
           <Text tone="soft">No tank chosen yet</Text>
@@ -54,7 +54,7 @@ export function TankWords({ tank }: { tank: TankRow | null }) {
     <Text size="small" tone="soft">
       {'In '}
       <Code>{tank.code}</Code>
-      {` ${residentsWords(tank)}`}
+      {`${tank.residents.length === 0 ? ',' : ''} ${residentsWords(tank)}`}
     </Text>
   );
 }

@@ -5,6 +5,7 @@ import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { dayWords } from '@/shared/days';
 import { clockOf } from '@/shared/holds/clockOf';
+import { dayRangeWords } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
 import { PreviewBars } from './HoldPreview';
 
@@ -30,11 +31,11 @@ export function ClashFacts({ spawn, sires, hold }: Props) {
   );
 }
 
-/** "seen Thu 23 Apr", "between Sat 9 and Tue 12 May". */
+/** "seen Thu 23 Apr", "9–12 May, not seen". */
 export function spawnWords({ spawnSeen, spawnEarliest, spawnLatest }: Props['spawn'], today: string): string {
   if (spawnSeen) return `seen ${dayWords(spawnEarliest, today)}`;
   if (spawnEarliest === spawnLatest) return `${dayWords(spawnLatest, today)}, not seen`;
-  return `between ${dayWords(spawnEarliest, today)} and ${dayWords(spawnLatest, today)}`;
+  return `${dayRangeWords(spawnEarliest, spawnLatest)}, not seen`;
 }
 
 function Fact({ name, children }: { name: string; children: React.ReactNode }) {

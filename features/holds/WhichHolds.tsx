@@ -30,7 +30,7 @@ export function WhichHolds({ proposal, words, onPicked }: Props) {
     ...(anonymous > 0 ? { note: `${anonymous} not told apart` } : {}),
   };
   return (
-    <Part title={words.which} aside={holding > 0 ? `${holding} already holding` : undefined}>
+    <Part title={words.which} aside={holding > 0 ? `${holding} ${words.already}` : undefined}>
       <PickField
         name="holderId"
         label={words.which}

@@ -9,6 +9,8 @@ export type ModeWords = {
   seen: string;
   which: string;
   cannotTell: string;
+  /** "2 already holding". */
+  already: string;
   notYet: string;
   first: string;
   /** "22, day of this hold". */
@@ -24,6 +26,7 @@ const HOLDS: ModeWords = {
   seen: 'Holding seen',
   which: 'Which female?',
   cannotTell: 'Can’t tell which',
+  already: 'already holding',
   notYet: 'Last seen not holding',
   first: 'First seen holding',
   dayOf: 'day of this hold',
@@ -42,6 +45,7 @@ const GUARDS: ModeWords = {
   ...HOLDS,
   seen: 'Guarding seen',
   which: 'Which female guards?',
+  already: 'already guarding',
   notYet: 'Last seen without eggs',
   first: 'First seen guarding',
   dayOf: 'day since the spawn',
