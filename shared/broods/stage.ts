@@ -1,7 +1,7 @@
 import { type Day, daysBetween } from '../days';
 
 /** The six stages of life, as the mark's six bars show them. */
-export const STAGES = ['egg', 'wriggler', 'fry', 'juvenile', 'growout', 'adult'] as const;
+export const STAGES = ['egg', 'wriggler', 'fry', 'juvenile', 'subadult', 'adult'] as const;
 export type Stage = (typeof STAGES)[number];
 
 export const STAGE_NAMES: Record<Stage, string> = {
@@ -9,7 +9,7 @@ export const STAGE_NAMES: Record<Stage, string> = {
   wriggler: 'Wriggler',
   fry: 'Fry',
   juvenile: 'Juvenile',
-  growout: 'Subadult',
+  subadult: 'Subadult',
   adult: 'Adult',
 };
 
@@ -17,9 +17,9 @@ export const STAGE_NAMES: Record<Stage, string> = {
 export const barsOf = (stage: Stage): number => STAGES.indexOf(stage) + 1;
 
 /** Share of the adult length from which a stage begins. House rule: there is no common definition. */
-const FROM_SHARE = { juvenile: 0.2, growout: 0.4, adult: 0.75 };
+const FROM_SHARE = { juvenile: 0.2, subadult: 0.4, adult: 0.75 };
 /** Days from the spawn where nothing was measured. House rule. */
-const FROM_DAYS = { wriggler: 6, juvenile: 75, growout: 180, adult: 400 };
+const FROM_DAYS = { wriggler: 6, juvenile: 75, subadult: 180, adult: 400 };
 
 export type StageFacts = {
   spawnLatest: Day;
@@ -42,16 +42,16 @@ export function stageOf({ spawnLatest, openedOn, meanMm, adultMm, today }: Stage
     const share = meanMm / adultMm;
     return share >= FROM_SHARE.adult
       ? 'adult'
-      : share >= FROM_SHARE.growout
-        ? 'growout'
+      : share >= FROM_SHARE.subadult
+        ? 'subadult'
         : share >= FROM_SHARE.juvenile
           ? 'juvenile'
           : 'fry';
   }
   return days >= FROM_DAYS.adult
     ? 'adult'
-    : days >= FROM_DAYS.growout
-      ? 'growout'
+    : days >= FROM_DAYS.subadult
+      ? 'subadult'
       : days >= FROM_DAYS.juvenile
         ? 'juvenile'
         : 'fry';

@@ -3,7 +3,7 @@ import * as z from 'zod/mini';
 const Days = z
   .number('Type a number of days')
   .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(365, 'At most a year'));
-const ByStage = z.strictObject({ fry: Days, juvenile: Days, growout: Days, adult: Days });
+const ByStage = z.strictObject({ fry: Days, juvenile: Days, subadult: Days, adult: Days });
 
 /** After how many days something is due again. A fishroom may change any of them. */
 export const Intervals = z.strictObject({
@@ -24,8 +24,8 @@ export type Intervals = z.output<typeof Intervals>;
 export const DEFAULT_INTERVALS: Intervals = {
   holdCheck: 7,
   stageCheck: 2,
-  headCount: { fry: 14, juvenile: 30, growout: 60, adult: 180 },
-  lengthSample: { fry: 14, juvenile: 30, growout: 45, adult: 120 },
+  headCount: { fry: 14, juvenile: 30, subadult: 60, adult: 180 },
+  lengthSample: { fry: 14, juvenile: 30, subadult: 45, adult: 120 },
   waterTest: 14,
   waterChange: 7,
   reservationEnds: 2,

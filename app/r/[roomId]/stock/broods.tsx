@@ -1,0 +1,5 @@
+import { BroodsScreen } from '@/features/broods/BroodScreen';
+
+export default function Broods() {
+  return <BroodsScreen />;
+}
