@@ -3,6 +3,7 @@ import { accounts } from './accounts';
 import { auditTrail } from './audit';
 import { broods } from './broods';
 import { colonies } from './colonies';
+import { demo } from './demo';
 import { fish } from './fish';
 import { growth } from './growth';
 import { holds } from './holds';
@@ -51,4 +52,5 @@ export const features: Feature[] = [
   lineage,
   sheets,
   record,
+  demo,
 ];

@@ -5,6 +5,8 @@ import { accountRoutes } from './routes';
 import { securityRoutes } from './securityRoutes';
 import { startSweep } from './sweep';
 
+export { hashPassword } from './passwords';
+
 export const accounts: Feature = {
   routes: (serve) => {
     const limits = openLimits();
