@@ -13,6 +13,7 @@ export default defineConfig({
             'tests/*.test.ts',
             'tests/shared/**/*.test.ts',
             'tests/components/**/*.test.ts',
+            'tests/features/**/*.test.ts',
             'tests/server/**/*.test.ts',
           ],
           testTimeout: 30_000,

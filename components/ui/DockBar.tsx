@@ -15,6 +15,8 @@ export function DockBar({ children, low = false }: { children: ReactNode; low?: 
   const paddingBottom = wide ? space[4] : low ? Math.max(28, insets.bottom) : space[3];
   return (
     <View
+      role="region"
+      aria-label="Actions"
       dataSet={{ printHide: true }}
       style={[
         styles.dock,

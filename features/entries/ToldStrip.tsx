@@ -1,6 +1,7 @@
 import { useMutation } from '@tanstack/react-query';
 import { type Href, useRouter } from 'expo-router';
 import { use, useEffect } from 'react';
+import { View } from 'react-native';
 import { UndoStrip } from '@/components/ui/UndoStrip';
 import { type Told, ToldContext, useUndo } from '@/features/entries';
 import { ENTRY_LOOKS } from './looks';
@@ -8,6 +9,16 @@ import { WordStrip } from './WordStrip';
 
 /** Right above the bottom bar, on whatever page: the last record with Undo for ten minutes, or a draft to go on with. */
 export function ToldStrip() {
+  const { told } = use(ToldContext);
+  if (told === null) return null;
+  return (
+    <View role="region" aria-label="Last record">
+      <Strip />
+    </View>
+  );
+}
+
+function Strip() {
   const { told, tell } = use(ToldContext);
   const router = useRouter();
   if (told === null) return null;

@@ -1,5 +1,11 @@
 /** What was typed and not yet saved, as this device keeps it. */
-export type StoredDraft = { at: string; values: Record<string, unknown> };
+export type StoredDraft = {
+  at: string;
+  values: Record<string, unknown>;
+  /** What the form is called, and its address with what it is about. */
+  title: string;
+  href: string;
+};
 
 type Whose = { id: string; accountId: string };
 
@@ -21,12 +27,28 @@ export function readDraft(key: string): StoredDraft | null {
 }
 
 const isDraft = (stored: unknown): stored is StoredDraft =>
-  typeof stored === 'object' && stored !== null && 'at' in stored && 'values' in stored;
+  typeof stored === 'object' && stored !== null && ['at', 'values', 'title', 'href'].every((part) => part in stored);
+
+/** Everything that this person has begun in the fishroom and not saved, the latest first. */
+export function draftsOf(whose: Whose): (StoredDraft & { key: string })[] {
+  const stem = draftKey(whose, '');
+  try {
+    return Object.keys(globalThis.localStorage ?? {})
+      .filter((key) => key.startsWith(stem))
+      .flatMap((key) => {
+        const draft = readDraft(key);
+        return draft ? [{ ...draft, key }] : [];
+      })
+      .sort((a, b) => (a.at < b.at ? 1 : -1));
+  } catch {
+    return [];
+  }
+}
 
 /** Private windows may refuse storage: then the draft lives as long as the page. */
-export function writeDraft(key: string, values: Record<string, unknown>): void {
+export function writeDraft(key: string, draft: Omit<StoredDraft, 'at'>): void {
   try {
-    globalThis.localStorage?.setItem(key, JSON.stringify({ at: new Date().toISOString(), values }));
+    globalThis.localStorage?.setItem(key, JSON.stringify({ at: new Date().toISOString(), ...draft }));
   } catch {
     // Storage is full or refused.
   }

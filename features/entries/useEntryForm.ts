@@ -60,8 +60,8 @@ export function useEntryForm<Value, Draft extends FormikValues>(options: Options
   });
   const { form } = entry;
   useEffect(() => {
-    if (form.dirty && !done.current) writeDraft(key, form.values);
-  }, [key, form.dirty, form.values]);
+    if (form.dirty && !done.current) writeDraft(key, { values: form.values, title, href: here() });
+  }, [key, title, form.dirty, form.values]);
   const isKept = form.dirty || found !== null;
   return {
     ...entry,

@@ -53,13 +53,14 @@ function OpenHoldRow({ hold, clock, checkDue }: HoldToday) {
 /** The picture of a hold's days, in a row or on its page. */
 export function HoldBars({ hold, clock, size = 'row' }: { hold: HoldRow; clock: Clock; size?: 'row' | 'page' }) {
   const state = clockState(clock, hold.plan);
+  const words = hold.endedOn ? { endWords: `day ${clock.day}` } : windowOf(clock, hold.plan);
   return (
     <DayBars
       bars={barsOf(clock, hold.plan, hold)}
       sentence={clockSentence(clock)}
       size={size}
-      windowOpen={state === 'strip' || state === 'handOver'}
-      {...windowOf(clock, hold.plan)}
+      windowOpen={!hold.endedOn && (state === 'strip' || state === 'handOver')}
+      {...words}
       {...(size === 'page' ? { startWords: 'day 1' } : {})}
     />
   );

@@ -9,6 +9,7 @@ import { Press } from '@/components/ui/Press';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { RECORD_GROUPS, type RecordAction } from './actions';
+import { DraftRows } from './DraftRows';
 import { useAtOnce } from './useAtOnce';
 import type { Here } from './useHere';
 
@@ -34,6 +35,7 @@ export function RecordActions({ here, onGone, replaces = false }: Props) {
   return (
     <View>
       {error ? <Notice tone="act" words={error.message} alert /> : null}
+      <DraftRows onGone={onGone} />
       {RECORD_GROUPS.map(({ word, actions }) => (
         <Group key={word} word={word}>
           {actions.map((action, i) => (

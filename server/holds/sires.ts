@@ -37,7 +37,7 @@ export async function siresFor(scope: Scope, tankId: string, span: Span): Promis
   const strains = await strainsHere(scope, tankId, [...new Set(all.flatMap((fish) => fish.strainId ?? []))], span);
   const openOf = (fishId: string) => {
     const open = holds.find((hold) => hold.holderId === fishId && hold.endedOn === null);
-    return { openHoldId: open?.id ?? null, holdingSince: open?.spawnLatest ?? null };
+    return { openHoldId: open?.id ?? null, holdingSince: open ? middleOf(open) : null };
   };
   return {
     sires: (await sharesOf(scope, adults, span)).map(({ fish, ...shares }) => ({
@@ -66,6 +66,10 @@ export async function siresFor(scope: Scope, tankId: string, span: Span): Promis
     lookedOn: await lookedInto(scope, tankId),
   };
 }
+
+/** The day that the days of a hold count from, as its clock has it. */
+const middleOf = ({ spawnEarliest, spawnLatest }: { spawnEarliest: string; spawnLatest: string }): string =>
+  addDays(spawnEarliest, Math.round(daysBetween(spawnEarliest, spawnLatest) / 2));
 
 /** What a male that was never seen dominant weighs, in days of dominance. */
 const SNEAKER_DAYS = 1;

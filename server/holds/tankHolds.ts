@@ -8,7 +8,7 @@ export async function holdsOfFish({ db, roomId }: Scope, fishIds: string[]) {
     .selectFrom('hold')
     .where('roomId', '=', roomId)
     .where('holderId', 'in', fishIds)
-    .select(['id', 'holderId', 'spawnLatest', 'endedOn'])
+    .select(['id', 'holderId', 'spawnEarliest', 'spawnLatest', 'endedOn'])
     .orderBy('spawnLatest')
     .orderBy('id')
     .execute();

@@ -145,7 +145,7 @@ export const proposeSires = endpoint({
         dominantDays: z.number(),
         ofDays: z.number(),
         share: z.number(),
-        /** Of a species whose males hold: the hold it has now. */
+        /** Of a species whose males hold: the hold it has now, and the day that its days count from. */
         openHoldId: z.nullable(Id),
         holdingSince: z.nullable(DayText),
       }),

@@ -65,13 +65,14 @@ describe('what is proposed when a full mouth is seen', () => {
       onDay: '2026-05-11',
       note: null,
     });
-    await tryRecord(owner, roomId, {
+    const changed = await tryRecord(owner, roomId, {
       kind: 'waterChanged',
       tankId: other.tankId,
       onDay: '2026-05-13',
       percent: 40,
       note: null,
     });
+    expect(changed.status).toBe(200);
     expect((await proposalFor(other.tankId)).lookedOn).toBe('2026-05-11');
     await owner.get(undoEntry, { params: { roomId, entryId: later.id } });
     expect((await proposalFor(other.tankId)).lookedOn).toBe('2026-05-09');
@@ -101,6 +102,13 @@ describe('what is proposed when a full mouth is seen', () => {
     });
     expect(asked.status).toBe(404);
   });
+});
+
+test('a female that holds is shown with the day that her days count from, the middle of the interval', async () => {
+  const own = await colonyIn(owner, roomId, { code: 'MOKE' });
+  await holdIn(owner, roomId, own, { from: '2026-04-02', until: '2026-04-06' });
+  const { females } = await proposalFor(own.tankId);
+  expect(females.find(({ fishId }) => fishId === own.females[0])?.holdingSince).toBe('2026-04-04');
 });
 
 test('a male may hold where the species’ males do', async () => {
