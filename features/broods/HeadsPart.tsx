@@ -34,7 +34,6 @@ export function HeadsPart({ brood, batches, reservations, holdbacks }: Props) {
     headCountOf(batch.lines).rows.map((row) => ({
       row,
       tank: batch.tank?.code ?? null,
-      by: byOf(batch, row.entry.id),
       several: batches.length > 1,
     })),
   );
@@ -63,7 +62,7 @@ export function HeadsPart({ brood, batches, reservations, holdbacks }: Props) {
           sentence={`${Math.round(brood.heads)} heads of ${brood.opened}, ${brood.lost} lost.`}
         />
         <Rows>
-          {shown.map(({ row, tank, by, several }) => (
+          {shown.map(({ row, tank, several }) => (
             <LedgerRow
               key={row.entry.id}
               date={dateWords(row.entry.on, room.today)}
@@ -72,7 +71,6 @@ export function HeadsPart({ brood, batches, reservations, holdbacks }: Props) {
               {...(row.change === 0 ? {} : { change: row.change })}
               loss={row.entry.kind === 'loss' || row.entry.kind === 'cull'}
               heads={row.balance}
-              by={by}
               corrected={row.undoneBy !== null}
             />
           ))}
@@ -84,8 +82,6 @@ export function HeadsPart({ brood, batches, reservations, holdbacks }: Props) {
     </Section>
   );
 }
-
-const byOf = (batch: BatchTold, id: string): string => batch.lines.find((line) => line.id === id)?.by ?? '';
 
 function headsAside(
   { available, reserved }: BroodRow,

@@ -1,5 +1,7 @@
 import { useLocalSearchParams } from 'expo-router';
 import { BroodScreen } from '@/features/broods/BroodScreen';
+import { GrowthPart } from '@/features/growth/GrowthPart';
+import { PhotoStrip } from '@/features/photos/PhotoStrip';
 import { History } from '@/features/record/History';
 
 export default function Brood() {
@@ -7,8 +9,8 @@ export default function Brood() {
   return (
     <BroodScreen
       broodId={broodId}
-      growth={null}
-      photos={null}
+      growth={<GrowthPart broodId={broodId} />}
+      photos={<PhotoStrip of={{ thing: 'brood', thingId: broodId }} />}
       inbreeding={null}
       history={<History thing="brood" id={broodId} />}
     />

@@ -1,0 +1,121 @@
+import { useQueryClient } from '@tanstack/react-query';
+import { launchCameraAsync, launchImageLibraryAsync } from 'expo-image-picker';
+import { useState } from 'react';
+import { StyleSheet, View } from 'react-native';
+import { InputBox } from '@/components/form/InputBox';
+import { space } from '@/components/theme/space';
+import { Button } from '@/components/ui/Button';
+import { Notice } from '@/components/ui/Notice';
+import { PhotoTile } from '@/components/ui/PhotoTile';
+import { Screen } from '@/components/ui/Screen';
+import { Text } from '@/components/ui/Text';
+import { newId } from '@/features/entries';
+import { useLeave } from '@/features/entries/useLeave';
+import { useRoom } from '@/hooks/useRoom';
+import type { PhotosOf } from './queries';
+import { sendPhoto } from './sendPhoto';
+
+type Chosen = { key: string; entryId: string; file: File; uri: string; share: number | null; trouble: string | null };
+
+/** Several photos at once, each sent by itself: what failed is sent again with one tap. */
+export function PhotoForm({ of, subtitle }: { of: PhotosOf; subtitle: string }) {
+  const room = useRoom();
+  const cache = useQueryClient();
+  const leave = useLeave();
+  const [photos, setPhotos] = useState<Chosen[]>([]);
+  const [caption, setCaption] = useState('');
+  const [busy, setBusy] = useState(false);
+  const change = (key: string, part: Partial<Chosen>) =>
+    setPhotos((all) => all.map((one) => (one.key === key ? { ...one, ...part } : one)));
+  const choose = async (from: 'camera' | 'library') => {
+    const options = {
+      mediaTypes: ['images' as const],
+      quality: 1,
+      allowsMultipleSelection: from === 'library',
+      exif: false,
+    };
+    const picked = await (from === 'camera' ? launchCameraAsync(options) : launchImageLibraryAsync(options));
+    const added = (picked.assets ?? []).flatMap(({ file, uri }) =>
+      file ? [{ key: newId(), entryId: newId(), file, uri, share: null, trouble: null }] : [],
+    );
+    setPhotos((all) => [...all, ...added]);
+  };
+  const send = async () => {
+    setBusy(true);
+    let failed = false;
+    for (const { key, entryId, file } of photos) {
+      const content = {
+        kind: 'photoTaken' as const,
+        photoId: key,
+        of: { thing: of.thing, id: of.thingId },
+        takenOn: null,
+        caption: caption.trim() || null,
+      };
+      change(key, { share: 0, trouble: null });
+      try {
+        await sendPhoto(
+          room.id,
+          { id: entryId, madeAt: new Date().toISOString(), dependsOn: [], content },
+          file,
+          (share) => change(key, { share }),
+        );
+        setPhotos((all) => all.filter((one) => one.key !== key));
+      } catch (error) {
+        failed = true;
+        change(key, { share: null, trouble: error instanceof Error ? error.message : 'Not sent' });
+      }
+    }
+    await cache.invalidateQueries({ queryKey: [room.id] });
+    setBusy(false);
+    if (!failed) leave();
+  };
+  const word = photos.length === 1 ? 'Save photo' : `Save ${photos.length} photos`;
+  return (
+    <Screen
+      title="Photo"
+      subtitle={subtitle}
+      close={{ label: 'Close Photo', onPress: () => leave() }}
+      dock={
+        <Button
+          kind="primary"
+          grow
+          label={photos.length > 0 ? word : 'Save photo'}
+          busy={busy}
+          busyLabel="Sending"
+          onPress={() => void send()}
+          {...(photos.length === 0 ? { disabledBecause: 'Choose a photo first' } : {})}
+        />
+      }
+      low
+      measure
+    >
+      <View style={{ gap: space[4] }}>
+        <View style={styles.line}>
+          <Button icon="photo" label="Take a photo" onPress={() => void choose('camera')} />
+          <Button icon="plus" label="Choose photos" onPress={() => void choose('library')} />
+        </View>
+        {photos.map(({ key, uri, share, trouble, file }) => (
+          <View key={key} style={{ gap: space[2] }}>
+            <PhotoTile uri={uri} alt={file.name} aspect={1.5} waiting />
+            {share === null ? null : <Text size="small" tone="soft">{`Sending, ${Math.round(share * 100)} %`}</Text>}
+            {trouble ? <Notice tone="act" alert words={trouble} /> : null}
+            {busy ? null : (
+              <Button
+                small
+                kind="text"
+                label={`Leave out ${file.name}`}
+                onPress={() => setPhotos((all) => all.filter((one) => one.key !== key))}
+              />
+            )}
+          </View>
+        ))}
+        <InputBox value={caption} onChangeText={setCaption} placeholder="Caption, not needed" aria-label="Caption" />
+        <Text size="small" tone="soft">
+          The date is read from the picture. Where it was taken is removed before it is stored.
+        </Text>
+      </View>
+    </Screen>
+  );
+}
+
+const styles = StyleSheet.create({ line: { flexDirection: 'row', flexWrap: 'wrap', gap: space[2] } });
