@@ -30,8 +30,13 @@ export function Form<Draft extends FormikValues>({ form, notice, label, page = f
   return (
     <FormikProvider value={form}>
       <NoticeContext value={page ? notice : null}>
-        {/* Round a whole page it is no landmark: the page's own stand inside. */}
-        <View ref={box} role={page ? 'group' : 'form'} aria-label={label} style={page ? styles.page : styles.form}>
+        {/* Round a whole page it is no landmark: the page's own stand inside, and its heading names it. */}
+        <View
+          ref={box}
+          role={page ? undefined : 'form'}
+          aria-label={page ? undefined : label}
+          style={page ? styles.page : styles.form}
+        >
           {children}
           {page ? null : <FormNoticeBlock notice={notice} />}
         </View>

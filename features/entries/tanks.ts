@@ -20,15 +20,21 @@ export function useTanks() {
   return useQuery(tanksQuery(roomId));
 }
 
+/** Single fish up to so many are named. */
+const MOST_NAMED = 2;
+
 /** "DUMA-A, 8 fish", "DUMA-26C, 29 heads", "empty": who lives in a tank, in a few words. */
 export function residentsWords({ residents }: TankRow): string {
   if (residents.length === 0) return 'empty';
+  const single = residents.filter(({ thing }) => thing === 'fish');
+  const many = single.length > MOST_NAMED;
   const order = { colony: 0, batch: 1, fish: 2 };
-  return residents
+  const words = residents
+    .filter(({ thing }) => thing !== 'fish' || !many)
     .toSorted((a, b) => order[a.thing] - order[b.thing])
     .map(({ thing, code, heads }) => {
       if (thing === 'colony') return `${code}, ${heads} fish`;
       return thing === 'batch' && heads > 0 ? `${code}, ${heads} heads` : code;
-    })
-    .join(' · ');
+    });
+  return [...words, ...(many ? [`${single.length} single fish`] : [])].join(' · ');
 }

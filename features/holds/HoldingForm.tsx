@@ -3,13 +3,14 @@ import { useState } from 'react';
 import { ErrorState } from '@/components/ui/ErrorState';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
+import { Unreachable } from '@/features/call';
 import { TankChoice } from '@/features/entries/TankChoice';
 import { useTanks } from '@/features/entries/tanks';
 import { useLeave } from '@/features/entries/useLeave';
 import { useRoom } from '@/hooks/useRoom';
 import { addDays } from '@/shared/days';
 import { BeginFields } from './BeginFields';
-import { useProposal } from './queries';
+import { useProposal, useProposalHere } from './queries';
 
 type Props = { seen: 'holding' | 'spawn'; tankId?: string | undefined; colonyId?: string | undefined };
 
@@ -38,7 +39,9 @@ function InTank({ seen, title, tankId, colonyId }: Props & { title: string; tank
   const leave = useLeave();
   const { data: tanks } = useTanks();
   const [days, setDays] = useState({ from: addDays(today, -FIRST_LOOK_DAYS), until: today });
-  const { data: proposal, error, refetch } = useProposal(tankId, days.from, days.until);
+  const { data: asked, error, refetch } = useProposal(tankId, days.from, days.until);
+  const known = useProposalHere(tankId, error instanceof Unreachable);
+  const proposal = asked ?? known;
   const tank = tanks?.find(({ id }) => id === tankId);
   if (!proposal || !tank) {
     const missing = tanks && !tank;

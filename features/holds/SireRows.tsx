@@ -20,9 +20,11 @@ export function SireRows({ parentage, possibleHybrid }: Props) {
     <Section title="Sire of this brood" aside={aside}>
       {sires.length > 0 ? (
         <Rows label="Possible sires">
-          {sires.map((sire) => (
-            <SireRow key={sire.fishId ?? 'notKnown'} sire={sire} certain={certain} />
-          ))}
+          {sires
+            .toSorted((a, b) => b.share - a.share)
+            .map((sire) => (
+              <SireRow key={sire.fishId ?? 'notKnown'} sire={sire} certain={certain} />
+            ))}
         </Rows>
       ) : (
         <Text tone="soft">Nothing is known of the father.</Text>

@@ -4,7 +4,10 @@ import { call } from '@/features/call';
 import { useRoom } from '@/hooks/useRoom';
 import { proposeBrood } from '@/shared/broods/contract';
 import type { Day } from '@/shared/days';
+import { listFish } from '@/shared/fish/contract';
 import { listHolds, proposeSires, readHold } from '@/shared/holds/contract';
+import type { Proposal } from './beginning';
+import { proposalHere } from './proposalHere';
 
 export const holdQuery = (roomId: string, holdId: string) =>
   queryOptions({
@@ -29,6 +32,18 @@ export function useProposal(tankId: string, from: Day, until: Day) {
     queryFn: ({ signal }) => call(proposeSires, { params: { roomId, tankId }, query: { from, until }, signal }),
     placeholderData: keepPreviousData,
   });
+}
+
+/** The same without a signal, out of what this device has seen before. */
+export function useProposalHere(tankId: string, wanted: boolean): Proposal | null {
+  const { id: roomId } = useRoom();
+  const holds = useQuery({ ...openHoldsQuery(roomId), enabled: wanted });
+  const fish = useQuery({
+    queryKey: [roomId, 'record', 'fish'],
+    queryFn: ({ signal }) => call(listFish, { params: { roomId }, signal }),
+    enabled: wanted,
+  });
+  return wanted && fish.data ? proposalHere(tankId, fish.data.fish, holds.data ?? []) : null;
 }
 
 /** The next free code for a brood of a strain. */

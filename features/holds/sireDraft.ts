@@ -47,9 +47,10 @@ export const candidatesOf = (lines: readonly SireLine[]) =>
 /** What the shares rest on, as the hold's page tells it later. */
 export function basisOf(lines: readonly SireLine[], { shares }: SireDraft): string | null {
   if (Object.values(shares).some((text) => text?.trim())) return 'Shares set by hand';
+  const inNow = lines.filter(({ on }) => on);
+  if (inNow.some(({ sire }) => sire?.ofDays === 0)) return 'Equal shares: recorded without a signal';
   const dominant = lines.flatMap(({ on, sire }) => (on && sire && sire.dominantDays > 0 ? [sire] : []));
-  if (dominant.length === 0)
-    return lines.filter(({ on }) => on).length > 1 ? 'Equal shares: no dominance recorded' : null;
+  if (dominant.length === 0) return inNow.length > 1 ? 'Equal shares: no dominance recorded' : null;
   return dominant
     .map(({ code, dominantDays, ofDays }) => `${code ?? 'a male'} dominant ${dominantDays} of ${ofDays} days`)
     .join(', ');

@@ -15,7 +15,9 @@ import { ButtonWrap } from './ButtonWrap';
 export function IncidentTanks({ tanks }: { tanks: readonly TankRow[] }) {
   const [{ value: chosen }, , { setValue }] = useField<string[]>('tankIds');
   const field = useFieldState('tankIds');
-  const places = [...new Set(tanks.flatMap(({ place }) => place ?? []))];
+  // "Long wall, top left" and "Long wall, bottom" are one wall to a power cut.
+  const wallOf = ({ place }: TankRow) => place?.split(',')[0]?.trim() ?? null;
+  const places = [...new Set(tanks.flatMap((tank) => wallOf(tank) ?? []))];
   const choose = (some: readonly TankRow[]) => void setValue(some.map(({ id }) => id));
   return (
     <Part title="Which tanks?" aside={`${chosen.length} of ${tanks.length}`}>
@@ -26,7 +28,7 @@ export function IncidentTanks({ tanks }: { tanks: readonly TankRow[] }) {
             key={place}
             label={place}
             small
-            onPress={() => choose(tanks.filter((tank) => tank.place === place))}
+            onPress={() => choose(tanks.filter((tank) => wallOf(tank) === place))}
           />
         ))}
         {chosen.length > 0 ? <Button label="None" kind="text" small onPress={() => choose([])} /> : null}

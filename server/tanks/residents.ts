@@ -50,7 +50,9 @@ export async function staysOf(scope: Scope, which: { tankId?: string; openOnly: 
     rows.flatMap(({ batchId }) => batchId ?? []),
   );
   const nameOf = await speciesNames(scope);
-  return rows.map((row) => {
+  // A batch that everyone has left lives nowhere; eggs and wrigglers do, though no head is counted yet.
+  const here = which.openOnly ? rows.filter(({ batchId }) => !batchId || !batches.get(batchId)?.isEmpty) : rows;
+  return here.map((row) => {
     const batch = row.batchId ? batches.get(row.batchId) : undefined;
     const speciesId = row.speciesId ?? batch?.speciesId ?? null;
     return {
@@ -74,6 +76,8 @@ export async function staysOf(scope: Scope, which: { tankId?: string; openOnly: 
 type Batch = {
   code: string;
   heads: number;
+  /** Counted once, and nobody left. */
+  isEmpty: boolean;
   strainId: string | null;
   strainCode: string | null;
   speciesId: string | null;
@@ -112,11 +116,13 @@ async function batchesOf({ db, roomId }: Scope, ids: string[]): Promise<Map<stri
     ids.map((id) => {
       const own = sources.filter(({ batchId }) => batchId === id);
       const first = own[0];
+      const count = headCount(lines.filter(({ batchId }) => batchId === id));
       return [
         id,
         {
           code: [...new Set(own.map(({ code }) => code))].join(' + '),
-          heads: headCount(lines.filter(({ batchId }) => batchId === id)).balance,
+          heads: count.balance,
+          isEmpty: count.series.length > 0 && count.balance === 0,
           strainId: first?.strainId ?? null,
           strainCode: first?.strainCode ?? null,
           speciesId: first?.speciesId ?? null,

@@ -56,6 +56,7 @@ describe('possible sires', () => {
     expect(said(SIRES, { ...NO_CHANGE, shares: { a01: '60' } })).toBe('Shares set by hand');
     expect(said([male('a01', 0.5), male('a02', 0.5)])).toBe('Equal shares: no dominance recorded');
     expect(said([male('a01', 1)])).toBeNull();
+    expect(said([{ ...male('a01', 1), ofDays: 0 }])).toBe('Equal shares: recorded without a signal');
   });
 });
 
