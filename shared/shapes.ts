@@ -1,4 +1,5 @@
 import * as z from 'zod/mini';
+import { DayText } from './days';
 
 /** One line of text, trimmed, without control characters. */
 export const line = (limit: number, empty: string) =>
@@ -68,3 +69,9 @@ export const TypedNote = z.codec(
     encode: (stored) => stored ?? '',
   },
 );
+
+/** A day of a form that may be left out. */
+export const TypedDay = z.codec(z.optional(z.string()), z.nullable(DayText), {
+  decode: (text) => text?.trim() || null,
+  encode: (stored) => stored ?? '',
+});

@@ -45,7 +45,8 @@ export function Press({ href, onPress, unavailable = false, style, children, rol
     <Pressable
       {...rest}
       ref={ref}
-      role={href ? undefined : (role ?? 'button')}
+      // A link stays a link, except in a menu, whose members are all menu items.
+      role={href && role !== 'menuitem' ? undefined : (role ?? 'button')}
       aria-disabled={unavailable || undefined}
       onPress={act}
       onPressIn={() => setPressed(true)}

@@ -35,7 +35,9 @@ export function ClashFacts({ spawn, sires, hold }: Props) {
 export function spawnWords({ spawnSeen, spawnEarliest, spawnLatest }: Props['spawn'], today: string): string {
   if (spawnSeen) return `seen ${dayWords(spawnEarliest, today)}`;
   if (spawnEarliest === spawnLatest) return `${dayWords(spawnLatest, today)}, not seen`;
-  return `${dayRangeWords(spawnEarliest, spawnLatest)}, not seen`;
+  const year = spawnLatest.slice(0, 4);
+  const days = dayRangeWords(spawnEarliest, spawnLatest);
+  return `${year === today.slice(0, 4) ? days : `${days} ${year}`}, not seen`;
 }
 
 function Fact({ name, children }: { name: string; children: React.ReactNode }) {

@@ -10,7 +10,7 @@ import { useRoom } from '@/hooks/useRoom';
 import { clockOf } from '@/shared/holds/clockOf';
 import { clockSentence, daysHeld, nextInClock } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
-import { barsOf } from './clockWindow';
+import { dayBars } from '@/shared/holds/dayBars';
 import { HoldName, HoldPlace } from './HoldName';
 import { openHoldsQuery } from './queries';
 import { whoHolds } from './whoHolds';
@@ -57,7 +57,7 @@ function PaneRow({ hold, selected }: { hold: HoldRow; selected: boolean }) {
     >
       {clock ? (
         <>
-          <MiniDayBars bars={barsOf(clock, hold.plan)} sentence={clockSentence(clock)} width={200} />
+          <MiniDayBars bars={dayBars(clock, { plan: hold.plan })} sentence={clockSentence(clock)} width={200} />
           <Text size="small" tone="soft">
             {next}
           </Text>

@@ -8,7 +8,8 @@ import type { Clock, SpawnInterval } from '@/shared/holds/clock';
 import { clockOf } from '@/shared/holds/clockOf';
 import { clockSentence, clockState, dayRangeWords, releaseDoubtDays } from '@/shared/holds/clockWords';
 import type { ClockFacts } from '@/shared/holds/contract';
-import { barsOf, windowOf } from './clockWindow';
+import { dayBars } from '@/shared/holds/dayBars';
+import { windowOf } from './clockWindow';
 
 type Props = { facts: ClockFacts | null; spawn: SpawnInterval; plan: 'strip' | 'leave' };
 
@@ -35,7 +36,7 @@ export function PreviewBars({ clock, plan }: { clock: Clock; plan: Props['plan']
   const state = clockState(clock, plan);
   return (
     <DayBars
-      bars={barsOf(clock, plan)}
+      bars={dayBars(clock, { plan })}
       sentence={clockSentence(clock)}
       windowOpen={state === 'strip' || state === 'handOver'}
       {...windowOf(clock, plan)}

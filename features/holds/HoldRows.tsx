@@ -7,8 +7,9 @@ import { useRoom } from '@/hooks/useRoom';
 import type { Clock } from '@/shared/holds/clock';
 import { clockSentence, clockState } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
+import { dayBars } from '@/shared/holds/dayBars';
 import type { HoldToday } from '@/shared/today/todayOf';
-import { barsOf, windowOf } from './clockWindow';
+import { windowOf } from './clockWindow';
 import { HoldName, HoldPlaceShort } from './HoldName';
 import { HoldsOnCalendar } from './HoldsOnCalendar';
 import { isPressing, nextWords } from './nextWords';
@@ -56,7 +57,7 @@ export function HoldBars({ hold, clock, size = 'row' }: { hold: HoldRow; clock: 
   const words = hold.endedOn ? { endWords: `day ${clock.day}` } : windowOf(clock, hold.plan);
   return (
     <DayBars
-      bars={barsOf(clock, hold.plan, hold)}
+      bars={dayBars(clock, { plan: hold.plan, checks: hold.checkedOn, endedOn: hold.endedOn })}
       sentence={clockSentence(clock)}
       size={size}
       windowOpen={!hold.endedOn && (state === 'strip' || state === 'handOver')}

@@ -1,8 +1,8 @@
 import { HoldCalendar } from '@/components/chart/HoldCalendar';
 import { useRoom } from '@/hooks/useRoom';
 import { clockSentence } from '@/shared/holds/clockWords';
+import { dayBars } from '@/shared/holds/dayBars';
 import type { HoldToday } from '@/shared/today/todayOf';
-import { barsOf } from './clockWindow';
 import { HoldName, HoldPlaceShort } from './HoldName';
 import { isPressing, nextWords } from './nextWords';
 import { whoHolds } from './whoHolds';
@@ -21,7 +21,7 @@ export function HoldsOnCalendar({ holds }: { holds: HoldToday[] }) {
           figure: clock ? String(clock.day) : '?',
           title: <HoldName hold={hold} />,
           note: <HoldPlaceShort hold={hold} />,
-          bars: clock ? barsOf(clock, hold.plan, hold) : [],
+          bars: clock ? dayBars(clock, { plan: hold.plan, checks: hold.checkedOn, endedOn: hold.endedOn }) : [],
           state,
           due: isPressing(hold, clock),
           label: `${whoHolds(hold)}, ${clock ? clockSentence(clock) : ''} ${state}`,

@@ -17,6 +17,8 @@ export const tankQuery = (roomId: string, tankId: string) =>
     queryFn: ({ signal }) => call(readTank, { params: { roomId, tankId }, signal }),
   });
 
+export type TankTold = z.output<typeof readTank.output>;
+
 export const tankWaterQuery = (roomId: string, tankId: string) =>
   queryOptions({
     queryKey: [roomId, 'water', tankId],

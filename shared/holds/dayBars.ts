@@ -22,11 +22,13 @@ export type DayBar = {
 const BARS_AFTER = 1;
 const MOST_BARS = 150;
 
+type Marks = { checks?: readonly Day[]; endedOn?: Day | null; plan?: 'strip' | 'leave' };
+
 /**
  * A bar for each day from the spawn to a day past the release window, to today if she is overdue, or to the day it ended.
- * `checks` are days on which someone looked. The array is what the day-bars picture draws, from left to right.
+ * `checks` are days on which someone looked; a hold that is left to release has no strip window. The array is what the day-bars picture draws, from left to right.
  */
-export function dayBars(clock: Clock, marks: { checks?: readonly Day[]; endedOn?: Day | null } = {}): DayBar[] {
+export function dayBars(clock: Clock, marks: Marks = {}): DayBar[] {
   const { startedOn, today, releaseLatest } = clock;
   const ended = marks.endedOn ?? null;
   const planned = addDays(releaseLatest, BARS_AFTER);
@@ -40,7 +42,7 @@ export function dayBars(clock: Clock, marks: { checks?: readonly Day[]; endedOn?
       when: whenOf(on, ended === null ? today : null),
       stage: stageOn(clock, on),
       unseen: on < clock.spawnLatest,
-      strip: isWithin(on, clock.stripFrom, clock.stripTo),
+      strip: marks.plan !== 'leave' && isWithin(on, clock.stripFrom, clock.stripTo),
       handOver: isWithin(on, clock.handOverFrom, clock.handOverTo),
       release: isWithin(on, clock.releaseEarliest, releaseLatest),
       expected: on === clock.releaseOn,

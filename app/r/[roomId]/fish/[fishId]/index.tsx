@@ -1,0 +1,16 @@
+import { useLocalSearchParams } from 'expo-router';
+import { FishScreen } from '@/features/fish/FishScreen';
+import { PhotoStrip } from '@/features/photos/PhotoStrip';
+import { History } from '@/features/record/History';
+
+export default function Fish() {
+  const { fishId } = useLocalSearchParams<{ fishId: string }>();
+  return (
+    <FishScreen
+      fishId={fishId}
+      photos={<PhotoStrip of={{ thing: 'fish', thingId: fishId }} />}
+      inbreeding={null}
+      history={<History thing="fish" id={fishId} />}
+    />
+  );
+}

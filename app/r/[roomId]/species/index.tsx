@@ -1,0 +1,5 @@
+import { SpeciesLibraryScreen } from '@/features/species/SpeciesScreen';
+
+export default function Species() {
+  return <SpeciesLibraryScreen />;
+}

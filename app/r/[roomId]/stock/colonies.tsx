@@ -1,0 +1,5 @@
+import { ColoniesScreen } from '@/features/colonies/ColonyScreen';
+
+export default function Colonies() {
+  return <ColoniesScreen />;
+}

@@ -1,0 +1,5 @@
+import { FishesScreen } from '@/features/fish/FishScreen';
+
+export default function Fishes() {
+  return <FishesScreen />;
+}

@@ -1,0 +1,5 @@
+import { StrainsScreen } from '@/features/strains/StrainScreen';
+
+export default function Strains() {
+  return <StrainsScreen />;
+}

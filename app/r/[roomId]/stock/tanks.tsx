@@ -1,0 +1,5 @@
+import { TanksScreen } from '@/features/tanks/TankScreen';
+
+export default function Tanks() {
+  return <TanksScreen />;
+}

@@ -1,0 +1,7 @@
+import { useLocalSearchParams } from 'expo-router';
+import { LotForm } from '@/features/strains/LotForm';
+
+export default function NewLot() {
+  const { strainId } = useLocalSearchParams<{ strainId: string }>();
+  return <LotForm strainId={strainId} />;
+}

@@ -1,0 +1,5 @@
+import { NewTankScreen } from '@/features/tanks/TankForm';
+
+export default function NewTank() {
+  return <NewTankScreen />;
+}
