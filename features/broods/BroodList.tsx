@@ -14,11 +14,11 @@ import { Filters, Toolbar } from '@/components/ui/Toolbar';
 import { VirtualList } from '@/components/ui/VirtualList';
 import { useRoom } from '@/hooks/useRoom';
 import { useUrlWord } from '@/hooks/useUrlWord';
+import { broodStage } from '@/shared/broods/broodStage';
 import type { BroodRow } from '@/shared/broods/contract';
 import { STAGE_NAMES, STAGES, type Stage } from '@/shared/broods/stage';
 import { byNumber } from '@/shared/codes';
 import { formatLength } from '@/shared/unitWords';
-import { broodStage } from './broodStage';
 import { broodsQuery } from './queries';
 
 const ORDERS = ['newest', 'code', 'heads', 'size'] as const;

@@ -59,7 +59,7 @@ export function ColonyPage({ told, photos, history }: ColonyParts & { told: Colo
             },
             { figure: String(colony.openHolds), label: 'holding' },
             { figure: fryABrood === null ? '–' : String(fryABrood), label: 'fry a brood' },
-            { figure: broodsAYear === null ? '–' : String(broodsAYear), label: 'broods a year' },
+            { figure: broodsAYear === null ? '–' : String(broodsAYear), label: 'broods a yr' },
           ]}
         />
         {colony.note ? <Text>{colony.note}</Text> : null}

@@ -1,6 +1,7 @@
 import { useLocalSearchParams } from 'expo-router';
 import { BroodScreen } from '@/features/broods/BroodScreen';
 import { GrowthPart } from '@/features/growth/GrowthPart';
+import { InbreedingPart } from '@/features/lineage/InbreedingPart';
 import { PhotoStrip } from '@/features/photos/PhotoStrip';
 import { History } from '@/features/record/History';
 
@@ -11,7 +12,7 @@ export default function Brood() {
       broodId={broodId}
       growth={<GrowthPart broodId={broodId} />}
       photos={<PhotoStrip of={{ thing: 'brood', thingId: broodId }} />}
-      inbreeding={null}
+      inbreeding={<InbreedingPart id={broodId} />}
       history={<History thing="brood" id={broodId} />}
     />
   );

@@ -1,5 +1,6 @@
 import { useLocalSearchParams } from 'expo-router';
 import { FishScreen } from '@/features/fish/FishScreen';
+import { InbreedingPart } from '@/features/lineage/InbreedingPart';
 import { PhotoStrip } from '@/features/photos/PhotoStrip';
 import { History } from '@/features/record/History';
 
@@ -9,7 +10,7 @@ export default function Fish() {
     <FishScreen
       fishId={fishId}
       photos={<PhotoStrip of={{ thing: 'fish', thingId: fishId }} />}
-      inbreeding={null}
+      inbreeding={<InbreedingPart id={fishId} />}
       history={<History thing="fish" id={fishId} />}
     />
   );

@@ -1,8 +1,8 @@
-import type { BroodRow } from '@/shared/broods/contract';
-import { type Stage, stageOf } from '@/shared/broods/stage';
-import type { Day } from '@/shared/days';
-import { adultMm } from '@/shared/species/adultSize';
-import { librarySpecies, profileOf } from '@/shared/species/library';
+import type { Day } from '../days';
+import { adultMm } from '../species/adultSize';
+import { librarySpecies, profileOf } from '../species/library';
+import type { BroodRow } from './contract';
+import { type Stage, stageOf } from './stage';
 
 /** The stage of a brood today, by its last sample where the species' adult length is known. */
 export function broodStage(brood: BroodRow, today: Day): Stage {

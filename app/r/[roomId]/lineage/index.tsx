@@ -1,0 +1,5 @@
+import { LineageGraphScreen } from '@/features/lineage/GraphScreen';
+
+export default function Lineage() {
+  return <LineageGraphScreen />;
+}
