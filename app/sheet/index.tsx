@@ -1,0 +1,5 @@
+import { CheckFileScreen } from '@/features/sheets/CheckFileScreen';
+
+export default function CheckFile() {
+  return <CheckFileScreen />;
+}

@@ -1,0 +1,94 @@
+import { useMutation } from '@tanstack/react-query';
+import { lazy, Suspense, useRef, useState } from 'react';
+import { StyleSheet, View } from 'react-native';
+import { InputBox } from '@/components/form/InputBox';
+import { line, radius, space } from '@/components/theme/space';
+import { useTheme } from '@/components/theme/ThemeProvider';
+import { Button } from '@/components/ui/Button';
+import { Loading } from '@/components/ui/Loading';
+import { Notice } from '@/components/ui/Notice';
+import { Screen } from '@/components/ui/Screen';
+import { Text } from '@/components/ui/Text';
+import { parsed, readKeySet, readSheetFile } from '@/shared/sheets/sheetFile';
+import { VerdictNotice } from './CheckScreen';
+import { keysFor } from './keysFor';
+import { useDrop } from './useDrop';
+import { verifySheet } from './verifySheet';
+
+const SheetPaper = lazy(() => import('./SheetPaper').then((module) => ({ default: module.SheetPaper })));
+
+const MOST_BYTES = 24_000_000;
+
+/** A sheet's file, dropped or chosen, from here or from anywhere: checked without leaving this browser. */
+export function CheckFileScreen() {
+  const theme = useTheme();
+  const [keys, setKeys] = useState('');
+  const [text, setText] = useState<string | null>(null);
+  const zone = useRef<View>(null);
+  const check = useMutation({ mutationFn: checkText });
+  const take = async (file: File) => {
+    const read = file.size > MOST_BYTES ? '' : await file.text();
+    setText(read);
+    check.mutate({ text: read, pasted: keys });
+  };
+  const choose = useDrop(zone, (file) => void take(file));
+  return (
+    <Screen title="Check a lineage sheet" measure>
+      <View style={{ gap: space[4] }}>
+        <View ref={zone} style={[styles.zone, { borderColor: theme.control }]}>
+          <Text strong>Drop the sheet’s file here</Text>
+          <Text size="small" tone="soft" align="center">
+            Its name ends in .kinwater.json. It is read in this browser and sent nowhere.
+          </Text>
+          <Button label="Choose the file" icon="upload" onPress={choose} />
+        </View>
+        <View style={{ gap: space[2] }}>
+          <Text strong>The fishroom’s keys</Text>
+          <Text size="small" tone="soft">
+            Left empty, they are fetched from the address in the file. Paste them where that cannot be reached.
+          </Text>
+          <InputBox
+            aria-label="The fishroom’s keys"
+            value={keys}
+            onChangeText={setKeys}
+            multiline
+            placeholder="{&quot;keys&quot;: […]}"
+          />
+          {text !== null && keys ? (
+            <Button small label="Check again with these keys" onPress={() => check.mutate({ text, pasted: keys })} />
+          ) : null}
+        </View>
+        {check.isPending ? <Loading label="Checking the sheet" rows={2} /> : null}
+        {check.error ? <Notice tone="look" alert words={check.error.message} /> : null}
+        {check.data ? <VerdictNotice verdict={check.data} /> : null}
+        {check.data?.state === 'valid' ? (
+          <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
+            <SheetPaper content={check.data.content} paper="a4" checkUrl={check.data.content.fishroom.address} />
+          </Suspense>
+        ) : null}
+      </View>
+    </Screen>
+  );
+}
+
+async function checkText({ text, pasted }: { text: string; pasted: string }) {
+  const file = readSheetFile(text);
+  if (!file) return { state: 'notASheet', because: 'form' } as const;
+  if (pasted.trim()) {
+    const own = readKeySet(parsed(pasted));
+    if (!own) throw new Error('What you pasted is not a set of keys: it begins with {"keys": […');
+    return verifySheet(file.jws, { keys: own, at: null });
+  }
+  return verifySheet(file.jws, await keysFor(file.keysAt));
+}
+
+const styles = StyleSheet.create({
+  zone: {
+    borderWidth: line.control,
+    borderStyle: 'dashed',
+    borderRadius: radius.control,
+    padding: space[6],
+    gap: space[3],
+    alignItems: 'center',
+  },
+});

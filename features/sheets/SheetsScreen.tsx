@@ -1,0 +1,53 @@
+import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
+import { Code } from '@/components/ui/Code';
+import { EmptyState } from '@/components/ui/EmptyState';
+import { ErrorState } from '@/components/ui/ErrorState';
+import { Loading } from '@/components/ui/Loading';
+import { Row } from '@/components/ui/Row';
+import { Rows } from '@/components/ui/Rows';
+import { Screen } from '@/components/ui/Screen';
+import { VirtualList } from '@/components/ui/VirtualList';
+import { useRoom } from '@/hooks/useRoom';
+import { formatDate } from '@/shared/days';
+import { sheetsQuery } from './queries';
+
+const STATE_WORDS = { valid: 'Valid', replaced: 'Replaced', withdrawn: 'Withdrawn' };
+
+/** Every sheet that was issued, newest first; `tabs` are the Lineage place's. */
+export function SheetsScreen({ tabs }: { tabs: ReactNode }) {
+  const room = useRoom();
+  const { data, error, refetch } = useQuery(sheetsQuery(room.id));
+  return (
+    <Screen title="Lineage" fixed={tabs} measure>
+      {!data ? (
+        error ? (
+          <ErrorState title="The sheets could not be loaded" words={error.message} onRetry={() => void refetch()} />
+        ) : (
+          <Loading label="Loading the sheets" />
+        )
+      ) : data.length === 0 ? (
+        <EmptyState
+          title="No sheet issued yet"
+          words="Open a fish or a brood, then Lineage sheet. A sheet is also issued when an order is collected."
+        />
+      ) : (
+        <Rows label="Lineage sheets">
+          <VirtualList items={data} keyOf={({ id }) => id} label="Lineage sheets">
+            {({ id, number, subject, heads, issuedOn, by, state }) => (
+              <Row
+                href={`/r/${room.id}/sheets/${id}`}
+                label={`Sheet ${number}, ${subject.code}, ${STATE_WORDS[state]}`}
+                figure={String(heads)}
+                unit="fish"
+                title={<Code>{number}</Code>}
+                state={STATE_WORDS[state]}
+                note={`${subject.code} · ${formatDate(issuedOn)}, ${by}`}
+              />
+            )}
+          </VirtualList>
+        </Rows>
+      )}
+    </Screen>
+  );
+}
