@@ -33,12 +33,15 @@ export class Unreachable extends Error {
   override readonly name = 'Unreachable';
 }
 
+const NOT_HERE = 'No signal, and this is not on this device yet. Open it once with a signal; then it stays here.';
+const NOT_SENT = 'No signal. Nothing was sent. Try again when it is back.';
+
 async function reach(address: string, request: RequestInit): Promise<Response> {
   try {
     return await fetch(address, request);
   } catch (error) {
     if (request.signal?.aborted) throw error;
-    throw new Unreachable('No signal. Nothing is lost; it is sent when the connection is back.');
+    throw new Unreachable(request.method === 'GET' ? NOT_HERE : NOT_SENT);
   }
 }
 

@@ -2,6 +2,7 @@ import { MutationCache, QueryCache, QueryClient, QueryClientProvider } from '@ta
 import { type ReactNode, useState } from 'react';
 import { ThemeProvider } from '@/components/theme/ThemeProvider';
 import { Unreachable } from '@/features/call';
+import { keptAnswers } from '@/features/call/keptAnswers';
 import { isSignedOut, meQuery } from './queries';
 
 /** Everything that stands round every page: the theme, and what was fetched. */
@@ -26,8 +27,10 @@ function newCache(): QueryClient {
       queries: {
         staleTime: 30_000,
         // A refusal stays a refusal; only a bad line is worth another try.
-        retry: (failures, error) => error instanceof Unreachable && failures < 2,
+        retry: (failures, error) => error instanceof Unreachable && failures < 2 && navigator.onLine,
         networkMode: 'always',
+        refetchOnReconnect: true,
+        persister: keptAnswers,
       },
       mutations: { networkMode: 'always' },
     },

@@ -1,5 +1,7 @@
 import { type QueryClient, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { call } from '@/features/call';
+import { forgetAnswers, keepFor } from '@/features/call/keptAnswers';
+import { forgetWaiting } from '@/features/entries';
 import { getMe, type Me, signOut } from '@/shared/accounts/contract';
 import { Refusal } from '@/shared/refusal';
 
@@ -10,10 +12,13 @@ export const meQuery = queryOptions({
   queryKey: ['me'],
   queryFn: async ({ signal }): Promise<Me | null> => {
     try {
-      return await call(getMe, { signal });
+      const me = await call(getMe, { signal });
+      keepFor(me.account.id);
+      return me;
     } catch (error) {
-      if (isSignedOut(error)) return null;
-      throw error;
+      if (!isSignedOut(error)) throw error;
+      keepFor(null);
+      return null;
     }
   },
   staleTime: 60_000,
@@ -37,7 +42,9 @@ export function useSignOut() {
   const cache = useQueryClient();
   return useMutation({
     mutationFn: () => call(signOut),
-    onSuccess: () => {
+    onSuccess: async () => {
+      await forgetWaiting();
+      await forgetAnswers();
       cache.setQueryData(meQuery.queryKey, null);
       forgetFetched(cache);
     },

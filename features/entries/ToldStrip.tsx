@@ -55,7 +55,7 @@ function KeptStrip({ told, hide }: { told: Kept; hide: () => void }) {
   if (undo.isError) return <WordStrip words={undo.error.message} icon="warn" onDismiss={hide} />;
   return (
     <UndoStrip
-      words={`${what}. Saved.`}
+      words={line ? `${what}. Saved.` : `${what}. Waits here for a signal.`}
       icon={icon}
       undoLabel={`Undo ${what}`}
       busy={undo.isPending}

@@ -5,6 +5,8 @@ export type StoredDraft = {
   /** What the form is called, and its address with what it is about. */
   title: string;
   href: string;
+  /** A record that waits on this device and was opened here again: saved, it takes its own place. */
+  again?: { entryId: string; ids: [what: string, id: string][] };
 };
 
 type Whose = { id: string; accountId: string };

@@ -38,7 +38,7 @@ export function useEntryForm<Value, Draft extends FormikValues>(options: Options
   const { tell } = use(ToldContext);
   const [found, setFound] = useState<StoredDraft | null>(() => readDraft(key));
   const [clash, setClash] = useState<Refusal | null>(null);
-  const once = useOnce();
+  const once = useOnce(found?.again ?? null);
   // Saved: what is still on the screen until the page is left is no draft any more.
   const done = useRef(false);
   const entry = useSchemaForm({
@@ -48,7 +48,8 @@ export function useEntryForm<Value, Draft extends FormikValues>(options: Options
     save: async (value) => {
       const made = content(value, once.idOf, form.values);
       try {
-        const kept = await record(made, { id: once.entryIdOf(made) });
+        const typed = { key, title, href: here(), values: form.values, ids: once.all() };
+        const kept = await record(made, { id: once.entryIdOf(made), typed });
         done.current = true;
         dropDraft(key);
         leave(saved?.(kept, value));
@@ -60,8 +61,9 @@ export function useEntryForm<Value, Draft extends FormikValues>(options: Options
   });
   const { form } = entry;
   useEffect(() => {
-    if (form.dirty && !done.current) writeDraft(key, { values: form.values, title, href: here() });
-  }, [key, title, form.dirty, form.values]);
+    if (!form.dirty || done.current) return;
+    writeDraft(key, { values: form.values, title, href: here(), ...(found?.again ? { again: found.again } : {}) });
+  }, [key, title, form.dirty, form.values, found]);
   const isKept = form.dirty || found !== null;
   return {
     ...entry,
@@ -96,13 +98,17 @@ function mergedDraft<Draft extends FormikValues>(start: Draft, { values }: Store
   return { ...start, ...Object.fromEntries(known.map((key) => [key, values[key]])) };
 }
 
-function useOnce() {
-  const ids = useRef(new Map<string, string>());
+function useOnce(again: StoredDraft['again'] | null) {
+  const ids = useRef(new Map<string, string>(again?.ids ?? []));
   const idOf: IdOf = (what) => {
     const known = ids.current.get(what) ?? newId();
     ids.current.set(what, known);
     return known;
   };
-  // The same content keeps its number; once it was changed it is another entry.
-  return { idOf, entryIdOf: (made: EntryContent) => idOf(`entry ${JSON.stringify(made)}`) };
+  return {
+    idOf,
+    // The same content keeps its number; once it was changed it is another entry. One that waits keeps it all the same.
+    entryIdOf: (made: EntryContent) => again?.entryId ?? idOf(`entry ${JSON.stringify(made)}`),
+    all: () => [...ids.current].filter(([what]) => !what.startsWith('entry ')),
+  };
 }

@@ -1,4 +1,3 @@
-import { useQueryClient } from '@tanstack/react-query';
 import { launchCameraAsync, launchImageLibraryAsync } from 'expo-image-picker';
 import { useState } from 'react';
 import { StyleSheet, View } from 'react-native';
@@ -9,18 +8,15 @@ import { Notice } from '@/components/ui/Notice';
 import { PhotoTile } from '@/components/ui/PhotoTile';
 import { Screen } from '@/components/ui/Screen';
 import { Text } from '@/components/ui/Text';
-import { newId } from '@/features/entries';
+import { newId, useRecord } from '@/features/entries';
 import { useLeave } from '@/features/entries/useLeave';
-import { useRoom } from '@/hooks/useRoom';
 import type { PhotosOf } from './queries';
-import { sendPhoto } from './sendPhoto';
 
-type Chosen = { key: string; entryId: string; file: File; uri: string; share: number | null; trouble: string | null };
+type Chosen = { key: string; entryId: string; file: File; uri: string; trouble: string | null };
 
-/** Several photos at once, each sent by itself: what failed is sent again with one tap. */
+/** Several photos at once, each a record of its own: what was refused is sent again with one tap. */
 export function PhotoForm({ of, subtitle }: { of: PhotosOf; subtitle: string }) {
-  const room = useRoom();
-  const cache = useQueryClient();
+  const record = useRecord();
   const leave = useLeave();
   const [photos, setPhotos] = useState<Chosen[]>([]);
   const [caption, setCaption] = useState('');
@@ -36,7 +32,7 @@ export function PhotoForm({ of, subtitle }: { of: PhotosOf; subtitle: string }) 
     };
     const picked = await (from === 'camera' ? launchCameraAsync(options) : launchImageLibraryAsync(options));
     const added = (picked.assets ?? []).flatMap(({ file, uri }) =>
-      file ? [{ key: newId(), entryId: newId(), file, uri, share: null, trouble: null }] : [],
+      file ? [{ key: newId(), entryId: newId(), file, uri, trouble: null }] : [],
     );
     setPhotos((all) => [...all, ...added]);
   };
@@ -51,21 +47,15 @@ export function PhotoForm({ of, subtitle }: { of: PhotosOf; subtitle: string }) 
         takenOn: null,
         caption: caption.trim() || null,
       };
-      change(key, { share: 0, trouble: null });
+      change(key, { trouble: null });
       try {
-        await sendPhoto(
-          room.id,
-          { id: entryId, madeAt: new Date().toISOString(), dependsOn: [], content },
-          file,
-          (share) => change(key, { share }),
-        );
+        await record(content, { id: entryId, picture: file });
         setPhotos((all) => all.filter((one) => one.key !== key));
       } catch (error) {
         failed = true;
-        change(key, { share: null, trouble: error instanceof Error ? error.message : 'Not sent' });
+        change(key, { trouble: error instanceof Error ? error.message : 'Not sent' });
       }
     }
-    await cache.invalidateQueries({ queryKey: [room.id] });
     setBusy(false);
     if (!failed) leave();
   };
@@ -94,10 +84,9 @@ export function PhotoForm({ of, subtitle }: { of: PhotosOf; subtitle: string }) 
           <Button icon="photo" label="Take a photo" onPress={() => void choose('camera')} />
           <Button icon="plus" label="Choose photos" onPress={() => void choose('library')} />
         </View>
-        {photos.map(({ key, uri, share, trouble, file }) => (
+        {photos.map(({ key, uri, trouble, file }) => (
           <View key={key} style={{ gap: space[2] }}>
             <PhotoTile uri={uri} alt={file.name} aspect={1.5} waiting />
-            {share === null ? null : <Text size="small" tone="soft">{`Sending, ${Math.round(share * 100)} %`}</Text>}
             {trouble ? <Notice tone="act" alert words={trouble} /> : null}
             {busy ? null : (
               <Button

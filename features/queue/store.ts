@@ -47,6 +47,7 @@ export const deviceStore: WaitingStore = {
   remove: async (place) => (await shelf()).delete('waiting', place),
   clear: async (accountId) => {
     const db = await shelf();
-    for (const place of await db.getAllKeysFromIndex('waiting', 'account', accountId)) await db.delete('waiting', place);
+    for (const place of await db.getAllKeysFromIndex('waiting', 'account', accountId))
+      await db.delete('waiting', place);
   },
 };

@@ -1,5 +1,5 @@
-import type { Fields, Reason } from '@/shared/refusal';
 import type { EntryContent } from '@/shared/record/kinds';
+import type { Fields, Reason } from '@/shared/refusal';
 
 /** A picture that goes with its entry; the bytes themselves, since a file handle does not outlive the page. */
 export type KeptPicture = { name: string; type: string; bytes: ArrayBuffer };

@@ -50,7 +50,7 @@ export const holdKinds: Pick<KindRules, Kinds> = {
   holdCheck: {
     async store(scope, { holdId, onDay, seen, note }, { entryId }) {
       const { db, roomId, actorId, now } = scope;
-      const hold = await openHold(scope, holdId, onDay);
+      const hold = await openHold(scope, holdId, onDay, 'before');
       await db
         .insertInto('holdCheck')
         .values({ roomId, id: newId(now), holdId, onDay, seen, note, actorId, entryId })

@@ -6,11 +6,15 @@ import type { Scope } from '../scope';
 import { clashOf } from './clash';
 import { oneHold } from './holds';
 
-/** A hold that goes on, for what is recorded about it on a day. */
-export async function openHold(scope: Scope, holdId: string, onDay: string) {
+/**
+ * A hold that goes on, for what is recorded about it on a day. `ended: 'before'` lets what was seen before its end arrive
+ * after it, as from a phone that had no signal.
+ */
+export async function openHold(scope: Scope, holdId: string, onDay: string, ended: 'never' | 'before' = 'never') {
   await mustBeOurs(scope, 'hold', holdId, 'holdId', 'Choose a hold');
   const hold = await oneHold(scope, holdId);
-  if (hold.outcome && hold.endedOn) {
+  const late = hold.endedOn !== null && !(ended === 'before' && onDay <= hold.endedOn);
+  if (hold.outcome && hold.endedOn && late) {
     throw new Refusal(
       'conflict',
       `This hold has ended: ${OUTCOME_WORDS[hold.outcome].toLowerCase()} ${dayWords(hold.endedOn, scope.today)}`,
