@@ -86,10 +86,10 @@ function TankForm({ title, start, save }: FormProps) {
   const side = units.length === 'in' ? 'in' : 'cm';
   const volume = { L: 'L', usGal: 'US gal', impGal: 'imp gal' }[units.volume];
   return (
-    <Form form={form} notice={notice} label={title}>
+    <Form form={form} notice={notice} label={title} page>
       <Screen
         title={title}
-        close={{ label: 'Close', onPress: () => router.back() }}
+        close={{ label: `Close ${title}`, onPress: () => router.back() }}
         dock={<SubmitButton label="Save tank" />}
         low
         measure
