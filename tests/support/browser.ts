@@ -53,19 +53,18 @@ async function waitFor(ready: () => Promise<boolean>, log: string[]): Promise<vo
   throw new Error(`The product did not start:\n${log.join('')}`);
 }
 
+export const BROWSER_ARGS = [
+  '--no-sandbox',
+  '--disable-gpu',
+  '--disable-quic',
+  '--no-first-run',
+  '--disable-background-networking',
+  '--disable-component-update',
+  '--disable-sync',
+];
+
 export function openBrowser(): Promise<Browser> {
-  return chromium.launch({
-    executablePath: process.env['CHROMIUM'] ?? '/usr/bin/chromium',
-    args: [
-      '--no-sandbox',
-      '--disable-gpu',
-      '--disable-quic',
-      '--no-first-run',
-      '--disable-background-networking',
-      '--disable-component-update',
-      '--disable-sync',
-    ],
-  });
+  return chromium.launch({ executablePath: process.env['CHROMIUM'] ?? '/usr/bin/chromium', args: BROWSER_ARGS });
 }
 
 export const PHONE = { width: 390, height: 844 };
@@ -86,7 +85,7 @@ export async function visitorAt(
     acceptDownloads: true,
   });
   const page = await context.newPage();
-  page.setDefaultTimeout(20_000);
+  page.setDefaultTimeout(10_000);
   const violations: string[] = [];
   const broken: string[] = [];
   await page.exposeFunction('tellViolation', (text: string) => violations.push(text));

@@ -85,7 +85,7 @@ export async function testApp(changes: Partial<Config> = {}, log?: House['log'])
   };
 }
 
-function personAt(origin: string): Person {
+export function personAt(origin: string): Person {
   const person: Person = {
     cookie: '',
     async raw(method, path, request = {}) {
