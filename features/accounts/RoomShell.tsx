@@ -88,7 +88,7 @@ function Frame({ recordSheet, waiting, children }: Omit<Props, 'roomId'>) {
       }
       saved={saved}
       {...(counted ? { onSaved, savedOpen: showWaiting } : {})}
-      under={counted && showWaiting && !wide && !bare ? waiting : null}
+      under={counted && showWaiting && !wide && !bare && sub !== 'waiting' ? waiting : null}
       person={`${room.accountName}, ${ROLE_WORDS[room.role].name.toLowerCase()}`}
       onPerson={() => router.push(`/r/${room.id}/settings`)}
       place={`${room.name} · ${time}`}

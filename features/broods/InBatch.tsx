@@ -6,6 +6,7 @@ import { ErrorState } from '@/components/ui/ErrorState';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
 import { TankChoice } from '@/features/entries/TankChoice';
+import { useLast } from '@/features/entries/useLast';
 import { useLeave } from '@/features/entries/useLeave';
 import type { BatchTold } from '@/shared/broods/contract';
 import { type BatchesOf, batchWords, useBatches } from './useBatches';
@@ -23,12 +24,12 @@ export function InBatch({ title, form, of, children }: Props) {
   const leave = useLeave();
   const { batches, error } = useBatches(of);
   const [chosen, setChosen] = useState<string | null>(null);
+  const only = useLast(batches?.length === 1 ? batches[0] : batches?.find(({ id }) => id === chosen));
   if (!of.tank && !of.brood && !of.batch) {
     const suits = ({ residents }: { residents: { thing: string }[] }) =>
       residents.some(({ thing }) => thing === 'batch');
     return <TankChoice title={title} form={form} suits={suits} onPick={(tank) => router.setParams({ tank })} />;
   }
-  const only = batches?.length === 1 ? batches[0] : batches?.find(({ id }) => id === chosen);
   if (only) return children(only);
   return (
     <Screen

@@ -29,6 +29,8 @@ const placeOf = (key: string) => (key === WHO ? key : `${whose}|${key}`);
 export const { persisterFn: keptAnswers } = experimental_createQueryPersister({
   prefix: 'kinwater',
   maxAge: KEPT_MS,
+  // What was kept may be from before a record of a moment ago: it is shown at once, and always asked for again.
+  refetchOnRestore: 'always',
   buster: build(),
   filters: { predicate: ({ queryKey: [first] }) => first === 'me' || (typeof first === 'string' && isId(first)) },
   storage: {
@@ -37,10 +39,11 @@ export const { persisterFn: keptAnswers } = experimental_createQueryPersister({
       if (key !== WHO || !text) return text;
       const accountId = accountIn(text);
       if (accountId) keepFor(accountId);
-      // That nobody was signed in is no news: somebody may have been since.
-      return accountId ? text : undefined;
+      return text;
     },
-    setItem: (key, text) => answersStore.put(placeOf(key), text),
+    setItem: async (key, text) => {
+      if (key !== WHO || accountIn(text)) await answersStore.put(placeOf(key), text);
+    },
     removeItem: (key) => answersStore.remove(placeOf(key)),
   },
 });

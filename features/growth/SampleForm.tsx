@@ -16,12 +16,14 @@ import { Text } from '@/components/ui/Text';
 import { newId, ToldContext, useRecord } from '@/features/entries';
 import { useLeave } from '@/features/entries/useLeave';
 import { useRoom } from '@/hooks/useRoom';
+import type { Day } from '@/shared/days';
 import { METHOD_WORDS, METHODS } from '@/shared/growth/entries';
 import { isOdd, sampleStats } from '@/shared/growth/sampleStats';
 import { Refusal } from '@/shared/refusal';
 import { TenthsMm } from '@/shared/units';
 import { pastedLengths } from './pastedLengths';
 import { type SamplesOf, samplesQuery } from './queries';
+import { SampleDay } from './SampleDay';
 import { useKeptSample } from './useKeptSample';
 
 type Props = { of: SamplesOf; subtitle: string };
@@ -49,7 +51,8 @@ function Taking({ of, subtitle, measured, method: usual }: TakingProps) {
   const [measure, setMeasure] = useState<'total' | 'standard'>(measured ?? 'total');
   const [method, setMethod] = useState(usual);
   const [pasting, setPasting] = useState(false);
-  const { save, busy, trouble } = useSave({ of, measure, method, lengths, done: kept.drop });
+  const [onDay, setOnDay] = useState(today);
+  const { save, busy, trouble } = useSave({ of, onDay, measure, method, lengths, done: kept.drop });
   const leave = useLeave();
   const { tell } = use(ToldContext);
   const stats = lengths.length > 0 ? sampleStats(lengths) : null;
@@ -110,6 +113,7 @@ function Taking({ of, subtitle, measured, method: usual }: TakingProps) {
       }
     >
       <View style={{ gap: space[4] }}>
+        <SampleDay day={onDay} onDay={setOnDay} />
         <Segmented
           label="Measured as"
           value={measure}
@@ -156,23 +160,14 @@ function Taking({ of, subtitle, measured, method: usual }: TakingProps) {
         ) : null}
         {trouble ? <Notice tone="act" alert words={trouble} /> : null}
         {pasting ? (
-          <Paste today={today} take={(more) => setLengths([...lengths, ...more])} save={save} count={lengths.length} />
+          <Paste take={(more) => setLengths([...lengths, ...more])} save={save} count={lengths.length} />
         ) : null}
       </View>
     </Screen>
   );
 }
 
-function Paste({
-  take,
-  save,
-  count,
-}: {
-  today: string;
-  take: (lengths: number[]) => void;
-  save: () => void;
-  count: number;
-}) {
+function Paste({ take, save, count }: { take: (lengths: number[]) => void; save: () => void; count: number }) {
   const [text, setText] = useState('');
   const { lengths, wrong } = pastedLengths(text);
   return (
@@ -202,14 +197,14 @@ function Paste({
 
 type Saving = {
   of: SamplesOf;
+  onDay: Day;
   measure: 'total' | 'standard';
   method: (typeof METHODS)[number];
   lengths: number[];
   done: () => void;
 };
 
-function useSave({ of, measure, method, lengths, done }: Saving) {
-  const { today } = useRoom();
+function useSave({ of, onDay, measure, method, lengths, done }: Saving) {
   const record = useRecord();
   const leave = useLeave();
   const [busy, setBusy] = useState(false);
@@ -223,7 +218,7 @@ function useSave({ of, measure, method, lengths, done }: Saving) {
           kind: 'lengthSampled',
           sampleId: ids.sample,
           of: { thing: of.thing, id: of.thingId },
-          onDay: today,
+          onDay,
           measure,
           method,
           note: null,

@@ -52,7 +52,8 @@ export function BeginFields({ seen, tank, colonyId, proposal, onDays }: Props) {
   };
   const around = (holderId: string): Around => {
     const strain = strainOf(holderId);
-    const strips = careOf(strain?.clock ?? null)?.kind === 'strips';
+    // Without a signal the species may not be known here: then the keeper knows it.
+    const strips = strain === null || careOf(strain.clock)?.kind === 'strips';
     return { seen, tank, colonyId, proposal, strips, heHolds: strain?.mode === 'paternalMouthbrooder' };
   };
   const words = modeWords(strainOf('')?.mode ?? null);

@@ -6,6 +6,7 @@ import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorState } from '@/components/ui/ErrorState';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
+import { useLast } from '@/features/entries/useLast';
 import { useLeave } from '@/features/entries/useLeave';
 import { useRoom } from '@/hooks/useRoom';
 import type { HoldRow } from '@/shared/holds/contract';
@@ -30,6 +31,12 @@ export function WithHold({ title, form, holdId, tankId, suits = () => true, chil
   const leave = useLeave();
   const { data, error, refetch } = useQuery(openHoldsQuery(room.id));
   const close = { label: `Close ${title}`, onPress: () => leave() };
+  const open = data?.filter(suits) ?? [];
+  const inTank = open.filter((hold) => hold.tank.id === tankId);
+  const found = holdId ? open.find(({ id }) => id === holdId) : inTank.length === 1 ? inTank[0] : undefined;
+  const last = useLast(found);
+  const chosen = holdId && last?.id !== holdId ? found : last;
+  if (chosen) return children(chosen);
   if (!data) {
     return (
       <Screen title={title} close={close} low measure>
@@ -41,10 +48,6 @@ export function WithHold({ title, form, holdId, tankId, suits = () => true, chil
       </Screen>
     );
   }
-  const open = data.filter(suits);
-  const inTank = open.filter((hold) => hold.tank.id === tankId);
-  const chosen = holdId ? open.find(({ id }) => id === holdId) : inTank.length === 1 ? inTank[0] : undefined;
-  if (chosen) return children(chosen);
   if (holdId) return <Gone title={title} close={close} holdId={holdId} />;
   const here = inTank.length > 0 ? inTank : open;
   return (

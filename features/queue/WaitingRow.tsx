@@ -1,3 +1,4 @@
+import type { Href } from 'expo-router';
 import { StyleSheet, View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -23,7 +24,7 @@ type Props = {
   /** Sends it as it is: after a refusal, or instead of changing it. */
   onAsItIs: () => void;
   /** Where a conflict is settled; null: there is none. */
-  settleHref: string | null;
+  settleHref: Href | null;
 };
 
 /** One record that waits here: when it was made, what it says, what can be done with it. */
@@ -95,7 +96,8 @@ function stateWord({ state }: Waiting, sending: boolean): string | undefined {
 }
 
 function troubleWords({ trouble }: Waiting): string {
-  const [field] = Object.values(trouble?.fields ?? {});
+  // A conflict's message says it all; of a refusal the field says what to change.
+  const [field] = trouble?.reason === 'invalid' ? Object.values(trouble.fields) : [];
   return field && field !== trouble?.message ? `${trouble?.message}. ${field}.` : `${trouble?.message}`;
 }
 

@@ -1,6 +1,7 @@
-import { mkdtempSync, rmSync } from 'node:fs';
+import { cpSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { brotliCompressSync, gzipSync } from 'node:zlib';
 import { type BrowserContext, chromium, type Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { readFish } from '@/shared/fish/contract';
@@ -187,11 +188,8 @@ test('two records of one mouth stand side by side; theirs is kept, and what was 
 
   await context.setOffline(true);
   await open(page, `${home}/record/holding?tank=${colony.tankId}`, /Holding seen/);
-  await page.getByRole('radio', { name: new RegExp(fish.code ?? '') }).click();
-  await page
-    .getByRole('radio', { name: /3 days ago|A few days/ })
-    .first()
-    .click();
+  await page.getByRole('radio', { name: (fish.code ?? '').slice(-2) }).click();
+  await page.getByText('A week', { exact: true }).click();
   await press(page, /^Save hold/);
   await page
     .getByText(/Waits here for a signal/)
@@ -220,4 +218,88 @@ test('two records of one mouth stand side by side; theirs is kept, and what was 
   expect(checks.map(({ seen }) => seen)).toEqual(['holding', 'holding']);
   expect(checks.some(({ note }) => note?.startsWith('I saw her not holding'))).toBe(true);
   await context.close();
+});
+
+test('a page that was never opened says so without a signal, one that was opens to what was last seen', async () => {
+  const context = await phone('reader');
+  const room = await roomOn(context, { name: 'Liv Hauge', email: 'liv@mail.example', room: 'Hauge Fishroom' });
+  const { home, colony, brood } = room;
+  const page = await pageOf(context);
+  await open(page, `${home}/broods/${brood.broodId}`, /MOKA-26A/);
+  await settled(page);
+  await context.setOffline(true);
+  await open(page, `${home}/broods/${brood.broodId}`, /MOKA-26A/);
+  await page.getByText('No signal', { exact: true }).waitFor();
+  await page.goto(`${home}/colonies/${colony.colonyId}`);
+  await page.getByText(/not on this device yet/).waitFor();
+  await context.close();
+});
+
+test('after signing out nothing of the person is left on the device, and going back shows nothing', async () => {
+  const context = await phone('leaver');
+  const room = await roomOn(context, { name: 'Kari Moen', email: 'kari@mail.example', room: 'Moen Fishroom' });
+  const page = await pageOf(context);
+  await page.goto(room.home);
+  await settled(page);
+  expect(await keptOn(page)).not.toEqual([]);
+  await open(page, `${room.home}/settings`, 'Settings');
+  await press(page, 'Sign out');
+  await page.getByRole('button', { name: 'Sign in' }).waitFor();
+  expect(await keptOn(page)).toEqual([]);
+  await page.goBack();
+  await page.waitForTimeout(1500);
+  expect(await page.getByText('MOKA').count()).toBe(0);
+  await context.close();
+});
+
+/** Every row of every database of the browser, and what its plain storage holds; the theme is the device's own. */
+const keptOn = (page: Page): Promise<string[]> =>
+  page.evaluate(async () => {
+    const rows: string[] = Object.keys(localStorage).filter((key) => key !== 'kinwater.theme');
+    for (const { name } of await indexedDB.databases()) {
+      const db = await new Promise<IDBDatabase>((done, failed) => {
+        const asked = indexedDB.open(name ?? '');
+        asked.onsuccess = () => done(asked.result);
+        asked.onerror = () => failed(asked.error);
+      });
+      for (const store of db.objectStoreNames) {
+        const keys = await new Promise<IDBValidKey[]>((done) => {
+          const asked = db.transaction(store).objectStore(store).getAllKeys();
+          asked.onsuccess = () => done(asked.result);
+        });
+        rows.push(...keys.map((key) => `${name} ${String(key)}`));
+      }
+      db.close();
+    }
+    return rows;
+  });
+
+test('a new version waits until it is taken, and pages that are open keep working until then', async () => {
+  const web = join(folder, 'web');
+  cpSync('dist', web, { recursive: true });
+  const own = await startProduct({ WEB_FOLDER: web });
+  const context = await phone('updater');
+  const page = await pageOf(context);
+  await page.goto(`${own.origin}/sign-in`);
+  await page.evaluate(async () => {
+    await navigator.serviceWorker.ready;
+  });
+  await page.reload();
+  for (const [file, from, to] of [
+    ['index.html', '<html ', '<html data-build="next" '],
+    ['sw.js', "const VERSION = '", "const VERSION = 'next-"],
+  ] as const) {
+    const next = readFileSync(join(web, file), 'utf8').replace(from, to);
+    writeFileSync(join(web, file), next);
+    writeFileSync(join(web, `${file}.br`), brotliCompressSync(next));
+    writeFileSync(join(web, `${file}.gz`), gzipSync(next));
+  }
+  const build = () => page.evaluate(() => document.documentElement.dataset['build'] ?? 'first');
+  await page.reload();
+  await page.getByText('A new version of Kinwater is ready').waitFor();
+  expect(await build()).toBe('first');
+  await page.getByRole('button', { name: 'Use it' }).click();
+  await expect.poll(build).toBe('next');
+  await context.close();
+  await own.stop();
 });

@@ -80,6 +80,7 @@ export async function visitorAt(
 ): Promise<Visitor> {
   const context = await browser.newContext({
     viewport,
+    locale: 'en-GB',
     colorScheme: theme,
     reducedMotion: 'reduce',
     acceptDownloads: true,
