@@ -26,6 +26,35 @@ afterAll(async () => {
 const around = (mean: number): string =>
   [-3, -2.5, -2, -1.5, -1, -0.5, 0, 0, 0, 0.5, 1, 1.5, 2, 2.5, 3].map((off) => mean + off).join(' ');
 
+const MONTHS = 'Jan Feb Mar Apr May Jun Jul Aug Sep Oct Nov Dec'.split(' ');
+
+/**
+ * What the sheet must say. F of the young of full sibs of unrelated founders is 1/4 (Falconer & Mackay, Introduction to
+ * Quantitative Genetics, from memory); both wild grandparents known: two full generations, F2; 36 free-swimming less 2
+ * dead are 34, 94 %; stripped 23 days after the spawn's day, which is day 1; the means of the last sample 35 mm.
+ */
+function worked(nowMs: number): string[] {
+  const day = (ago: number): string => {
+    const on = new Date(nowMs - ago * 86_400_000);
+    return `${on.getUTCDate()} ${MONTHS[on.getUTCMonth()]} ${on.getUTCFullYear()}`;
+  };
+  return [
+    'Tropheus moorii Chaitika, strain MOCH',
+    'Fish 12, not sexed, of brood',
+    'Founders wild caught',
+    `Spawned ${day(200)}, 6 months old`,
+    `Stripped ${day(177)}, day 24 of the hold`,
+    'Generation F2',
+    'Inbreeding F = 0.250',
+    'Pedigree known equal to 2.0 full generations',
+    'Raised 34 of 36, 94 %',
+    'Photos 2 recorded',
+    'F1 · sire MOCH-A01 wild, MOCH MOCH-A03 wild, MOCH',
+    'F1 · dam MOCH-A01 wild, MOCH MOCH-A03 wild, MOCH',
+    '3.5 cm 3 samples of 15 fish,',
+  ];
+}
+
 async function addTank(page: Page, room: string, code: string, litres: string, purpose?: string): Promise<void> {
   await page.goto(`${room}/tanks/new`);
   await field(page, 'Code, as painted on the glass').fill(code);
@@ -217,7 +246,23 @@ describe.each([
       .flatMap(({ lines }) => lines.map(({ text }) => text))
       .join(' ')
       .replace(/\s+/g, ' ');
-    console.log(said);
+    for (const figure of worked(await page.evaluate(() => Date.now()))) expect(said).toContain(figure);
+
+    // The paper's own address, opened by somebody who is not signed in: the signature is verified in that browser.
+    const token = /sheet\/([\w-]{22})/.exec(said)?.[1] ?? '';
+    const reader = await visitorAt(browser, viewport);
+    await reader.page.goto(`${product.origin}/sheet/${token}`);
+    await reader.page
+      .getByText(/^Valid/)
+      .first()
+      .waitFor();
+    await reader.page
+      .getByText(/0\.250/)
+      .first()
+      .waitFor();
+    expect(reader.violations).toEqual([]);
+    await reader.context.close();
+
     expect(violations).toEqual([]);
     expect(broken).toEqual([]);
     await context.close();
