@@ -27,6 +27,8 @@ export type Config = {
   seedDemo: boolean;
   logLevel: 'silent' | 'error' | 'warn' | 'info' | 'debug';
   roomQuotaBytes: number;
+  /** Whether keys of other installations may be fetched by http and from inner addresses: never in production. */
+  innerKeys: boolean;
   /** The work of a password's hash, as the power of two that scrypt calls N. */
   passwordCost: number;
   /** Names a point at which the process kills itself, for the crash tests; never in production. */
@@ -66,6 +68,7 @@ export function readConfig(env: NodeJS.ProcessEnv = process.env): Config {
     seedDemo: !production && env['DEMO'] !== '0',
     logLevel: logLevel(env['LOG_LEVEL']),
     roomQuotaBytes: wholeNumber(env, 'ROOM_QUOTA_MB', 2000) * 1_000_000,
+    innerKeys: !production && env['INNER_KEYS'] === '1',
     passwordCost: 17,
     crashAt: production ? null : (env['CRASH_AT'] ?? null),
   };

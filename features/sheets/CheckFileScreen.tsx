@@ -9,17 +9,21 @@ import { Loading } from '@/components/ui/Loading';
 import { Notice } from '@/components/ui/Notice';
 import { Screen } from '@/components/ui/Screen';
 import { Text } from '@/components/ui/Text';
-import { parsed, readKeySet, readSheetFile } from '@/shared/sheets/sheetFile';
+import { formatDate } from '@/shared/days';
+import type { SheetVerdict } from '@/shared/sheets/checkSheet';
+import { type Recalled, readSheetFile } from '@/shared/sheets/sheetFile';
 import { VerdictNotice } from './CheckScreen';
-import { keysFor } from './keysFor';
+import { keysFor, pastedKeys } from './keysFor';
 import { useDrop } from './useDrop';
-import { verifySheet } from './verifySheet';
+import { digestOf, verifySheet } from './verifySheet';
 
 const SheetPaper = lazy(() => import('./SheetPaper').then((module) => ({ default: module.SheetPaper })));
 
 const MOST_BYTES = 24_000_000;
 
-/** A sheet's file, dropped or chosen, from here or from anywhere: checked without leaving this browser. */
+type FileChecked = { verdict: SheetVerdict; recalled: Recalled | null };
+
+/** A sheet's file, dropped or chosen, from here or from anywhere: checked in this browser by keys that our server fetches. */
 export function CheckFileScreen() {
   const theme = useTheme();
   const [keys, setKeys] = useState('');
@@ -38,7 +42,8 @@ export function CheckFileScreen() {
         <View ref={zone} style={[styles.zone, { borderColor: theme.control }]}>
           <Text strong>Drop the sheet’s file here</Text>
           <Text size="small" tone="soft" align="center">
-            Its name ends in .kinwater.json. It is read in this browser and sent nowhere.
+            Its name ends in .kinwater.json. It is read in this browser; our server is only asked for the fishroom’s
+            keys.
           </Text>
           <Button label="Choose the file" icon="upload" onPress={choose} />
         </View>
@@ -60,10 +65,15 @@ export function CheckFileScreen() {
         </View>
         {check.isPending ? <Loading label="Checking the sheet" rows={2} /> : null}
         {check.error ? <Notice tone="look" alert words={check.error.message} /> : null}
-        {check.data ? <VerdictNotice verdict={check.data} /> : null}
-        {check.data?.state === 'valid' ? (
+        {check.data?.recalled ? <RecalledNotice {...check.data.recalled} /> : null}
+        {check.data ? <VerdictNotice verdict={check.data.verdict} /> : null}
+        {check.data?.verdict.state === 'valid' ? (
           <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
-            <SheetPaper content={check.data.content} paper="a4" checkUrl={check.data.content.fishroom.address} />
+            <SheetPaper
+              content={check.data.verdict.content}
+              paper="a4"
+              checkUrl={check.data.verdict.content.fishroom.address}
+            />
           </Suspense>
         ) : null}
       </View>
@@ -71,15 +81,22 @@ export function CheckFileScreen() {
   );
 }
 
-async function checkText({ text, pasted }: { text: string; pasted: string }) {
+/** What the fishroom itself says of the sheet since: its signature stands, and it does not count any more. */
+function RecalledNotice({ state, on }: Recalled) {
+  return state === 'withdrawn' ? (
+    <Notice tone="act" alert title={`Withdrawn on ${formatDate(on)}`} words="The fishroom has taken this sheet back." />
+  ) : (
+    <Notice tone="look" title={`Replaced on ${formatDate(on)}`} words="Ask for the sheet that takes its place." />
+  );
+}
+
+async function checkText({ text, pasted }: { text: string; pasted: string }): Promise<FileChecked> {
   const file = readSheetFile(text);
-  if (!file) return { state: 'notASheet', because: 'form' } as const;
-  if (pasted.trim()) {
-    const own = readKeySet(parsed(pasted));
-    if (!own) throw new Error('What you pasted is not a set of keys: it begins with {"keys": […');
-    return verifySheet(file.jws, { keys: own, at: null });
-  }
-  return verifySheet(file.jws, await keysFor(file.keysAt));
+  if (!file) return { verdict: { state: 'notASheet', because: 'form' }, recalled: null };
+  const { found, recalled } = pasted.trim() ? pastedKeys(pasted) : await keysFor(file.keysAt);
+  const verdict = await verifySheet(file.jws, found);
+  const digest = verdict.state === 'valid' ? await digestOf(file.jws) : null;
+  return { verdict, recalled: recalled.find(({ sheet }) => sheet === digest) ?? null };
 }
 
 const styles = StyleSheet.create({

@@ -33,3 +33,9 @@ export async function verifySheet(jws: string, found: FoundKeys): Promise<SheetV
   if (!globalThis.crypto?.subtle) return { state: 'cannotCheck' };
   return checkSheet(jws, found, signatures);
 }
+
+/** SHA-256 of a signed sheet in base64url: the name by which its fishroom publishes that it was taken back. */
+export async function digestOf(jws: string): Promise<string> {
+  const bytes = await crypto.subtle.digest('SHA-256', new TextEncoder().encode(jws));
+  return base64url.encode(new Uint8Array(bytes));
+}

@@ -18,6 +18,7 @@ import type { Scope } from '../scope';
 import { oneStrain } from '../strains';
 import { careRows, readingRows } from '../water';
 import { factsKnown } from './known';
+import { showsPeople } from './people';
 
 export type Subject = { thing: 'fish' | 'brood'; id: string; heads: number };
 type Node = Awaited<ReturnType<typeof lineageNodes>>[number];
@@ -198,16 +199,6 @@ async function claimOf(scope: Scope, strainId: string | null, kinds: string[]): 
     },
     source: citesSource === 'A' || citesSource === 'Y' ? null : citesSource,
   };
-}
-
-/** Whether a sheet names the people that founders came from: a setting of the fishroom, off until the owner turns it on. */
-async function showsPeople({ db, roomId }: Scope): Promise<boolean> {
-  const { settings } = await db
-    .selectFrom('room')
-    .where('id', '=', roomId)
-    .select('settings')
-    .executeTakeFirstOrThrow();
-  return JSON.parse(settings)['sheetsShowPeople'] === true;
 }
 
 const idsOf = (parent: Parentage): string[] =>

@@ -3,7 +3,9 @@ import { isId } from '../../shared/ids';
 import { notFound } from '../../shared/refusal';
 import { SheetContent } from '../../shared/sheets/content';
 import {
+  changeSheetSettings,
   checkSheetPage,
+  fetchKeys,
   issueSheet,
   listKeys,
   listSheets,
@@ -11,13 +13,17 @@ import {
   printCheckedSheet,
   printSheet,
   readSheet,
+  readSheetSettings,
   rotateKey,
   withdrawSheet,
 } from '../../shared/sheets/contract';
-import { sheetFileName } from '../../shared/sheets/sheetFile';
+import { keysAddress, sheetFileName } from '../../shared/sheets/sheetFile';
 import type { Feature } from '../features';
+import { limitOf } from '../http/limitOf';
 import { sheetPdf } from '../print';
-import { keysAddress, publicKeys, rotate } from './keys';
+import { fetchedKeys } from './foreignKeys';
+import { publishedKeys, rotate } from './keys';
+import { setShowsPeople, showsPeople } from './people';
 import {
   byToken,
   checkAddress,
@@ -29,7 +35,6 @@ import {
   storedSheet,
   withdraw,
 } from './sheets';
-import { keySet } from './signing';
 
 export { currentKeyId, openKey } from './keys';
 export { issueInside, sheetRows } from './sheets';
@@ -51,6 +56,8 @@ export const sheets: Feature = {
         .orderBy('createdAt', 'desc')
         .execute(),
     }));
+    serve.read(readSheetSettings, async (scope) => ({ showPeople: await showsPeople(scope) }));
+    serve.write(changeSheetSettings, (scope, { body }) => setShowsPeople(scope, body.showPeople));
     serve.write(rotateKey, async (scope) => ({ id: await rotate(scope) }));
     serve.read(printSheet, async (scope, { params }, { res }) => {
       const { content, token } = await storedSheet(scope, params.sheetId);
@@ -64,6 +71,11 @@ export const sheets: Feature = {
     serve.open(checkSheetPage, async (asked, { params }, { res }) => {
       keepFromSearch(res);
       return publicSheet(asked, params.token);
+    });
+    const fetches = limitOf(30, 15);
+    serve.open(fetchKeys, async (asked, { body }, raw) => {
+      await fetches(raw);
+      return fetchedKeys(asked, body.at);
     });
     serve.open(printCheckedSheet, async (asked, { params }, { res }) => {
       const { content } = await byToken(asked.db, params.token);
@@ -81,9 +93,9 @@ export const sheets: Feature = {
     // Published for anyone, on any site: other installations check our sheets by them.
     app.get('/keys/:file', async (req, res) => {
       const roomId = /^([0-9a-f-]{36})\.json$/.exec(req.params.file)?.[1] ?? '';
-      const keys = isId(roomId) ? await publicKeys({ db: house.db, roomId }) : [];
-      if (keys.length === 0) throw notFound('Those keys');
-      res.set({ 'Cache-Control': 'public, max-age=300', 'Access-Control-Allow-Origin': '*' }).json(keySet(keys));
+      const published = isId(roomId) ? await publishedKeys({ db: house.db, roomId }) : null;
+      if (!published || published.keys.length === 0) throw notFound('Those keys');
+      res.set({ 'Cache-Control': 'public, max-age=300', 'Access-Control-Allow-Origin': '*' }).json(published);
     });
   },
 };

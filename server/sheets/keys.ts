@@ -1,7 +1,8 @@
-import { PublicJwk } from '../../shared/sheets/sheetFile';
+import { createHash } from 'node:crypto';
+import { type KeySet, PublicJwk, type Recalled } from '../../shared/sheets/sheetFile';
 import { audit } from '../db/audit';
 import type { Asked, Scope } from '../scope';
-import { newSheetKey, openSheetKey, type SheetKey } from './signing';
+import { keySet, newSheetKey, openSheetKey, type SheetKey } from './signing';
 
 type Room = Pick<Asked, 'db' | 'house' | 'now'> & { roomId: string };
 
@@ -58,7 +59,7 @@ export async function rotate(scope: Scope): Promise<string> {
 }
 
 /** Every key the fishroom ever had, retired ones too: old sheets stay checkable. */
-export async function publicKeys({ db, roomId }: Pick<Room, 'db' | 'roomId'>): Promise<PublicJwk[]> {
+async function publicKeys({ db, roomId }: Pick<Room, 'db' | 'roomId'>): Promise<PublicJwk[]> {
   const rows = await db
     .selectFrom('roomKey')
     .where('roomId', '=', roomId)
@@ -68,5 +69,23 @@ export async function publicKeys({ db, roomId }: Pick<Room, 'db' | 'roomId'>): P
   return rows.map(({ publicJwk }) => PublicJwk.parse(JSON.parse(publicJwk)));
 }
 
-/** Where the fishroom's keys are published. */
-export const keysAddress = (origin: string, roomId: string): string => `${origin}/keys/${roomId}.json`;
+/** Which sheets no longer count, by digest: published with the keys, so that a file is not taken for valid elsewhere. */
+async function recalledSheets({ db, roomId }: Pick<Room, 'db' | 'roomId'>): Promise<Recalled[]> {
+  const rows = await db
+    .selectFrom('sheet')
+    .where('roomId', '=', roomId)
+    .where(({ eb, or }) => or([eb('withdrawnAt', 'is not', null), eb('replacedAt', 'is not', null)]))
+    .select(['jws', 'withdrawnAt', 'replacedAt'])
+    .orderBy('number')
+    .execute();
+  return rows.map(({ jws, withdrawnAt, replacedAt }) => ({
+    sheet: createHash('sha256').update(jws).digest('base64url'),
+    state: withdrawnAt ? 'withdrawn' : 'replaced',
+    on: (withdrawnAt ?? replacedAt ?? '').slice(0, 10),
+  }));
+}
+
+/** All that the fishroom publishes for whoever checks its sheets. */
+export async function publishedKeys(room: Pick<Room, 'db' | 'roomId'>): Promise<KeySet> {
+  return { ...keySet(await publicKeys(room)), recalled: await recalledSheets(room) };
+}

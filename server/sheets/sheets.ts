@@ -3,14 +3,15 @@ import type * as z from 'zod/mini';
 import { notFound, Refusal } from '../../shared/refusal';
 import { SheetContent } from '../../shared/sheets/content';
 import type { checkSheetPage, readSheet, SheetDraft, SheetRow, withdrawSheet } from '../../shared/sheets/contract';
+import { keysAddress } from '../../shared/sheets/sheetFile';
 import { audit } from '../db/audit';
 import { newId } from '../db/newId';
 import type { Db } from '../db/open';
 import { inTransaction } from '../http/serve';
 import type { Asked, Scope } from '../scope';
 import { composeSheet } from './compose';
-import { currentKeyId, keysAddress, openKey, publicKeys } from './keys';
-import { keySet, type SheetKey, sheetBytes, signSheet } from './signing';
+import { currentKeyId, openKey, publishedKeys } from './keys';
+import { type SheetKey, sheetBytes, signSheet } from './signing';
 
 export const checkAddress = (origin: string, token: string): string => `${origin}/sheet/${token}`;
 
@@ -226,7 +227,7 @@ export async function publicSheet({ db, house }: Asked, token: string): Promise<
   return {
     jws: found.jws,
     keysAt: keysAddress(origin, found.roomId),
-    keys: keySet(await publicKeys({ db, roomId: found.roomId })).keys,
+    keys: (await publishedKeys({ db, roomId: found.roomId })).keys,
     state: row.state,
     at: found.withdrawnAt ?? found.replacedAt,
     because: row.withdrawnBecause,

@@ -98,7 +98,7 @@ export async function signSheet(contentBytes: Uint8Array, { keyId, privateJwk }:
 }
 
 /** The published set: every key the fishroom ever had, retired ones too, so that old sheets stay checkable. Public halves only. */
-export function keySet(publicJwks: readonly PublicJwk[]): KeySet {
+export function keySet(publicJwks: readonly PublicJwk[]): Pick<KeySet, 'keys'> {
   return { keys: publicJwks.map((jwk) => ({ ...PublicJwk.parse(jwk), alg: ALGORITHM, use: 'sig' })) };
 }
 

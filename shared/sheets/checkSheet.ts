@@ -82,7 +82,13 @@ function readContent(value: unknown, keyId: string, keysAt: string | null): Shee
   if (!content.success) return { state: 'notASheet', because: 'content' };
   const { fishroom } = content.data;
   if (fishroom.keyId !== keyId) return { state: 'badSignature', because: 'otherKey' };
-  if (keysAt !== null && hostOf(keysAt) !== hostOf(fishroom.address))
+  if (keysAt !== null && (hostOf(keysAt) !== hostOf(fishroom.address) || isOthersPage(keysAt, fishroom.id)))
     return { state: 'badSignature', because: 'otherAddress' };
   return { state: 'valid', keyId, content: content.data };
+}
+
+/** Of an installation with several fishrooms, each has a page of keys of its own: one does not vouch for another. */
+function isOthersPage(keysAt: string, roomId: string): boolean {
+  const [, named] = /\/keys\/([0-9a-f-]{36})\.json$/.exec(keysAt) ?? [];
+  return named !== undefined && named !== roomId;
 }

@@ -4,6 +4,8 @@ import { endpoint, inRoom } from '../endpoint';
 import { Id } from '../ids';
 import { line } from '../shapes';
 import { SheetContent } from './content';
+import { PublicJwk, Recalled } from './sheetFile';
+import { Address } from './wording';
 
 const Token = z.string('A sheet’s address is needed').check(z.regex(/^[\w-]{22}$/, 'That is not a sheet’s address'));
 
@@ -116,6 +118,28 @@ export const rotateKey = endpoint({
   output: z.strictObject({ id: z.string() }),
 });
 
+const SheetSettings = z.strictObject({
+  /** Whether sheets name the people and fishrooms that founders and ancestors came from. */
+  showPeople: z.boolean('Say yes or no'),
+});
+
+export const readSheetSettings = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/sheet-settings',
+  needs: 'key:manage',
+  params: inRoom({}),
+  output: SheetSettings,
+});
+
+export const changeSheetSettings = endpoint({
+  method: 'PUT',
+  path: '/api/rooms/:roomId/sheet-settings',
+  needs: 'key:manage',
+  params: inRoom({}),
+  body: SheetSettings,
+  output: SheetSettings,
+});
+
 /** Anyone with the address: the sheet, what became of it, and where its keys are. The page verifies the signature itself. */
 export const checkSheetPage = endpoint({
   method: 'GET',
@@ -141,4 +165,16 @@ export const printCheckedSheet = endpoint({
   kind: 'file',
   params: z.strictObject({ token: Token, paper: z.enum(['a4', 'letter']) }),
   output: z.unknown(),
+});
+
+/**
+ * The published keys of a fishroom of any installation, fetched by the server since a page may only speak to its own. For
+ * anyone who checks a file; what is not a key is not handed on.
+ */
+export const fetchKeys = endpoint({
+  method: 'POST',
+  path: '/api/sheet-keys',
+  needs: 'public',
+  body: z.strictObject({ at: Address }),
+  output: z.strictObject({ keys: z.array(PublicJwk), recalled: z.array(Recalled) }),
 });

@@ -1,4 +1,5 @@
 import * as z from 'zod/mini';
+import { DayText } from '../days';
 import { Address, KeyId } from './wording';
 
 /** Longest signed sheet that is read, in characters: 20 000 ancestors take about 10 million. */
@@ -48,8 +49,22 @@ export const PublicJwk = z.object({
 });
 export type PublicJwk = z.output<typeof PublicJwk>;
 
-/** A fishroom's published keys, as JWK set (RFC 7517, section 5). */
-export type KeySet = { keys: (PublicJwk & { alg: 'EdDSA'; use: 'sig' })[] };
+/** A sheet that was taken back, named by the SHA-256 of its signed text so that the list gives nothing else away. */
+export const Recalled = z.strictObject({
+  sheet: z.string().check(z.regex(/^[A-Za-z0-9_-]{43}$/, 'That is not a digest')),
+  state: z.enum(['replaced', 'withdrawn']),
+  on: DayText,
+});
+export type Recalled = z.output<typeof Recalled>;
+
+/**
+ * A fishroom's published keys, as JWK set (RFC 7517, section 5, which has readers pass over members they do not know), and
+ * which of its sheets no longer count.
+ */
+export type KeySet = { keys: (PublicJwk & { alg: 'EdDSA'; use: 'sig' })[]; recalled: Recalled[] };
+
+/** Where an installation publishes the keys of a fishroom. */
+export const keysAddress = (origin: string, roomId: string): string => `${origin}/keys/${roomId}.json`;
 
 /** The keys of a published set that can sign sheets; keys of other kinds are passed over. Null when it is no set. */
 export function readKeySet(value: unknown): PublicJwk[] | null {
@@ -57,6 +72,16 @@ export function readKeySet(value: unknown): PublicJwk[] | null {
   if (!set.success) return null;
   return set.data.keys.flatMap((key) => {
     const known = PublicJwk.safeParse(key);
+    return known.success ? [known.data] : [];
+  });
+}
+
+/** What a published set says of sheets that were taken back; lines of another shape are passed over. */
+export function readRecalled(value: unknown): Recalled[] {
+  const set = z.object({ recalled: z.array(z.unknown()).check(z.maxLength(20_000)) }).safeParse(value);
+  if (!set.success) return [];
+  return set.data.recalled.flatMap((line) => {
+    const known = Recalled.safeParse(line);
     return known.success ? [known.data] : [];
   });
 }

@@ -3,6 +3,7 @@ import { verifySheet } from '@/server/sheets';
 import { readPedigree } from '@/shared/lineage/contract';
 import { kinship } from '@/shared/lineage/kinship';
 import {
+  changeSheetSettings,
   checkSheetPage,
   issueSheet,
   listSheets,
@@ -10,6 +11,7 @@ import {
   printCheckedSheet,
   printSheet,
   readSheet,
+  readSheetSettings,
   rotateKey,
   withdrawSheet,
 } from '@/shared/sheets/contract';
@@ -75,7 +77,7 @@ describe('a sheet', () => {
     const verdict = await verifySheet(page.jws, { keys: keys ?? [], at: page.keysAt });
     expect(verdict.state).toBe('valid');
     const published = await app.person().raw('GET', new URL(page.keysAt).pathname);
-    expect(await published.json()).toEqual({ keys: page.keys });
+    expect(await published.json()).toEqual({ keys: page.keys, recalled: [] });
     const tampered = page.jws.replace(/\.(\w)/, (_all, letter: string) => `.${letter === 'A' ? 'B' : 'A'}`);
     expect((await verifySheet(tampered, { keys: keys ?? [], at: page.keysAt })).state).not.toBe('valid');
   });
@@ -158,6 +160,54 @@ describe('a sheet', () => {
       body: { thing: 'brood', subjectId: brood.broodId, heads: 31, replaces: null, because: null },
     });
     expect([many.status, many.body.error?.fields]).toEqual([422, { heads: 'At most 30' }]);
+  });
+});
+
+describe('what a sheet tells of people', () => {
+  test('names whom the founders came from only where the owner lets it', async () => {
+    await app.house.db
+      .updateTable('strain')
+      .set({ fromWhom: 'Aldous Merrow', note: 'paid far too much' })
+      .where('roomId', '=', roomId)
+      .execute();
+    const preview = async () =>
+      JSON.stringify(
+        await owner.get(previewSheet, { params: { roomId }, query: { thing: 'brood', id: brood.broodId } }),
+      );
+    expect(await preview()).not.toContain('Aldous Merrow');
+    const keeper = await memberOf(app, roomId, 'keeper');
+    const refused = await keeper.ask(changeSheetSettings, { params: { roomId }, body: { showPeople: true } });
+    expect(refused.status).toBe(403);
+    await owner.get(changeSheetSettings, { params: { roomId }, body: { showPeople: true } });
+    expect(await owner.get(readSheetSettings, { params: { roomId } })).toEqual({ showPeople: true });
+    expect(await preview()).toContain('Aldous Merrow');
+    await owner.get(changeSheetSettings, { params: { roomId }, body: { showPeople: false } });
+    expect(await preview()).not.toContain('Aldous Merrow');
+  });
+
+  test('S37: its public page holds no address of anyone, no note and no id of an account', async () => {
+    const row = await issue();
+    const page = await app.person().get(checkSheetPage, { params: { token: row.token } });
+    const [, body = ''] = page.jws.split('.');
+    const told = `${JSON.stringify(page)} ${Buffer.from(body, 'base64url').toString('utf8')}`;
+    expect(told).toContain('MOKA-26A');
+    for (const secret of [owner.email, owner.id, 'paid far too much', 'passwordHash'])
+      expect(told).not.toContain(secret);
+  });
+
+  test('S39: a letter of the address changed leads nowhere; the page tells of these fish and their ancestors alone', async () => {
+    const row = await issue();
+    // 22 letters of base64url carry 132 bits, of which 128 are random.
+    expect(Buffer.from(row.token, 'base64url')).toHaveLength(16);
+    const other = `${row.token.startsWith('A') ? 'B' : 'A'}${row.token.slice(1)}`;
+    expect((await app.person().ask(checkSheetPage, { params: { token: other } })).status).toBe(404);
+    const answer = await app.person().ask(checkSheetPage, { params: { token: row.token } });
+    expect(answer.headers.get('x-robots-tag')).toBe('noindex');
+    expect(answer.headers.get('referrer-policy')).toBe('no-referrer');
+    const { content } = await owner.get(readSheet, { params: { roomId, sheetId: row.id } });
+    const ids = content.ancestry.map(({ id }) => id.split('/')[1]).sort();
+    // The brood, its dam, and the two males; the five other females of the colony have no place on it.
+    expect(ids).toEqual([brood.broodId, ...colony.males, colony.females[0] ?? ''].sort());
   });
 });
 
