@@ -3,16 +3,11 @@ import { DayText } from './days';
 
 /** One line of text, trimmed, without control characters. */
 export const line = (limit: number, empty: string) =>
-  z.pipe(
-    z.pipe(
-      z.string(empty),
-      z.transform((text: string) => text.trim()),
-    ),
-    z.string(empty).check(
-      z.minLength(1, empty),
-      z.maxLength(limit, `Keep it under ${limit} letters`),
-      z.refine((text) => !CONTROL.test(text), 'Leave out line breaks and control characters'),
-    ),
+  z.string(empty).check(
+    z.trim(),
+    z.minLength(1, { error: empty, abort: true }),
+    z.maxLength(limit, `Keep it under ${limit} letters`),
+    z.refine((text) => !CONTROL.test(text), 'Leave out line breaks and control characters'),
   );
 
 /** A note of several lines; an empty one is null. */

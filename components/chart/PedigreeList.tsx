@@ -17,7 +17,7 @@ export function PedigreeList({ label, nodes, selected, onSelect }: Props) {
   const oldestFirst = [...nodes].sort((a, b) => a.y - b.y || a.x - b.x);
   return (
     <Rows label={label}>
-      <VirtualList items={oldestFirst} keyOf={(node) => node.id} label={label}>
+      <VirtualList items={oldestFirst} keyOf={(node) => node.id}>
         {(node) => (
           <Row
             label={node.said}

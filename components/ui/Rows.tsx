@@ -9,6 +9,12 @@ type RowsLook = { listed: boolean; inset: number };
 const RowsContext = createContext<RowsLook>({ listed: false, inset: 0 });
 export const useRowsLook = (): RowsLook => use(RowsContext);
 
+/** Around a row whose list item is the place that a windowed list gives it. */
+export function Unlisted({ children }: { children: ReactNode }) {
+  const look = useRowsLook();
+  return <RowsContext value={{ ...look, listed: false }}>{children}</RowsContext>;
+}
+
 type Props = {
   children: ReactNode;
   label?: string;

@@ -3,6 +3,7 @@ import { type ReactNode, use, useRef, useState } from 'react';
 import { View } from 'react-native';
 import { elementOf } from './elementOf';
 import { ScrollContext } from './paneContext';
+import { Unlisted } from './Rows';
 
 type Props<Item> = {
   items: readonly Item[];
@@ -11,7 +12,6 @@ type Props<Item> = {
   children: (item: Item, index: number) => ReactNode;
   /** Height of a row before it is measured. */
   estimate?: number;
-  label: string;
   /** Below this many all are drawn: shorter lists need no machinery and can be searched by the browser. */
   allUnder?: number;
 };
@@ -24,7 +24,7 @@ export function VirtualList<Item>(props: Props<Item>) {
   return <Windowed {...props} />;
 }
 
-function Windowed<Item>({ items, keyOf, children, estimate = 68, label }: Props<Item>) {
+function Windowed<Item>({ items, keyOf, children, estimate = 68 }: Props<Item>) {
   const scroll = use(ScrollContext);
   const box = useRef<View>(null);
   const [offset, setOffset] = useState(0);
@@ -46,17 +46,18 @@ function Windowed<Item>({ items, keyOf, children, estimate = 68, label }: Props<
     if (from && to) setOffset(from.getBoundingClientRect().top - to.getBoundingClientRect().top + to.scrollTop);
   };
   return (
-    <View ref={box} onLayout={settle} aria-label={label} style={{ height: list.getTotalSize() }}>
+    <View ref={box} onLayout={settle} style={{ height: list.getTotalSize() }}>
       {list.getVirtualItems().map((line) => (
         <View
           key={line.key}
           ref={(view) => list.measureElement(elementOf(view))}
           dataSet={{ index: line.index }}
+          role="listitem"
           aria-posinset={line.index + 1}
           aria-setsize={items.length}
           style={{ position: 'absolute', top: 0, left: 0, right: 0, transform: [{ translateY: line.start - offset }] }}
         >
-          {children(at(items, line.index), line.index)}
+          <Unlisted>{children(at(items, line.index), line.index)}</Unlisted>
         </View>
       ))}
     </View>

@@ -88,7 +88,7 @@ export function BroodList({ chosen }: { chosen?: string }) {
           </Toolbar>
           {shown.length === 0 ? <Nothing any={data.length > 0} /> : null}
           <Rows bleed label="Broods">
-            <VirtualList items={shown} keyOf={({ brood }) => brood.id} label="Broods">
+            <VirtualList items={shown} keyOf={({ brood }) => brood.id}>
               {({ brood, stage }) => <BroodListRow brood={brood} stage={stage} selected={brood.id === chosen} />}
             </VirtualList>
           </Rows>

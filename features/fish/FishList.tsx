@@ -76,7 +76,7 @@ export function FishList({ chosen }: { chosen?: string }) {
             <EmptyState small title="No fish is like that" words="Change the search or the filters." />
           ) : null}
           <Rows bleed label="Fish">
-            <VirtualList items={shown} keyOf={({ id }) => id} label="Fish">
+            <VirtualList items={shown} keyOf={({ id }) => id}>
               {(fish) => <FishListRow fish={fish} selected={fish.id === chosen} />}
             </VirtualList>
           </Rows>

@@ -48,6 +48,8 @@ export const RECORD_GROUPS: readonly { word: string; actions: readonly RecordAct
       action('Photo', 'photo', 'photo', [...BROOD, 'colony', 'hold', 'fish']),
       action('Loss, cull', 'minus', 'loss', BROOD),
       action('Hold back', 'heldBack', 'hold-back', BROOD),
+      action('Split', 'move', 'split', BROOD),
+      action('Brood found', 'release', 'brood-found', TANK),
     ],
   },
   {

@@ -33,7 +33,7 @@ export function SheetsScreen({ tabs }: { tabs: ReactNode }) {
         />
       ) : (
         <Rows label="Lineage sheets">
-          <VirtualList items={data} keyOf={({ id }) => id} label="Lineage sheets">
+          <VirtualList items={data} keyOf={({ id }) => id}>
             {({ id, number, subject, heads, issuedOn, by, state }) => (
               <Row
                 href={`/r/${room.id}/sheets/${id}`}

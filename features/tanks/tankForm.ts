@@ -39,7 +39,6 @@ export const emptyTank = (code: string, walkOrder: number): TankDraft => ({
 });
 
 export function tankAsTyped(tank: TankRow, units: UnitChoices): TankDraft {
-  const { id: _id, version: _version, residents: _residents, retiredOn: _retired, code, ...facts } = tank;
-  // A code is read in any case and cannot be spelled back: it is shown as it is stored.
-  return { code, ...z.encode(z.omit(tankDraft(units), { code: true }), facts) };
+  const { id: _id, version: _version, residents: _residents, retiredOn: _retired, ...facts } = tank;
+  return z.encode(tankDraft(units), facts);
 }

@@ -18,7 +18,7 @@ export function unitsOf(settings: string): UnitChoices {
   return known.success ? known.data : METRIC;
 }
 
-/** "Stillbrook Fishroom" is `stillbrook-fishroom`: letters without their accents, digits, hyphens. */
+/** "Underhill Fishroom" is `underhill-fishroom`: letters without their accents, digits, hyphens. */
 const slugOf = (name: string): string =>
   name
     .normalize('NFKD')
