@@ -1,7 +1,7 @@
 import type { ReactNode } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { useBreakpoint } from '@/components/theme/breakpoint';
-import { line } from '@/components/theme/space';
+import { line, space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { PaneContext } from './paneContext';
 
@@ -25,7 +25,7 @@ export function TwoPane({ list, detail, nothing, listWidth = 372 }: Props) {
         <PaneContext value="list">{list}</PaneContext>
       </View>
       <View style={styles.fill}>
-        <PaneContext value="detail">{detail ?? nothing}</PaneContext>
+        <PaneContext value="detail">{detail ?? <View style={styles.nothing}>{nothing}</View>}</PaneContext>
       </View>
     </View>
   );
@@ -50,5 +50,6 @@ export function WithAside({ children, aside, width = 316 }: { children: ReactNod
 
 const styles = StyleSheet.create({
   panes: { flexGrow: 1, flexShrink: 1, flexBasis: 0, flexDirection: 'row', minHeight: 0 },
+  nothing: { padding: space[6] },
   fill: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 },
 });

@@ -18,6 +18,7 @@ import { broodStage } from '@/shared/broods/broodStage';
 import type { BroodRow } from '@/shared/broods/contract';
 import { STAGE_NAMES, STAGES, type Stage } from '@/shared/broods/stage';
 import { byNumber } from '@/shared/codes';
+import { shortName } from '@/shared/species/shortName';
 import { formatLength } from '@/shared/unitWords';
 import { broodsQuery } from './queries';
 
@@ -132,7 +133,7 @@ function BroodListRow({ brood, stage, selected }: { brood: BroodRow; stage: Stag
       state={<StageGlyph stage={stage} word size="small" />}
       note={
         <Text size="small" tone="soft" cut>
-          {displayName ? <Text italic>{displayName}</Text> : 'Possible hybrid'}
+          {displayName ? <Text italic>{shortName(displayName)}</Text> : 'Possible hybrid'}
           {locality ? ` ${locality}` : ''}
           {` · ${size}${where ? ` · ${where}` : ''}`}
         </Text>

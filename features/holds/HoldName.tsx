@@ -3,6 +3,7 @@ import { Code } from '@/components/ui/Code';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
 import type { HoldRow } from '@/shared/holds/contract';
+import { shortName } from '@/shared/species/shortName';
 import { modeWords } from './modeWords';
 import { whoHolds } from './whoHolds';
 
@@ -43,9 +44,6 @@ export function HoldPlaceShort({ hold }: { hold: HoldRow }) {
     </View>
   );
 }
-
-/** "T. duboisi": the genus is the same for half the room. */
-const shortName = (name: string): string => name.replace(/^(\p{Lu})\p{Ll}+ (?=\p{Ll})/u, '$1. ');
 
 const styles = StyleSheet.create({
   place: { flexDirection: 'row', minWidth: 0 },
