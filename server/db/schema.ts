@@ -272,6 +272,7 @@ type ImportedSheetTable = {
   importedBy: string;
   createdAt: string;
   entryId: string | null;
+  keysFrom: 'here' | 'address' | 'pasted' | null;
 };
 
 type InvitationTable = {
@@ -736,6 +737,14 @@ type TaskTable = {
   version: Generated<number>;
 };
 
+type ToldFishTable = {
+  roomId: string;
+  fishId: string;
+  importedSheetId: string;
+  here: 0 | 1;
+  entry: string;
+};
+
 type WaterReadingTable = {
   roomId: string;
   id: string;
@@ -809,5 +818,6 @@ export type Database = {
   tank: TankTable;
   tankCare: TankCareTable;
   task: TaskTable;
+  toldFish: ToldFishTable;
   waterReading: WaterReadingTable;
 };

@@ -4,7 +4,8 @@ import type { Database } from '../db/schema';
 import type { Scope } from '../scope';
 import { speciesNames } from '../species';
 
-type Which = { ids?: string[]; colonyId?: string; living?: boolean };
+/** `foreign`: ancestors too that are known from sheets of other fishrooms and have no life here. */
+type Which = { ids?: string[]; colonyId?: string; living?: boolean; foreign?: boolean };
 
 type Row = ExpressionBuilder<Database, 'fish'>;
 
@@ -101,6 +102,7 @@ export async function fishRows(scope: Scope, which: Which = {}): Promise<FishRow
   if (which.ids) query = query.where('fish.id', 'in', which.ids);
   if (which.colonyId) query = query.where('colonyMember.colonyId', '=', which.colonyId);
   if (which.living) query = query.where('fishExit.id', 'is', null);
+  if (!which.ids && !which.foreign) query = query.where('fish.origin', '<>', 'imported');
   const rows = await query.orderBy(sql`fish.code is null`).orderBy('fish.code').orderBy('fish.id').execute();
   const nameOf = await speciesNames(scope);
   const place = (id: string | null, code: string | null) => (id && code ? { id, code } : null);

@@ -5,6 +5,7 @@ import { lineageNodes } from './nodes';
 export { lineageNodes } from './nodes';
 export { keepParentage, parentagesOf } from './parentage';
 export { pedigreeOf, type RoomPedigree } from './pedigree';
+export { drawKey, foreignNames, type ToldAnimal, toldAnimals } from './told';
 
 export const lineage: Feature = {
   routes: (serve) => {

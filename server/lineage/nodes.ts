@@ -6,6 +6,7 @@ import { fishRows } from '../fish';
 import type { Scope } from '../scope';
 import { speciesNames } from '../species';
 import { pedigreeOf } from './pedigree';
+import { type ToldAnimal, toldAnimals } from './told';
 
 type Node = z.input<typeof LineageNode>;
 type About = Omit<Extract<Node, { sire: unknown }>, 'sire' | 'dam'>;
@@ -28,7 +29,8 @@ const parentsOf = (entry: PedigreeEntry) =>
 
 async function fishAbout(scope: Scope): Promise<[string, About][]> {
   const { db, roomId } = scope;
-  const rows = await fishRows(scope);
+  const rows = await fishRows(scope, { foreign: true });
+  const told = await toldAnimals(scope);
   const more = await db
     .selectFrom('fish')
     .leftJoin('lot', (join) => join.onRef('lot.roomId', '=', 'fish.roomId').onRef('lot.id', '=', 'fish.lotId'))
@@ -36,9 +38,6 @@ async function fishAbout(scope: Scope): Promise<[string, About][]> {
       join.onRef('strain.roomId', '=', 'fish.roomId').onRef('strain.id', '=', 'fish.strainId'),
     )
     .leftJoin('brood', (join) => join.onRef('brood.roomId', '=', 'fish.roomId').onRef('brood.id', '=', 'fish.broodId'))
-    .leftJoin('foreignFish', (join) =>
-      join.onRef('foreignFish.roomId', '=', 'fish.roomId').onRef('foreignFish.fishId', '=', 'fish.id'),
-    )
     .where('fish.roomId', '=', roomId)
     .select([
       'fish.id',
@@ -47,12 +46,12 @@ async function fishAbout(scope: Scope): Promise<[string, About][]> {
       'lot.provenance as lotProvenance',
       'lot.generation',
       'strain.provenance as strainProvenance',
-      'foreignFish.issuer',
     ])
     .execute();
   const byId = new Map(more.map((row) => [row.id, row]));
   return rows.map((fish) => {
     const row = byId.get(fish.id);
+    const byItsSheet = told.get(fish.id);
     const {
       id,
       code,
@@ -72,24 +71,28 @@ async function fishAbout(scope: Scope): Promise<[string, About][]> {
       {
         id,
         thing: 'fish',
-        code,
+        code: code ?? (byItsSheet?.here === false ? byItsSheet.entry.code : null),
         sex,
         sexCertain,
         strainId,
-        strainCode,
+        strainCode: strainCode ?? byItsSheet?.entry.strain ?? null,
         displayName,
         bornOn,
         keptAs,
         colony,
         tank,
         lastLengthTenthsMm,
-        living: fish.exit === null && row?.issuer == null,
+        living: fish.exit === null && fish.origin !== 'imported',
         broodId: fish.brood?.id ?? null,
-        founderGeneration:
-          fish.origin === 'founder'
+        founderGeneration: byItsSheet
+          ? toldGeneration(byItsSheet)
+          : fish.origin === 'founder'
             ? founderGeneration(row?.lotProvenance ?? row?.strainProvenance, row?.generation ?? null)
             : null,
-        issuer: row?.issuer ?? null,
+        issuer: byItsSheet?.room ?? null,
+        sheet: byItsSheet
+          ? { id: byItsSheet.importId, number: byItsSheet.number, signature: byItsSheet.signature }
+          : null,
         parentageId: row?.parentageId ?? row?.broodParentageId ?? null,
       },
     ];
@@ -100,6 +103,14 @@ async function fishAbout(scope: Scope): Promise<[string, About][]> {
 function founderGeneration(provenance: string | null | undefined, said: number | null): number | null {
   if (provenance === 'wildCaught') return 0;
   return provenance === 'bredElsewhere' ? said : null;
+}
+
+/** Of an animal that a sheet tells of: wild is 0; where it gives no parents, the number that it gives. */
+function toldGeneration({ entry }: ToldAnimal): number | null {
+  if (entry.origin === 'wild') return 0;
+  const known = pairsOf(entry).some(({ sire, dam }) => idsOf(sire).length + idsOf(dam).length > 0);
+  const { generation } = entry;
+  return !known && generation && generation.low === generation.high ? generation.low : null;
 }
 
 async function broodsAbout(scope: Scope): Promise<[string, About][]> {
@@ -142,6 +153,7 @@ async function broodsAbout(scope: Scope): Promise<[string, About][]> {
       broodId: null,
       founderGeneration: null,
       issuer: null,
+      sheet: null,
       parentageId,
     },
   ]);

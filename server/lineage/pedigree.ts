@@ -2,6 +2,7 @@ import type { ParentageTold } from '../../shared/holds/contract';
 import type { Candidate, Parentage, PedigreeEntry, WeightedPair } from '../../shared/lineage/pedigree';
 import type { Scope } from '../scope';
 import { parentagesOf } from './parentage';
+import { foreignNames, ownDraw, toldAnimals, toldParents } from './told';
 
 /** The fishroom's fish and broods as the computations take them. A brood stands for any one of its fry. */
 export type RoomPedigree = { entries: PedigreeEntry[]; broodIds: string[]; fishIds: string[] };
@@ -36,8 +37,11 @@ export async function pedigreeOf(scope: Scope): Promise<RoomPedigree> {
     ),
   ];
   const lists = await sourceLists(scope, batchIds);
+  const told = await toldPedigree(scope, { ours: fish.map(({ id }) => id), parentages, merged });
   const entryOfFish = ({ id, batchId, broodId, parentageId, takenOn }: (typeof fish)[number]): PedigreeEntry => {
     if (parentageId) return { id, ...pairOf(parentageId) };
+    const byItsSheet = told.get(id);
+    if (byItsSheet) return byItsSheet;
     if (broodId) return { id, ...pairOf(parentageOfBrood.get(broodId)) };
     if (!batchId) return { id, sire: { kind: 'unknown' }, dam: { kind: 'unknown' } };
     const from = sourcesOn(lists.get(batchId) ?? [], takenOn ?? '9999-12-31').map(
@@ -53,6 +57,29 @@ export async function pedigreeOf(scope: Scope): Promise<RoomPedigree> {
     fishIds: fish.map(({ id }) => id),
     broodIds: broods.map(({ id }) => id),
   };
+}
+
+type Known = { ours: string[]; parentages: Map<string, ParentageTold>; merged: Map<string, string> };
+
+/** The parents that came with sheets from elsewhere; a parentage that was set here goes before them. */
+async function toldPedigree(scope: Scope, { ours, parentages, merged }: Known): Promise<Map<string, PedigreeEntry>> {
+  const told = await toldAnimals(scope);
+  if (told.size === 0) return new Map();
+  const names = await foreignNames(scope);
+  const own = new Set(ours);
+  return toldParents(told.values(), {
+    fishOf: (name) => {
+      const [roomId, localId = ''] = name.split('/');
+      const fishId = roomId === scope.roomId && !names.has(name) ? (merged.get(localId) ?? localId) : names.get(name);
+      if (!fishId) return null;
+      const standing = merged.get(fishId) ?? fishId;
+      return own.has(standing) ? standing : null;
+    },
+    ownParent: (key) => {
+      const draw = ownDraw(scope.roomId, key, (rootId) => parentages.has(rootId));
+      return draw && asPair(parentages.get(draw.rootId), merged)[draw.side];
+    },
+  });
 }
 
 type Pair = { sire: Parentage; dam: Parentage };

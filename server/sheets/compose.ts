@@ -13,7 +13,7 @@ import type { SheetContent } from '../../shared/sheets/content';
 import { batchesOf, oneBrood } from '../broods';
 import { oneFish } from '../fish';
 import { samplesOf, samplesOfBrood } from '../growth';
-import { lineageNodes } from '../lineage';
+import { drawKey, lineageNodes, toldAnimals } from '../lineage';
 import type { Scope } from '../scope';
 import { oneStrain } from '../strains';
 import { careRows, readingRows } from '../water';
@@ -42,7 +42,7 @@ export async function composeSheet(scope: Scope, subject: Subject, issue: Issue,
     issue,
     fishroom: { id: scope.roomId, name: room.name, place: room.place, address: scope.house.config.origin, keyId },
     ...about,
-    ...lineageOf(scope, nodes, subject.id),
+    ...lineageOf(nodes, subject.id, await namingOf(scope)),
     growth: await growthOf(scope, subject, spawn),
     water: await waterOf(scope, tankIds, about.birth.taken?.on ?? addDays(scope.today, -365)),
     known: await factsKnown(scope, subject),
@@ -56,12 +56,13 @@ type About = { about: Pick<SheetContent, 'subject' | 'strain' | 'birth'>; tankId
 type Spawn = { spawnEarliest: string; spawnLatest: string };
 
 async function fishAbout(scope: Scope, { id }: Subject): Promise<About> {
+  const naming = await namingOf(scope);
   const fish = await oneFish(scope, id);
   const brood = fish.brood ? await oneBrood(scope, fish.brood.id) : null;
   return {
     about: {
       subject: {
-        id: animalId(scope.roomId, id),
+        id: naming.animal(id),
         kind: 'fish',
         code: fish.code ?? 'not told apart',
         heads: {
@@ -223,11 +224,30 @@ async function ancestorsOf(scope: Scope, id: string): Promise<Node[]> {
 
 const FOUNDER = { sire: { kind: 'unknown' }, dam: { kind: 'unknown' } } as Extract<Node, { sire: unknown }>;
 
-/** Ids and draws named beyond the fishroom; an animal that came in by a sheet keeps its first issuer's name. */
+/** How animals and draws are named beyond the fishroom. */
+type Naming = {
+  animal: (id: string) => string;
+  draw: (key: string) => string;
+  room: (id: string) => string | null;
+  told: (id: string) => Entry | undefined;
+};
+
+/** An animal that came in by a sheet keeps its first issuer's name, so that it is one animal on every sheet. */
+async function namingOf(scope: Scope): Promise<Naming> {
+  const told = await toldAnimals(scope);
+  const showPeople = await showsPeople(scope);
+  return {
+    animal: (id) => told.get(id)?.name ?? animalId(scope.roomId, id),
+    draw: (key) => drawKey(scope.roomId, key),
+    room: (id) => (showPeople ? (told.get(id)?.room.slice(0, 120) ?? null) : null),
+    told: (id) => told.get(id)?.entry,
+  };
+}
+
 function lineageOf(
-  scope: Scope,
   nodes: Node[],
   id: string,
+  naming: Naming,
 ): Pick<SheetContent, 'generation' | 'inbreeding' | 'ancestry'> {
   const founders = new Map(
     nodes.flatMap((node) => (node.founderGeneration === null ? [] : [[node.id, node.founderGeneration] as const])),
@@ -235,9 +255,9 @@ function lineageOf(
   const generations = generationNumbers(nodes, founders);
   const told = (nodeId: string): SheetContent['generation'] => {
     const range = generations.get(nodeId) ?? null;
+    if (!range) return naming.told(nodeId)?.generation ?? null;
     return range && { ...range, oneParentWild: oneParentWild(nodes, nodeId, founders) };
   };
-  const named = (local: string): string => animalId(scope.roomId, local);
   return {
     generation: told(id),
     inbreeding: {
@@ -245,7 +265,7 @@ function lineageOf(
       outcomes: inbreedingOutcomes(nodes, id),
       generationsKnown: equivalentGenerations(nodes, id),
     },
-    ancestry: nodes.map((node) => entryOf(node, named, told(node.id))),
+    ancestry: nodes.map((node) => entryOf(node, naming, told(node.id))),
   };
 }
 
@@ -264,13 +284,17 @@ function oneParentWild(nodes: Node[], id: string, founders: Map<string, number>)
   );
 }
 
-function entryOf(node: Node, named: (local: string) => string, generation: SheetContent['generation']): Entry {
+function entryOf(
+  node: Node,
+  { animal: named, draw, room, told: toldOf }: Naming,
+  generation: SheetContent['generation'],
+): Entry {
   const origin =
     node.founderGeneration === 0
       ? 'wild'
       : parentIds(node).length > 0 || node.thing === 'brood' || (node.founderGeneration ?? 0) > 0
         ? 'bred'
-        : 'unknown';
+        : (toldOf(node.id)?.origin ?? 'unknown');
   const animal = {
     id: named(node.id),
     kind: node.thing,
@@ -280,15 +304,13 @@ function entryOf(node: Node, named: (local: string) => string, generation: Sheet
     origin: origin as Entry['origin'],
     generation,
     strain: node.strainCode,
-    room: null,
+    room: room(node.id),
   };
   const parent = (told: Parentage): Parentage => {
     if (told.kind === 'known') return { kind: 'known', id: named(told.id) };
     if (told.kind === 'unknown') return told;
     const candidates = told.candidates.map(({ id, weight }) => ({ id: id && named(id), weight }));
-    return told.kind === 'mixed'
-      ? { kind: 'mixed', candidates }
-      : { kind: 'oneOf', key: keyOf(told.key, named), candidates };
+    return told.kind === 'mixed' ? { kind: 'mixed', candidates } : { kind: 'oneOf', key: draw(told.key), candidates };
   };
   if ('from' in node)
     return {
@@ -296,14 +318,6 @@ function entryOf(node: Node, named: (local: string) => string, generation: Sheet
       from: node.from.map(({ sire, dam, weight }) => ({ sire: parent(sire), dam: parent(dam), weight })),
     };
   return { ...animal, sire: parent(node.sire), dam: parent(node.dam) };
-}
-
-/** `<parentage>:sire` and `<parentage>:dam` are draws of their own: the dam's takes the parentage's id with its last digit turned. */
-function keyOf(key: string, named: (local: string) => string): string {
-  const [root = '', side] = key.split(':');
-  if (side !== 'dam') return named(root);
-  const last = Number.parseInt(root.slice(-1), 16);
-  return named(`${root.slice(0, -1)}${(last ^ 8).toString(16)}`);
 }
 
 async function growthOf(scope: Scope, { thing, id }: Subject, spawn: Spawn | null): Promise<SheetContent['growth']> {

@@ -13,7 +13,7 @@ import { publishedKeys } from './keys';
 
 export type PublishedKeys = { keys: PublicJwk[]; recalled: Recalled[] };
 
-const WHY: Record<NotFetched['because'], string> = {
+export const WHY_NOT_FETCHED: Record<NotFetched['because'], string> = {
   address: 'Only addresses that begin with https:// are asked.',
   inner: 'It leads into a private network, and those are not asked.',
   status: 'It answered, but not with keys.',
@@ -27,12 +27,12 @@ export async function fetchedKeys({ db, house }: Pick<Asked, 'db' | 'house'>, at
   const [, ours] = /\/keys\/([0-9a-f-]{36})\.json$/.exec(at) ?? [];
   if (ours && at === keysAddress(house.config.origin, ours)) return publishedKeys({ db, roomId: ours });
   const text = await fetchOutside(at, { mayBeInner: house.config.innerKeys }).catch((error: unknown) => {
-    if (error instanceof NotFetched) throw notReached(at, WHY[error.because]);
+    if (error instanceof NotFetched) throw notReached(at, WHY_NOT_FETCHED[error.because]);
     throw error;
   });
   const value = parsed(text);
   const keys = readKeySet(value);
-  if (!keys) throw notReached(at, WHY.status);
+  if (!keys) throw notReached(at, WHY_NOT_FETCHED.status);
   return { keys, recalled: readRecalled(value) };
 }
 

@@ -1,4 +1,4 @@
-import type { Response } from 'express';
+import express, { type Response } from 'express';
 import { isId } from '../../shared/ids';
 import { notFound } from '../../shared/refusal';
 import { SheetContent } from '../../shared/sheets/content';
@@ -17,13 +17,18 @@ import {
   rotateKey,
   withdrawSheet,
 } from '../../shared/sheets/contract';
+import { importSheet, listImported, previewImport, readImported } from '../../shared/sheets/importContract';
 import { keysAddress, sheetFileName } from '../../shared/sheets/sheetFile';
 import type { Feature } from '../features';
 import { limitOf } from '../http/limitOf';
 import { sheetPdf } from '../print';
 import { fetchedKeys } from './foreignKeys';
+import { importedPage, importedRows } from './imported';
+import { planImport } from './importPlan';
+import { toldPlan } from './importPreview';
 import { publishedKeys, rotate } from './keys';
 import { setShowsPeople, showsPeople } from './people';
+import { readSource } from './readSource';
 import {
   byToken,
   checkAddress,
@@ -35,12 +40,19 @@ import {
   storedSheet,
   withdraw,
 } from './sheets';
+import { takeIn } from './takeIn';
 
 export { currentKeyId, openKey } from './keys';
 export { issueInside, sheetRows } from './sheets';
 export { verifySheet } from './signing';
 
+/** A sheet with some ten thousand ancestors, as it is sent in to be taken in. */
+const LARGEST_SHEET = '6mb';
+
 export const sheets: Feature = {
+  before: (app) => {
+    app.use('/api/rooms/:roomId/sheet-imports', express.json({ limit: LARGEST_SHEET, strict: true }));
+  },
   routes: (serve) => {
     serve.read(listSheets, async (scope, { query }) => ({ sheets: await sheetRows(scope, query) }));
     serve.read(previewSheet, async (scope, { query }) => ({ content: await preview(scope, query) }));
@@ -72,6 +84,15 @@ export const sheets: Feature = {
       keepFromSearch(res);
       return publicSheet(asked, params.token);
     });
+    const imports = limitOf(120, 15);
+    serve.work(previewImport, async (scope, { body }, raw) => {
+      await imports(raw, scope.roomId);
+      const read = await readSource(scope, body.source);
+      return toldPlan(scope, read, await planImport(scope, read));
+    });
+    serve.work(importSheet, (scope, { body }) => takeIn(scope, body));
+    serve.read(listImported, async (scope, { query }) => ({ sheets: await importedRows(scope, query) }));
+    serve.read(readImported, (scope, { params }) => importedPage(scope, params.importId));
     const fetches = limitOf(30, 15);
     serve.open(fetchKeys, async (asked, { body }, raw) => {
       await fetches(raw);

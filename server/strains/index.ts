@@ -1,6 +1,6 @@
 import type { Feature } from '../features';
 import { strainRoutes } from './routes';
 
-export { oneStrain, strainRows } from './strains';
+export { addLotTo, addOne as addStrainTo, oneStrain, strainRows } from './strains';
 
 export const strains: Feature = { routes: strainRoutes };

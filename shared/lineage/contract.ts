@@ -33,6 +33,8 @@ const about = {
   founderGeneration: z.nullable(z.number()),
   /** The fishroom of an animal that came in by a sheet. */
   issuer: z.nullable(z.string()),
+  /** That sheet, and whether its signature was checked. */
+  sheet: z.nullable(z.strictObject({ id: Id, number: z.string(), signature: z.enum(['valid', 'keyUnknown']) })),
   /** The root of the parentage that can be changed here: its own, or its brood's. */
   parentageId: z.nullable(Id),
 };

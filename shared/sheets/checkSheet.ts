@@ -92,3 +92,10 @@ function isOthersPage(keysAt: string, roomId: string): boolean {
   const [, named] = /\/keys\/([0-9a-f-]{36})\.json$/.exec(keysAt) ?? [];
   return named !== undefined && named !== roomId;
 }
+
+/** What a sheet says of itself, checked or not: for a reader who has been told that no key was found. Null when it is no sheet. */
+export function claimOf(jws: string, signatures: Pick<Signatures, 'decode' | 'utf8'>): SheetContent | null {
+  const [, body = ''] = jws.split('.');
+  const content = SheetContent.safeParse(attempt(() => parsed(signatures.utf8(signatures.decode(body)))));
+  return content.success ? content.data : null;
+}
