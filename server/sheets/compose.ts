@@ -58,6 +58,8 @@ type Spawn = { spawnEarliest: string; spawnLatest: string };
 async function fishAbout(scope: Scope, { id }: Subject): Promise<About> {
   const naming = await namingOf(scope);
   const fish = await oneFish(scope, id);
+  if (fish.origin === 'imported')
+    throw new Refusal('conflict', 'This fish is known from a sheet of another fishroom, which issues its sheets');
   const brood = fish.brood ? await oneBrood(scope, fish.brood.id) : null;
   return {
     about: {
