@@ -6,6 +6,7 @@ type RoomPage = { name: string; word: string; note: string; needs: Action };
 export const roomPages: readonly RoomPage[] = [
   { name: 'fishroom', word: 'Fishroom', note: 'Name, place, time zone, currency, units', needs: 'room:see' },
   { name: 'members', word: 'Members', note: 'Roles, invitations, leaving', needs: 'member:see' },
+  { name: 'sheets', word: 'Lineage sheets', note: 'What they tell of other people, keys', needs: 'key:manage' },
   { name: 'trail', word: 'Audit trail', note: 'Who recorded and changed what, and when', needs: 'audit:see' },
 ];
 

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { useRouter } from 'expo-router';
-import { lazy, Suspense, useState } from 'react';
+import { lazy, type ReactNode, Suspense, useState } from 'react';
 import { View } from 'react-native';
 import { useIsWide } from '@/components/theme/breakpoint';
 import { space } from '@/components/theme/space';
@@ -23,12 +23,12 @@ import { pedigreeAroundQuery } from './queries';
 
 const LineageGraph = lazy(() => import('./LineageGraph').then((module) => ({ default: module.LineageGraph })));
 
-/** One animal's lineage: its possible parents and their shares, expected F and what it rests on, founders. */
-export function LineageOfScreen({ id }: { id: string }) {
+/** One animal's lineage: its possible parents and their shares, expected F and what it rests on, founders, the sheet it came by. */
+export function LineageOfScreen({ id, sheet }: { id: string; sheet: ReactNode }) {
   const room = useRoom();
   const { data, error, refetch } = useQuery(pedigreeAroundQuery(room.id, id));
   const node = data?.find((one) => one.id === id);
-  if (data && node) return <LineageOf key={id} nodes={data} node={node} />;
+  if (data && node) return <LineageOf key={id} nodes={data} node={node} sheet={sheet} />;
   return (
     <Screen title="Lineage" back={`/r/${room.id}/lineage`}>
       {error ? (
@@ -47,7 +47,7 @@ const DEPTHS = [
   { value: '9', word: 'All' },
 ] as const;
 
-function LineageOf({ nodes, node }: { nodes: Nodes; node: LineageNode }) {
+function LineageOf({ nodes, node, sheet }: { nodes: Nodes; node: LineageNode; sheet: ReactNode }) {
   const room = useRoom();
   const router = useRouter();
   const wide = useIsWide();
@@ -102,6 +102,7 @@ function LineageOf({ nodes, node }: { nodes: Nodes; node: LineageNode }) {
           ) : null}
         </ButtonRow>
       </View>
+      {sheet}
       <Section title="Founders" aside={figures.founders.length > 0 ? String(figures.founders.length) : undefined}>
         <FoundersOf figures={figures} />
       </Section>

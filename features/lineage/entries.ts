@@ -47,5 +47,8 @@ export function saidOf(node: LineageNode, byId: ReadonlyMap<string, LineageNode>
     return `${which} ${joinOr(names)}`;
   };
   const parents = [side('sire'), side('dam')].filter(Boolean).join(', ') || 'parents not known';
-  return `${nameOf(node)}, ${node.thing}, ${parents}`;
+  const sheet = node.sheet
+    ? `, by sheet ${node.sheet.number} of ${node.issuer}, ${node.sheet.signature === 'valid' ? 'checked' : 'not checked'}`
+    : '';
+  return `${nameOf(node)}, ${node.thing}, ${parents}${sheet}`;
 }

@@ -44,8 +44,8 @@ export function graphOf(shown: Nodes, all: Nodes, stageOf: (id: string) => Stage
 function noteOf(node: LineageNode, { undrawn }: GraphNode): string | null {
   const hidden = (['sire', 'dam'] as const).filter((side) => undrawn[side].hidden > 0);
   if (hidden.length > 0) return hidden.length === 2 ? 'parents not drawn' : `${hidden[0]} not drawn`;
+  if (node.sheet) return node.sheet.signature === 'valid' ? 'by sheet' : 'by sheet, unchecked';
   if (node.founderGeneration === 0) return 'wild';
-  if (node.issuer) return node.issuer;
   return node.code === null ? nameOf(node) : null;
 }
 

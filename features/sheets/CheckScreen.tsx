@@ -18,6 +18,7 @@ import { readKeySet } from '@/shared/sheets/sheetFile';
 import { verdictWords } from '@/shared/sheets/verdictWords';
 import { checkedQuery } from './queries';
 import { saveSheetFile } from './saveFile';
+import { TakeInOffer } from './TakeInOffer';
 import { verifySheet } from './verifySheet';
 
 const SheetPaper = lazy(() => import('./SheetPaper').then((module) => ({ default: module.SheetPaper })));
@@ -93,6 +94,7 @@ function Found({ token, checked, verdict }: { token: string; checked: Checked; v
               onPress={() => saveSheetFile(verdict.content.issue.number, checked)}
             />
           </View>
+          {state === 'withdrawn' ? null : <TakeInOffer checkUrl={checkUrl} />}
           <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
             <SheetPaper content={verdict.content} paper="a4" checkUrl={checkUrl} />
           </Suspense>

@@ -1,5 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
+import { View } from 'react-native';
+import { space } from '@/components/theme/space';
+import { Button } from '@/components/ui/Button';
 import { Code } from '@/components/ui/Code';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorState } from '@/components/ui/ErrorState';
@@ -7,20 +10,48 @@ import { Loading } from '@/components/ui/Loading';
 import { Row } from '@/components/ui/Row';
 import { Rows } from '@/components/ui/Rows';
 import { Screen } from '@/components/ui/Screen';
+import { Segmented } from '@/components/ui/Segmented';
 import { VirtualList } from '@/components/ui/VirtualList';
 import { useRoom } from '@/hooks/useRoom';
+import { useUrlWord } from '@/hooks/useUrlWord';
 import { formatDate } from '@/shared/days';
+import { may } from '@/shared/roles';
+import { ImportedList } from './ImportedList';
 import { sheetsQuery } from './queries';
 
 const STATE_WORDS = { valid: 'Valid', replaced: 'Replaced', withdrawn: 'Withdrawn' };
 
-/** Every sheet that was issued, newest first; `tabs` are the Lineage place's. */
+/** Every sheet that was issued, newest first, and those taken in; `tabs` are the Lineage place's. */
 export function SheetsScreen({ tabs }: { tabs: ReactNode }) {
   const room = useRoom();
   const { data, error, refetch } = useQuery(sheetsQuery(room.id));
+  const [show, setShow] = useUrlWord('show', 'issued', ['issued', 'in']);
   return (
-    <Screen title="Lineage" fixed={tabs} measure>
-      {!data ? (
+    <Screen
+      title="Lineage"
+      fixed={tabs}
+      actions={
+        may(room.role, 'stock:write') ? (
+          <Button small icon="download" label="Take a sheet in" href={`/r/${room.id}/sheets/import`} />
+        ) : undefined
+      }
+      measure
+    >
+      <View style={{ maxWidth: 320, marginBottom: space[4] }}>
+        <Segmented
+          label="Which sheets"
+          as="tabs"
+          choices={[
+            { value: 'issued', word: 'Issued' },
+            { value: 'in', word: 'Taken in' },
+          ]}
+          value={show}
+          onChange={setShow}
+        />
+      </View>
+      {show === 'in' ? (
+        <ImportedList />
+      ) : !data ? (
         error ? (
           <ErrorState title="The sheets could not be loaded" words={error.message} onRetry={() => void refetch()} />
         ) : (

@@ -1,0 +1,5 @@
+import { SheetSettingsScreen } from '@/features/sheets/SheetSettingsScreen';
+
+export default function SheetSettings() {
+  return <SheetSettingsScreen />;
+}
