@@ -1,7 +1,9 @@
 import type { Href } from 'expo-router';
+import { useEffect, useRef } from 'react';
 import { ScrollView, StyleSheet, View } from 'react-native';
 import { line, space, target } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
+import { elementOf } from './elementOf';
 import { moveFocus } from './moveFocus';
 import { Press } from './Press';
 import { Text } from './Text';
@@ -19,9 +21,16 @@ type Props<Value extends string> = {
 /** Parts of one page, or pages of one place: words with a thick bar under the one that is shown. */
 export function Tabs<Value extends string>({ label, tabs, value, onChange }: Props<Value>) {
   const theme = useTheme();
+  const frame = useRef<View>(null);
+  // On a phone the last tabs lie beyond the edge: the chosen one is brought in.
+  useEffect(() => {
+    const chosen = elementOf(frame.current)?.querySelector(`[data-tab="${value}"]`);
+    chosen?.scrollIntoView({ inline: 'nearest', block: 'nearest' });
+  }, [value]);
   const pages = tabs.every((tab) => tab.href !== undefined);
   return (
     <View
+      ref={frame}
       role={pages ? 'navigation' : 'tablist'}
       aria-label={label}
       onKeyDown={pages ? undefined : (event) => moveFocus(event, '[role=tab]', { press: true })}
@@ -33,6 +42,7 @@ export function Tabs<Value extends string>({ label, tabs, value, onChange }: Pro
           return (
             <Press
               key={tab.value}
+              dataSet={{ tab: tab.value }}
               href={tab.href}
               onPress={() => onChange?.(tab.value)}
               role={pages ? undefined : 'tab'}

@@ -72,7 +72,7 @@ export function CheckFileScreen() {
             <SheetPaper
               content={check.data.verdict.content}
               paper="a4"
-              checkUrl={check.data.verdict.content.fishroom.address}
+              checkUrl={`${check.data.verdict.content.fishroom.address}/sheet`}
             />
           </Suspense>
         ) : null}

@@ -94,7 +94,7 @@ function Found({ token, checked, verdict }: { token: string; checked: Checked; v
               onPress={() => saveSheetFile(verdict.content.issue.number, checked)}
             />
           </View>
-          {state === 'withdrawn' ? null : <TakeInOffer checkUrl={checkUrl} />}
+          {state === 'withdrawn' ? null : <TakeInOffer checkUrl={checkUrl} issuer={verdict.content.fishroom.id} />}
           <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
             <SheetPaper content={verdict.content} paper="a4" checkUrl={checkUrl} />
           </Suspense>

@@ -12,7 +12,7 @@ import { VirtualList } from '@/components/ui/VirtualList';
 import { formatDate } from '@/shared/days';
 import type { ImportPreview } from '@/shared/sheets/importContract';
 import { ancestorsWords, FATE_WORDS } from '@/shared/sheets/importWords';
-import { generationWords } from '@/shared/sheets/sayings';
+import { completenessWords, generationWords } from '@/shared/sheets/sayings';
 import { claimWords } from './claimWords';
 
 /** Who the fish are, who says so, and which ancestors come along. */
@@ -37,11 +37,12 @@ export function ImportFacts({ preview }: { preview: ImportPreview }) {
             value: [fishroom.name, fishroom.place].filter(Boolean).join(', '),
             note: fishroom.address.replace(/^https?:\/\//, ''),
           },
+          { key: 'Pedigree known', value: completenessWords(inbreeding) },
           { key: 'Issued', value: `${formatDate(issue.on)}, ${issue.by}` },
         ]}
       />
       <Section title="Ancestors" aside={animals.length > 0 ? String(animals.length) : undefined}>
-        <Text size="small" tone="soft">
+        <Text size="small" tone="soft" style={{ marginBottom: space[2] }}>
           {ancestorsWords(animals)}
         </Text>
         {animals.length > 0 ? (

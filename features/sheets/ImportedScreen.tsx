@@ -80,7 +80,7 @@ function Imported({ told: { row, content, jws } }: { told: z.output<typeof readI
         </Rows>
       </Section>
       <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
-        <SheetPaper content={content} paper="a4" checkUrl={fishroom.address} units={room.units} />
+        <SheetPaper content={content} paper="a4" checkUrl={`${fishroom.address}/sheet`} units={room.units} />
       </Suspense>
     </Screen>
   );

@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import type { ReactNode } from 'react';
-import { View } from 'react-native';
+import { StyleSheet, View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
 import { Code } from '@/components/ui/Code';
@@ -27,27 +27,23 @@ export function SheetsScreen({ tabs }: { tabs: ReactNode }) {
   const { data, error, refetch } = useQuery(sheetsQuery(room.id));
   const [show, setShow] = useUrlWord('show', 'issued', ['issued', 'in']);
   return (
-    <Screen
-      title="Lineage"
-      fixed={tabs}
-      actions={
-        may(room.role, 'stock:write') ? (
-          <Button small icon="download" label="Take a sheet in" href={`/r/${room.id}/sheets/import`} />
-        ) : undefined
-      }
-      measure
-    >
-      <View style={{ maxWidth: 320, marginBottom: space[4] }}>
-        <Segmented
-          label="Which sheets"
-          as="tabs"
-          choices={[
-            { value: 'issued', word: 'Issued' },
-            { value: 'in', word: 'Taken in' },
-          ]}
-          value={show}
-          onChange={setShow}
-        />
+    <Screen title="Lineage" fixed={tabs} measure>
+      <View style={styles.head}>
+        <View style={styles.which}>
+          <Segmented
+            label="Which sheets"
+            as="tabs"
+            choices={[
+              { value: 'issued', word: 'Issued' },
+              { value: 'in', word: 'Taken in' },
+            ]}
+            value={show}
+            onChange={setShow}
+          />
+        </View>
+        {may(room.role, 'stock:write') ? (
+          <Button icon="download" label="Take a sheet in" href={`/r/${room.id}/sheets/import`} />
+        ) : null}
       </View>
       {show === 'in' ? (
         <ImportedList />
@@ -82,3 +78,16 @@ export function SheetsScreen({ tabs }: { tabs: ReactNode }) {
     </Screen>
   );
 }
+
+const styles = StyleSheet.create({
+  head: {
+    flexDirection: 'row',
+    flexWrap: 'wrap',
+    alignItems: 'center',
+    justifyContent: 'space-between',
+    gap: space[3],
+    marginTop: space[3],
+    marginBottom: space[4],
+  },
+  which: { width: 240 },
+});

@@ -5,8 +5,9 @@ import { Button } from '@/components/ui/Button';
 import { roomsToTakeInQuery } from './importQueries';
 
 /** On a sheet's public page, for whoever is signed in and has a fishroom: carry the lineage on there. */
-export function TakeInOffer({ checkUrl }: { checkUrl: string }) {
-  const { data: rooms = [] } = useQuery(roomsToTakeInQuery);
+export function TakeInOffer({ checkUrl, issuer }: { checkUrl: string; issuer: string }) {
+  const { data = [] } = useQuery(roomsToTakeInQuery);
+  const rooms = data.filter(({ id }) => id !== issuer);
   if (rooms.length === 0) return null;
   return (
     <View style={{ flexDirection: 'row', flexWrap: 'wrap', gap: space[2] }}>
