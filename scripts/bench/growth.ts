@@ -2,7 +2,7 @@ import type { LengthAtAge } from '../../shared/growth/ageGroups';
 import { fitGrowth } from '../../shared/growth/fitGrowth';
 import { GROWTH_MODELS, type GrowthModel } from '../../shared/growth/shapes';
 
-type Figure = { figure: string; ours: number; anchor: number; anchorName: string; unit: string; goal?: string };
+import type { Figure } from './figure';
 
 /** Every fish at an age of its own is the hard case; a brood is measured on a few days. */
 const CASES = [

@@ -7,9 +7,8 @@ import { kinship } from '../../shared/lineage/kinship';
 import { kinshipColumns } from '../../shared/lineage/kinshipColumns';
 import type { PedigreeEntry } from '../../shared/lineage/pedigree';
 import { planPairing } from '../../shared/lineage/planPairing';
+import type { Figure } from './figure';
 import { columnByMaps, everyGroup, fByAncestors, invented, type Parents, tableOfRows } from './lineageTextbook';
-
-type Figure = { figure: string; ours: number; anchor: number; anchorName: string; unit: string; goal?: string };
 
 const LARGE = 100_000;
 

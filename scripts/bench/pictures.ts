@@ -5,7 +5,7 @@ import sharp from 'sharp';
 import { openPictures, type Pictures } from '../../server/pictures';
 import { uuidV7 } from '../../shared/ids';
 
-type Figure = { figure: string; ours: number; anchor: number; anchorName: string; unit: string; goal?: string };
+import type { Figure } from './figure';
 
 const ROUNDS = 9;
 const MB = 1_000_000;
