@@ -3,7 +3,7 @@ import type { Figure } from './bench/figure';
 
 /*
  * npm run bench [part…]: every figure beside its anchor, measured in the same run on the same machine. Nothing fails by
- * time: the ratio is what is read. Parts: lineage, growth, pictures, server.
+ * time: the ratio is what is read. Parts: lineage, growth, pictures, server, large.
  */
 
 const PARTS: Record<string, () => Promise<{ bench(): Promise<Figure[]> }>> = {
@@ -11,6 +11,7 @@ const PARTS: Record<string, () => Promise<{ bench(): Promise<Figure[]> }>> = {
   growth: () => import('./bench/growth'),
   pictures: () => import('./bench/pictures'),
   server: () => import('./bench/server'),
+  large: () => import('./bench/large'),
 };
 
 const round = (value: number): string => value.toLocaleString('en-GB', { maximumSignificantDigits: 3 });

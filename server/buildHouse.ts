@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import pino from 'pino';
 import type { Config } from './config';
 import { takeLock } from './db/lock';
-import { migrateToLatest, openFile } from './db/open';
+import { keepStatistics, migrateToLatest, openFile } from './db/open';
 import type { House } from './house';
 import { openMailer } from './mail';
 import { openSink } from './mail/sink';
@@ -17,11 +17,13 @@ export async function buildHouse(config: Config, clock: House['clock'] = { now: 
   const log = pino({ level: config.logLevel, base: null, timestamp: pino.stdTimeFunctions.isoTime });
   const db = openFile(join(config.dataFolder, 'kinwater.db'));
   await migrateToLatest(db);
+  await keepStatistics(db);
   const sink = config.smtpUrl ? null : await openSink();
   const mailer = openMailer(config.smtpUrl ?? sink?.url ?? '', config.mailFrom);
   const pictures = await openPictures({ folder: config.uploadsFolder, maxBytes: 25_000_000, crashAt: config.crashAt });
   const house: House = { config, db, log, clock, mailer, sink, pictures, demoWords: '' };
   const close = async () => {
+    await keepStatistics(db);
     mailer.close();
     await sink?.close();
     await db.destroy();

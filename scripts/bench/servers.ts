@@ -9,6 +9,7 @@ export type Started = {
   /** What is asked for over and over, signed in. */
   url: string;
   heavyUrl: string;
+  roomUrl: string;
   headers: Record<string, string>;
   /** CPU that the process has used since it began. */
   cpuMs(): number;
@@ -66,7 +67,15 @@ export async function startProduct(folder: string): Promise<Started> {
   const me = Me.parse(await (await fetch(`${origin}/api/me`, { headers: { cookie } })).json());
   const room = `${origin}/api/rooms/${me.rooms[0]?.id}`;
   const url = `${room}/intervals`;
-  return { origin, url, heavyUrl: `${room}/pedigree`, headers: { cookie }, cpuMs: () => cpuMsOf(pid), stop };
+  return {
+    origin,
+    url,
+    heavyUrl: `${room}/pedigree`,
+    roomUrl: room,
+    headers: { cookie },
+    cpuMs: () => cpuMsOf(pid),
+    stop,
+  };
 }
 
 /** The same packages without anything of ours, over the same file: a token, a session, a member, one row. */
@@ -77,5 +86,13 @@ export async function bareServer(folder: string): Promise<Started> {
   const { pid, stop } = await start(root('scripts/bench/bareServer.ts'), env);
   const token = await (await fetch(`${origin}/token`)).text();
   const headers = { cookie: `session=${token}` };
-  return { origin, url: `${origin}/row`, heavyUrl: `${origin}/row`, headers, cpuMs: () => cpuMsOf(pid), stop };
+  return {
+    origin,
+    url: `${origin}/row`,
+    heavyUrl: `${origin}/row`,
+    roomUrl: origin,
+    headers,
+    cpuMs: () => cpuMsOf(pid),
+    stop,
+  };
 }

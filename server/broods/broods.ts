@@ -2,6 +2,7 @@ import type * as z from 'zod/mini';
 import type { BatchTold, BroodRow, changeBrood, readBrood } from '../../shared/broods/contract';
 import { headCountOf } from '../../shared/broods/headCount';
 import { byNumber, proposeBroodCode } from '../../shared/codes';
+import { grouped } from '../../shared/grouped';
 import { notFound, Refusal } from '../../shared/refusal';
 import { audit } from '../db/audit';
 import { parentagesOf } from '../lineage';
@@ -16,7 +17,7 @@ type BatchOf = z.input<typeof BatchTold>;
 
 /** Broods with what their ledgers and samples say; all of them, or those with heads or eggs here. */
 export async function broodRows(scope: Scope, which: { ids?: string[]; hereOnly?: boolean } = {}): Promise<Told[]> {
-  const rows = await rowsOf(scope, which.ids);
+  const rows = await rowsOf(scope, which);
   const batches = await batchesOf(
     scope,
     rows.map(({ id }) => id),
@@ -26,10 +27,14 @@ export async function broodRows(scope: Scope, which: { ids?: string[]; hereOnly?
     rows.map(({ parentageId }) => parentageId),
   );
   const reserved = await reservedByBrood(scope);
-  const samples = await lastSamples(scope);
+  const samples = await lastSamples(
+    scope,
+    [...rows, ...batches].map(({ id }) => id),
+  );
   const nameOf = await speciesNames(scope);
+  const ofBrood = grouped(batches, ({ sources }) => sources.map(({ broodId }) => broodId));
   const told = rows.map((row) => {
-    const own = batches.filter(({ sources }) => sources.some(({ broodId }) => broodId === row.id));
+    const own = ofBrood.get(row.id) ?? [];
     const parentage = parentages.get(row.parentageId);
     const dam = parentage?.dams.length === 1 ? parentage.dams[0] : undefined;
     const { heads, ...count } = countsOf(row.id, own);
@@ -61,7 +66,7 @@ export async function broodRows(scope: Scope, which: { ids?: string[]; hereOnly?
   return which.hereOnly ? told.filter(({ heads, opened }) => heads > 0 || opened === null) : told;
 }
 
-function rowsOf({ db, roomId }: Scope, ids?: string[]) {
+function rowsOf({ db, roomId }: Scope, { ids, hereOnly }: { ids?: string[]; hereOnly?: boolean }) {
   let query = db
     .selectFrom('brood')
     .leftJoin('strain', (join) =>
@@ -87,6 +92,19 @@ function rowsOf({ db, roomId }: Scope, ids?: string[]) {
       'strain.locality',
     ]);
   if (ids) query = query.where('brood.id', 'in', ids);
+  // Years of broods that are gone need not be reckoned to find out that they are: a batch that swims here has a tank.
+  if (hereOnly)
+    query = query.where(({ or, not, exists, eb }) => {
+      const stays = eb
+        .selectFrom('batchSource')
+        .innerJoin('stay', (join) =>
+          join.onRef('stay.roomId', '=', 'batchSource.roomId').onRef('stay.batchId', '=', 'batchSource.batchId'),
+        )
+        .whereRef('batchSource.roomId', '=', 'brood.roomId')
+        .whereRef('batchSource.broodId', '=', 'brood.id')
+        .select('stay.id');
+      return or([exists(stays.where('stay.untilDay', 'is', null)), not(exists(stays))]);
+    });
   return query.orderBy('brood.startedOn', 'desc').orderBy('brood.id', 'desc').execute();
 }
 
@@ -140,19 +158,19 @@ export async function batchesOf(scope: Scope, broodIds: string[]): Promise<Batch
     .execute();
   const ids = rows.map(({ id }) => id);
   const lists = await sourcesOf(scope, ids);
-  const lines = await linesOf(scope, ids);
+  const lines = grouped(await linesOf(scope, ids), ({ batchId }) => batchId);
   return rows.map(({ id, startedOn, tankId, tankCode }) =>
     batchTold(
       { id, startedOn, tank: tankId && tankCode ? { id: tankId, code: tankCode } : null },
       lists.get(id) ?? [],
-      lines,
+      lines.get(id) ?? [],
     ),
   );
 }
 
 function batchTold(batch: Pick<BatchOf, 'id' | 'startedOn' | 'tank'>, sources: Source[], lines: Line[]): BatchOf {
   const shares = sharesOf(sources);
-  const own = lines.filter(({ batchId }) => batchId === batch.id).map(({ batchId: _batch, ...line }) => line);
+  const own = lines.map(({ batchId: _batch, ...line }) => line);
   return {
     ...batch,
     sources: sources
@@ -187,9 +205,15 @@ async function reservedByBrood({ db, roomId, now }: Scope): Promise<Map<string, 
   return new Map(rows.map(({ broodId, heads }) => [broodId, Number(heads)]));
 }
 
-/** The last sample of every brood and batch, by its id. */
-async function lastSamples({ db, roomId }: Scope): Promise<Map<string, NonNullable<Told['lastSample']>>> {
-  const rows = await db
+/** So many ids go into a query one by one; beyond, the whole room is read faster. */
+const FEW = 600;
+
+/** The last sample of broods and batches, by their ids. */
+async function lastSamples(
+  { db, roomId }: Scope,
+  ids: string[],
+): Promise<Map<string, NonNullable<Told['lastSample']>>> {
+  let query = db
     .selectFrom('lengthSample')
     .innerJoin('lengthReading', (join) =>
       join
@@ -207,8 +231,12 @@ async function lastSamples({ db, roomId }: Scope): Promise<Map<string, NonNullab
       ({ fn }) => fn.avg<number>('lengthReading.lengthTenthsMm').as('meanTenthsMm'),
     ])
     .groupBy('lengthSample.id')
-    .orderBy('lengthSample.onDay')
-    .execute();
+    .orderBy('lengthSample.onDay');
+  if (ids.length <= FEW)
+    query = query.where(({ or, eb }) =>
+      or([eb('lengthSample.broodId', 'in', ids), eb('lengthSample.batchId', 'in', ids)]),
+    );
+  const rows = await query.execute();
   return new Map(rows.map(({ broodId, batchId, ...sample }) => [broodId ?? batchId ?? '', sample]));
 }
 

@@ -84,17 +84,21 @@ export async function fishRows(scope: Scope, which: Which = {}): Promise<FishRow
       lastFinding(eb, 'sex').select('finding.certain').as('sexCertain'),
       lastFinding(eb, 'mark').select('finding.value').as('mark'),
       lastFinding(eb, 'dominance').select('finding.value').as('dominance'),
+      // Sample first, then its reading: joined, SQLite may walk every reading of the room for each fish.
       eb
-        .selectFrom('lengthSample')
-        .innerJoin('lengthReading', (join) =>
-          join
-            .onRef('lengthReading.roomId', '=', 'lengthSample.roomId')
-            .onRef('lengthReading.sampleId', '=', 'lengthSample.id'),
+        .selectFrom('lengthReading')
+        .whereRef('lengthReading.roomId', '=', 'fish.roomId')
+        .where('lengthReading.sampleId', '=', (inner) =>
+          inner
+            .selectFrom('lengthSample')
+            .whereRef('lengthSample.roomId', '=', 'fish.roomId')
+            .whereRef('lengthSample.fishId', '=', 'fish.id')
+            .orderBy('lengthSample.onDay', 'desc')
+            .orderBy('lengthSample.id', 'desc')
+            .limit(1)
+            .select('lengthSample.id'),
         )
-        .whereRef('lengthSample.roomId', '=', 'fish.roomId')
-        .whereRef('lengthSample.fishId', '=', 'fish.id')
-        .orderBy('lengthSample.onDay', 'desc')
-        .orderBy('lengthSample.id', 'desc')
+        .orderBy('lengthReading.position')
         .limit(1)
         .select('lengthReading.lengthTenthsMm')
         .as('lastLengthTenthsMm'),

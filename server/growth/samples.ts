@@ -5,6 +5,9 @@ import { sourcesOf } from '../broods';
 import type { Scope } from '../scope';
 import { figuresOf } from '../species';
 
+/** A chart that compares more broods than these says nothing; the latest were kept as these are. */
+const COMPARED = 40;
+
 type Thing = 'brood' | 'batch' | 'fish';
 type Wanted = { broodIds?: string[]; batchIds?: string[]; fishIds?: string[] };
 
@@ -165,9 +168,11 @@ export async function strainSamples(scope: Scope, strainId: string): Promise<z.i
     .where('roomId', '=', roomId)
     .where('strainId', '=', strainId)
     .select(['id', 'code', 'spawnEarliest', 'spawnLatest'])
-    .orderBy('spawnLatest')
+    .orderBy('spawnLatest', 'desc')
+    .orderBy('id', 'desc')
+    .limit(COMPARED)
     .execute();
   const told: z.input<typeof listStrainSamples.output>['broods'] = [];
-  for (const brood of broods) told.push({ ...brood, samples: await samplesOfBrood(scope, brood.id) });
+  for (const brood of broods.reverse()) told.push({ ...brood, samples: await samplesOfBrood(scope, brood.id) });
   return { broods: told };
 }

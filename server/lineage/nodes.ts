@@ -16,7 +16,8 @@ export async function lineageNodes(scope: Scope, around?: string): Promise<Node[
   const { entries } = await pedigreeOf(scope);
   const kept = around ? relativesOf(entries, around) : entries;
   if (around && !kept.some(({ id }) => id === around)) throw notFound('That animal');
-  const about = new Map([...(await fishAbout(scope)), ...(await broodsAbout(scope))]);
+  const ids = around ? kept.map(({ id }) => id) : undefined;
+  const about = new Map([...(await fishAbout(scope, ids)), ...(await broodsAbout(scope, ids))]);
   return kept.flatMap((entry): Node[] => {
     const told = about.get(entry.id);
     if (!told) return [];
@@ -27,11 +28,11 @@ export async function lineageNodes(scope: Scope, around?: string): Promise<Node[
 const parentsOf = (entry: PedigreeEntry) =>
   'from' in entry ? { from: entry.from } : { sire: entry.sire, dam: entry.dam };
 
-async function fishAbout(scope: Scope): Promise<[string, About][]> {
+async function fishAbout(scope: Scope, ids?: string[]): Promise<[string, About][]> {
   const { db, roomId } = scope;
-  const rows = await fishRows(scope, { foreign: true });
+  const rows = await fishRows(scope, { foreign: true, ...(ids ? { ids } : {}) });
   const told = await toldAnimals(scope);
-  const more = await db
+  let query = db
     .selectFrom('fish')
     .leftJoin('lot', (join) => join.onRef('lot.roomId', '=', 'fish.roomId').onRef('lot.id', '=', 'fish.lotId'))
     .leftJoin('strain', (join) =>
@@ -46,8 +47,9 @@ async function fishAbout(scope: Scope): Promise<[string, About][]> {
       'lot.provenance as lotProvenance',
       'lot.generation',
       'strain.provenance as strainProvenance',
-    ])
-    .execute();
+    ]);
+  if (ids) query = query.where('fish.id', 'in', ids);
+  const more = await query.execute();
   const byId = new Map(more.map((row) => [row.id, row]));
   return rows.map((fish) => {
     const row = byId.get(fish.id);
@@ -113,9 +115,9 @@ function toldGeneration({ entry }: ToldAnimal): number | null {
   return !known && generation && generation.low === generation.high ? generation.low : null;
 }
 
-async function broodsAbout(scope: Scope): Promise<[string, About][]> {
+async function broodsAbout(scope: Scope, ids?: string[]): Promise<[string, About][]> {
   const { db, roomId } = scope;
-  const rows = await db
+  let query = db
     .selectFrom('brood')
     .leftJoin('strain', (join) =>
       join.onRef('strain.roomId', '=', 'brood.roomId').onRef('strain.id', '=', 'brood.strainId'),
@@ -130,8 +132,9 @@ async function broodsAbout(scope: Scope): Promise<[string, About][]> {
       'strain.code as strainCode',
       'strain.scientificName',
       'strain.speciesId',
-    ])
-    .execute();
+    ]);
+  if (ids) query = query.where('brood.id', 'in', ids);
+  const rows = await query.execute();
   const nameOf = await speciesNames(scope);
   return rows.map(({ id, code, strainId, strainCode, scientificName, speciesId, spawnLatest, parentageId }) => [
     id,

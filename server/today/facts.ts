@@ -1,6 +1,7 @@
 import type * as z from 'zod/mini';
 import { headCountOf } from '../../shared/broods/headCount';
 import { addDays } from '../../shared/days';
+import { grouped } from '../../shared/grouped';
 import type { TankToday, TodayFacts } from '../../shared/today/facts';
 import { batchesOf, broodRows } from '../broods';
 import { holdRows } from '../holds';
@@ -57,12 +58,19 @@ async function tanksNow(
   care: Awaited<ReturnType<typeof careRows>>,
   speciesOfStrain: Map<string, string>,
 ): Promise<z.input<typeof TankToday>[]> {
-  const readings = await readingRows(scope, { since: addDays(scope.today, -READINGS_SINCE_DAYS) });
+  const readings = grouped(
+    await readingRows(scope, { since: addDays(scope.today, -READINGS_SINCE_DAYS) }),
+    ({ tankId }) => tankId,
+  );
+  const changed = grouped(
+    care.filter(({ kind }) => kind === 'waterChange'),
+    ({ tankId }) => tankId,
+  );
   return tanks
     .filter(({ retiredOn }) => retiredOn === null)
     .map(({ id, code, place, litres, residents }) => {
-      const own = readings.filter(({ tankId }) => tankId === id);
-      const changes = care.filter(({ tankId, kind }) => tankId === id && kind === 'waterChange');
+      const own = readings.get(id) ?? [];
+      const changes = changed.get(id) ?? [];
       const since = residents.map((resident) => resident.since).sort();
       return {
         id,
@@ -94,6 +102,7 @@ async function batchesNow(scope: Scope, broods: Awaited<ReturnType<typeof broodR
     .select(['broodId', ({ fn }) => fn.max('onDay').as('onDay')])
     .groupBy('broodId')
     .execute();
+  const stageCounted = new Map(counts.map(({ broodId, onDay }) => [broodId, onDay]));
   return batches.flatMap(({ id, sources, tank, balance, startedOn, lines }) => {
     const own = sources.flatMap(({ broodId }) => byId.get(broodId) ?? []);
     const [first] = own;
@@ -112,7 +121,7 @@ async function batchesNow(scope: Scope, broods: Awaited<ReturnType<typeof broodR
         broodIds: sources.map(({ broodId }) => broodId),
         spawnLatest: first.spawnLatest,
         speciesId: first.speciesId,
-        stageCountedOn: counts.find(({ broodId }) => broodId === first.id)?.onDay ?? null,
+        stageCountedOn: stageCounted.get(first.id) ?? null,
         sampledOn: first.lastSample?.onDay ?? null,
         meanTenthsMm: first.lastSample?.meanTenthsMm ?? null,
       },

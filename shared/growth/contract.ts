@@ -36,7 +36,7 @@ export const listSamples = endpoint({
   }),
 });
 
-/** Samples of every brood of a strain, for comparison. */
+/** Samples of a strain's latest forty broods, oldest first, for comparison. */
 export const listStrainSamples = endpoint({
   method: 'GET',
   path: '/api/rooms/:roomId/strains/:strainId/samples',
