@@ -14,6 +14,7 @@ import type { SheetVerdict } from '@/shared/sheets/checkSheet';
 import { type Recalled, readSheetFile } from '@/shared/sheets/sheetFile';
 import { VerdictNotice } from './CheckScreen';
 import { keysFor, pastedKeys } from './keysFor';
+import { TakeInOffer } from './TakeInOffer';
 import { useDrop } from './useDrop';
 import { digestOf, verifySheet } from './verifySheet';
 
@@ -67,6 +68,9 @@ export function CheckFileScreen() {
         {check.error ? <Notice tone="look" alert words={check.error.message} /> : null}
         {check.data?.recalled ? <RecalledNotice {...check.data.recalled} /> : null}
         {check.data ? <VerdictNotice verdict={check.data.verdict} /> : null}
+        {check.data?.verdict.state === 'valid' && check.data.recalled?.state !== 'withdrawn' ? (
+          <TakeInOffer checkUrl={null} issuer={check.data.verdict.content.fishroom.id} />
+        ) : null}
         {check.data?.verdict.state === 'valid' ? (
           <Suspense fallback={<Loading label="Setting the page" rows={6} />}>
             <SheetPaper

@@ -1,3 +1,4 @@
+import { sql } from 'kysely';
 import type * as z from 'zod/mini';
 import { notFound } from '../../shared/refusal';
 import { SheetContent } from '../../shared/sheets/content';
@@ -16,11 +17,15 @@ export async function importedRows(scope: Pick<Scope, 'db' | 'roomId'>, which: W
     .select([
       'source.id',
       'source.number',
-      'source.content',
       'source.signature',
       'source.keysFrom',
       'source.createdAt',
       'account.name as by',
+      // A sheet with thousands of ancestors is not read through for a line of a list.
+      sql<string>`json_extract(source.content, '$.fishroom.name')`.as('room'),
+      sql<string>`json_extract(source.content, '$.fishroom.address')`.as('address'),
+      sql<string>`json_extract(source.content, '$.subject.code')`.as('subject'),
+      sql<string>`json_extract(source.content, '$.issue.on')`.as('issuedOn'),
     ]);
   if (which.id) query = query.where('source.id', '=', which.id);
   if (which.fishId)
@@ -33,15 +38,10 @@ export async function importedRows(scope: Pick<Scope, 'db' | 'roomId'>, which: W
     );
   const rows = await query.orderBy('source.createdAt', 'desc').orderBy('source.id', 'desc').execute();
   const told = await toldOf(scope);
-  return rows.map(({ content, createdAt, signature, ...row }) => {
-    const { fishroom, issue, subject } = SheetContent.parse(JSON.parse(content));
+  return rows.map(({ createdAt, signature, ...row }) => {
     const animals = told.get(row.id) ?? [];
     return {
       ...row,
-      room: fishroom.name,
-      address: fishroom.address,
-      subject: subject.code,
-      issuedOn: issue.on,
       takenInOn: createdAt.slice(0, 10),
       signature: signature === 'valid' ? 'valid' : 'keyUnknown',
       fish: animals.filter(({ here }) => here === 1).map(({ fishId, code }) => ({ id: fishId, code })),
@@ -62,7 +62,11 @@ async function toldOf({ db, roomId }: Pick<Scope, 'db' | 'roomId'>) {
     .orderBy('fish.id')
     .execute();
   const bySheet = new Map<string, typeof rows>();
-  for (const row of rows) bySheet.set(row.importedSheetId, [...(bySheet.get(row.importedSheetId) ?? []), row]);
+  for (const row of rows) {
+    const known = bySheet.get(row.importedSheetId);
+    if (known) known.push(row);
+    else bySheet.set(row.importedSheetId, [row]);
+  }
   return bySheet;
 }
 

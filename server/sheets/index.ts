@@ -28,18 +28,9 @@ import { planImport } from './importPlan';
 import { toldPlan } from './importPreview';
 import { publishedKeys, rotate } from './keys';
 import { setShowsPeople, showsPeople } from './people';
+import { byToken, publicSheet } from './publicSheet';
 import { readSource } from './readSource';
-import {
-  byToken,
-  checkAddress,
-  issue,
-  preview,
-  publicSheet,
-  sheetPage,
-  sheetRows,
-  storedSheet,
-  withdraw,
-} from './sheets';
+import { checkAddress, issue, preview, sheetPage, sheetRows, storedSheet, withdraw } from './sheets';
 import { takeIn } from './takeIn';
 
 export { currentKeyId, openKey } from './keys';
@@ -111,6 +102,10 @@ export const sheets: Feature = {
     });
   },
   pages: (app, house) => {
+    app.use('/sheet', (_req, res, next) => {
+      keepFromSearch(res);
+      next();
+    });
     // Published for anyone, on any site: other installations check our sheets by them.
     app.get('/keys/:file', async (req, res) => {
       const roomId = /^([0-9a-f-]{36})\.json$/.exec(req.params.file)?.[1] ?? '';

@@ -10,7 +10,7 @@ import { Address } from '../../shared/sheets/wording';
 import { fetchOutside, NotFetched } from '../http/fetchOutside';
 import type { Scope } from '../scope';
 import { fetchedKeys, type PublishedKeys, WHY_NOT_FETCHED } from './foreignKeys';
-import { byToken } from './sheets';
+import { byToken } from './publicSheet';
 import { signatures, verifySheet } from './signing';
 
 /** A sheet as it came, with how far it can be trusted. */

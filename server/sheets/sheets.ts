@@ -1,22 +1,22 @@
 import { randomBytes } from 'node:crypto';
+import { sql } from 'kysely';
 import type * as z from 'zod/mini';
 import { notFound, Refusal } from '../../shared/refusal';
 import { SheetContent } from '../../shared/sheets/content';
-import type { checkSheetPage, readSheet, SheetDraft, SheetRow, withdrawSheet } from '../../shared/sheets/contract';
+import type { readSheet, SheetDraft, SheetRow, withdrawSheet } from '../../shared/sheets/contract';
 import { keysAddress } from '../../shared/sheets/sheetFile';
 import { audit } from '../db/audit';
 import { newId } from '../db/newId';
-import type { Db } from '../db/open';
 import { inTransaction } from '../http/serve';
-import type { Asked, Scope } from '../scope';
+import type { Scope } from '../scope';
 import { composeSheet } from './compose';
-import { currentKeyId, openKey, publishedKeys } from './keys';
+import { currentKeyId, openKey } from './keys';
 import { type SheetKey, sheetBytes, signSheet } from './signing';
 
 export const checkAddress = (origin: string, token: string): string => `${origin}/sheet/${token}`;
 
 /** "2026-0031": the year of issue, and the fishroom's running number. */
-const numberWords = (number: number, issuedOn: string): string =>
+export const numberWords = (number: number, issuedOn: string): string =>
   `${issuedOn.slice(0, 4)}-${String(number).padStart(4, '0')}`;
 
 type Which = { id?: string; thing?: 'fish' | 'brood' | undefined; thingId?: string | undefined };
@@ -39,7 +39,6 @@ export async function sheetRows({ db, roomId }: Pick<Scope, 'db' | 'roomId'>, wh
       'sheet.token',
       'sheet.fishId',
       'sheet.broodId',
-      'sheet.content',
       'sheet.issuedOn',
       'sheet.replacedAt',
       'sheet.withdrawnAt',
@@ -50,13 +49,14 @@ export async function sheetRows({ db, roomId }: Pick<Scope, 'db' | 'roomId'>, wh
       'brood.code as broodCode',
       'later.number as laterNumber',
       'later.issuedOn as laterOn',
+      sql<number>`json_extract(sheet.content, '$.subject.heads.male') + json_extract(sheet.content, '$.subject.heads.female')
+        + json_extract(sheet.content, '$.subject.heads.unsexed')`.as('heads'),
     ]);
   if (which.id) query = query.where('sheet.id', '=', which.id);
   if (which.thing && which.thingId)
     query = query.where(which.thing === 'fish' ? 'sheet.fishId' : 'sheet.broodId', '=', which.thingId);
   const rows = await query.orderBy('sheet.number', 'desc').execute();
   return rows.map((row) => {
-    const { heads } = SheetContent.parse(JSON.parse(row.content)).subject;
     return {
       id: row.id,
       number: numberWords(row.number, row.issuedOn),
@@ -66,7 +66,7 @@ export async function sheetRows({ db, roomId }: Pick<Scope, 'db' | 'roomId'>, wh
         id: row.fishId ?? row.broodId ?? '',
         code: row.fishCode ?? row.broodCode ?? 'not told apart',
       },
-      heads: heads.male + heads.female + heads.unsexed,
+      heads: row.heads,
       issuedOn: row.issuedOn,
       by: row.by,
       state: row.withdrawnAt ? 'withdrawn' : row.replacedAt ? 'replaced' : 'valid',
@@ -211,39 +211,4 @@ export async function withdraw(
     .execute();
   await audit(scope, { action: 'sheet withdrawn', about: 'sheet', aboutId: sheetId });
   return oneSheet(scope, sheetId);
-}
-
-/** By the address on the paper, for anyone; without a fishroom in the query, since the token names one row of all. */
-export async function publicSheet({ db, house }: Asked, token: string): Promise<z.input<typeof checkSheetPage.output>> {
-  const found = await byToken(db, token);
-  const row = await oneSheet({ db, roomId: found.roomId }, found.id);
-  const later = await db
-    .selectFrom('sheet')
-    .where('roomId', '=', found.roomId)
-    .where('replaces', '=', found.id)
-    .select(['token', 'number', 'issuedOn', 'linkRevokedAt'])
-    .executeTakeFirst();
-  const { origin } = house.config;
-  return {
-    jws: found.jws,
-    keysAt: keysAddress(origin, found.roomId),
-    keys: (await publishedKeys({ db, roomId: found.roomId })).keys,
-    state: row.state,
-    at: found.withdrawnAt ?? found.replacedAt,
-    because: row.withdrawnBecause,
-    replacedBy:
-      later && !later.linkRevokedAt ? { number: numberWords(later.number, later.issuedOn), token: later.token } : null,
-    checkUrl: checkAddress(origin, token),
-  };
-}
-
-/** A revoked link is as if it had never been; a withdrawn sheet still answers, and says so. */
-export async function byToken(db: Db, token: string) {
-  const found = await db
-    .selectFrom('sheet')
-    .where('token', '=', token)
-    .select(['roomId', 'id', 'jws', 'content', 'withdrawnAt', 'replacedAt', 'linkRevokedAt'])
-    .executeTakeFirst();
-  if (!found || found.linkRevokedAt) throw notFound('That sheet');
-  return found;
 }

@@ -394,6 +394,17 @@ describe('names of animals', () => {
     expect(inbreeding(nodes).get(next.fish[0]?.id ?? '')).toBeCloseTo(duboisi.inbreeding?.f ?? Number.NaN, 12);
   });
 
+  test('of a possible hybrid come in without a strain, and with their ancestors all the same', async () => {
+    const room = await roomIn(fennel.app);
+    const kinds = ['Tropheus duboisi', 'Tropheus moorii'].map((scientific) => ({ scientific, locality: null }));
+    const source = await invented((content) => ({ ...content, strain: { claim: 'possibleHybrid', kinds } }));
+    expect(await look(room, source)).toMatchObject({ strains: [], newStrain: null, refused: null });
+    const { fish, ancestors } = await taken(room, source);
+    expect(ancestors).toBe(duboisi.ancestry.length - 1);
+    const page = await room.owner.get(readFish, { params: { roomId: room.roomId, fishId: fish[0]?.id ?? '' } });
+    expect([page.fish.strainId, page.lot, page.fish.tank?.code]).toEqual([null, null, 'Q1']);
+  });
+
   test('two sheets that make a fish its own ancestor are not both taken in, and nothing of the second is', async () => {
     const room = await roomIn(fennel.app);
     const id = (roomId: string) => animalId(roomId, '01900000-0000-7000-8000-0000000000f1');

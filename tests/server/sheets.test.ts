@@ -99,7 +99,11 @@ describe('a sheet', () => {
     const first = await issue();
     const second = await issue({ replaces: first.id, because: 'A sire was left out' });
     const page = await app.person().get(checkSheetPage, { params: { token: first.token } });
-    expect(page).toMatchObject({ state: 'replaced', replacedBy: { number: second.number, token: second.token } });
+    expect(page).toMatchObject({
+      state: 'replaced',
+      because: 'A sire was left out',
+      replacedBy: { number: second.number, token: second.token },
+    });
     const again = await owner.ask(issueSheet, {
       params: { roomId },
       body: { thing: 'brood', subjectId: brood.broodId, heads: 6, replaces: first.id, because: null },
@@ -204,6 +208,8 @@ describe('what a sheet tells of people', () => {
     const answer = await app.person().ask(checkSheetPage, { params: { token: row.token } });
     expect(answer.headers.get('x-robots-tag')).toBe('noindex');
     expect(answer.headers.get('referrer-policy')).toBe('no-referrer');
+    const html = await app.person().raw('GET', `/sheet/${row.token}`);
+    expect([html.headers.get('x-robots-tag'), html.headers.get('referrer-policy')]).toEqual(['noindex', 'no-referrer']);
     const { content } = await owner.get(readSheet, { params: { roomId, sheetId: row.id } });
     const ids = content.ancestry.map(({ id }) => id.split('/')[1]).sort();
     // The brood, its dam, and the two males; the five other females of the colony have no place on it.
