@@ -1,18 +1,22 @@
-import { StyleSheet, View } from 'react-native';
+import { Text as NativeText, StyleSheet, View } from 'react-native';
 import { line } from '@/components/theme/space';
-import { useTheme } from '@/components/theme/ThemeProvider';
-import { Press } from '@/components/ui/Press';
-import { Text } from '@/components/ui/Text';
+import type { Theme } from '@/components/theme/theme';
+import { family } from '@/components/theme/type';
 import type { KinFish } from './KinshipTable';
+import type { KinshipSizes } from './kinshipSizes';
 import { kinshipWord } from './kinshipWord';
 
 export type KinshipValue = {
-  /** Expected F of the young, 0 to 1. */
+  /** Kinship, which is the expected F of their young, 0 to 1; of a fish with itself (1 + F) / 2. */
   f: number;
-  /** How much of both pedigrees is known, 0 to 1: a low F from an unknown pedigree is not a low F. */
-  known: number;
-  /** No pair: same sex, or it cannot breed. */
+  /** How far back the shallower of both pedigrees is known: "1.5 gen", "wild", "none". A low F from an unknown pedigree is not a low F. */
+  known: string;
+  /** The same read aloud. */
+  knownSaid: string;
+  /** No pair: same sex. */
   dim?: boolean;
+  /** A fish with itself. */
+  self?: boolean;
 };
 
 /** As unrelated as second cousins' young or less; as close as full sibs' young. */
@@ -24,66 +28,83 @@ const PX_PER_F = 133;
 type Props = {
   down: KinFish;
   across: KinFish;
-  value: KinshipValue | null;
+  value: KinshipValue;
   limit: number;
+  theme: Theme;
   picked: boolean;
-  onPick: (down: KinFish, across: KinFish) => void;
-  small: boolean;
+  reachable: boolean;
+  row: number;
   column: number;
-  place: { left: number; width: number; height: number };
+  left: number;
+  sizes: KinshipSizes;
 };
 
-/** Figure, bar, and how much is known behind it. */
-export function KinshipCell({ down, across, value, limit, picked, onPick, small, column, place }: Props) {
-  const theme = useTheme();
-  const frame = [styles.cell, place, { borderLeftColor: theme.rule }];
-  if (!value)
-    return (
-      <View role="cell" aria-colindex={column} style={[frame, styles.self, { backgroundColor: theme.well }]}>
-        <Text size="label" tone="soft">
-          {SAME}
-        </Text>
-      </View>
-    );
-  const { f, known, dim = false } = value;
-  const over = f >= limit && !dim;
-  const bold = f < LOW && !dim;
-  const height = Math.max(2, Math.min(place.height - 8, f * PX_PER_F));
-  const fill = dim ? theme.rule : over ? theme.trouble : theme.stage.subadult;
-  const percent = `${Math.round(known * 100)} %`;
+/**
+ * Figure, bar, and how much is known behind it. There are hundreds of them, drawn anew with every letter of a search: plain
+ * views, pressed by way of the table.
+ */
+export function KinshipCell(props: Props) {
+  const { value, limit, theme, picked, reachable, row, column, left, sizes } = props;
+  const { f, known, dim = false, self = false } = value;
+  const quiet = dim || self;
+  const over = f >= limit && !quiet;
+  const bold = f < LOW && !quiet;
+  const height = Math.max(2, Math.min(sizes.row - 9, f * PX_PER_F));
+  const fill = quiet ? theme.rule : over ? theme.trouble : theme.stage.subadult;
   return (
-    <View role="cell" aria-colindex={column} style={frame}>
-      <Press
+    <View
+      role="cell"
+      aria-colindex={column + 2}
+      style={[
+        styles.cell,
+        { left, width: sizes.column, height: sizes.row - 1, borderLeftColor: theme.rule },
+        self ? { backgroundColor: theme.well } : null,
+      ]}
+    >
+      <View
+        role="button"
         aria-pressed={picked}
-        aria-label={`${across.code} with ${down.code}: F ${f.toFixed(3)}, ${percent} of the pedigree known${over ? ', at or over your limit' : ''}`}
-        tabIndex={dim ? -1 : 0}
-        onPress={() => onPick(down, across)}
+        aria-label={said(props, over)}
+        tabIndex={reachable ? 0 : -1}
+        dataSet={{ cell: `${row} ${column}` }}
         style={[styles.press, picked ? { borderWidth: 3, borderColor: theme.ink } : null]}
       >
-        <View style={[styles.bar, { height, width: small ? 5 : 7, backgroundColor: fill }]} />
-        {f >= FULL_SIBS && !dim ? <View style={[styles.triangle, { borderBottomColor: theme.trouble }]} /> : null}
-        <Text size={small ? 'label' : 'body'} strong={bold} tone={dim ? 'faint' : bold ? 'ink' : 'soft'} align="right">
+        <View style={[styles.bar, { height, backgroundColor: fill }]} />
+        {f >= FULL_SIBS && !quiet ? <View style={[styles.triangle, { borderBottomColor: theme.trouble }]} /> : null}
+        <NativeText style={[bold ? styles.boldFigure : styles.figure, { color: bold ? theme.ink : theme.ink2 }]}>
           {kinshipWord(f)}
-        </Text>
-        <Text size="label" tone="faint" align="right">
-          {percent}
-        </Text>
-      </Press>
+        </NativeText>
+        <NativeText style={[styles.known, { color: theme.ink2 }]}>{known}</NativeText>
+      </View>
     </View>
   );
 }
 
-const SAME = '–';
+function said({ down, across, value }: Props, over: boolean): string {
+  const whom = value.self ? `${down.code} with itself` : `${across.code} with ${down.code}`;
+  const notes = `${over ? ', at or over the limit' : ''}${value.dim ? ', no pair' : ''}`;
+  return `${whom}: kinship ${value.f.toFixed(3)}${notes}, ${value.knownSaid}`;
+}
+
+const figure = {
+  fontFamily: family.text,
+  fontSize: 18,
+  lineHeight: 22,
+  textAlign: 'right',
+  fontVariant: ['tabular-nums'],
+} as const;
 
 const styles = StyleSheet.create({
   cell: { position: 'absolute', top: 0, borderLeftWidth: line.row },
-  self: { alignItems: 'center', justifyContent: 'center' },
-  press: { flexGrow: 1, justifyContent: 'center', paddingRight: 6 },
-  bar: { position: 'absolute', left: 3, bottom: 2 },
+  press: { flexGrow: 1, justifyContent: 'center', paddingRight: 6, cursor: 'pointer' },
+  bar: { position: 'absolute', left: 3, bottom: 2, width: 7 },
+  figure: { ...figure, fontVariant: ['tabular-nums'] },
+  boldFigure: { ...figure, fontVariant: ['tabular-nums'], fontWeight: '700' },
+  known: { fontFamily: family.text, fontSize: 13, lineHeight: 16, textAlign: 'right' },
   triangle: {
     position: 'absolute',
-    right: 6,
-    top: 2,
+    left: 14,
+    top: 5,
     width: 0,
     height: 0,
     borderLeftWidth: 5,

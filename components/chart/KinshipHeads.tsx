@@ -38,6 +38,7 @@ export function KinshipColumnHeads({ columns, sizes, width }: HeadsProps) {
           key={fish.id}
           role="columnheader"
           aria-colindex={index + 2}
+          aria-label={fish.code}
           style={[styles.column, { left, width: sizes.column, height, borderLeftColor: theme.rule }]}
         >
           <FishHead fish={fish} stacked={sizes.stacked} />
@@ -53,10 +54,16 @@ export function KinshipRowHead({ fish, sizes }: { fish: KinFish; sizes: KinshipS
   return (
     <View
       role="rowheader"
+      aria-label={fish.note ? `${fish.code}, ${fish.note}` : fish.code}
       dataSet={{ stick: 'left' }}
       style={[styles.row, { width: sizes.rowHead, height: sizes.row - 1, backgroundColor: theme.ground }]}
     >
       <FishHead fish={fish} stacked={false} />
+      {fish.note ? (
+        <Text size="label" tone="soft" whole>
+          {fish.note}
+        </Text>
+      ) : null}
     </View>
   );
 }
@@ -66,7 +73,7 @@ function FishHead({ fish, stacked }: { fish: KinFish; stacked: boolean }) {
     <View style={stacked ? styles.stacked : styles.beside}>
       <SexShape sex={fish.sex} possible={fish.possible} size={13} />
       <Code size="label" cut style={styles.code}>
-        {fish.code}
+        {fish.short}
       </Code>
     </View>
   );

@@ -26,7 +26,7 @@ export function LineageGraphScreen() {
             <Suspense fallback={<Loading label="Drawing the lineage" rows={4} />}>
               <LineageGraph
                 key={scope.value}
-                label={`Lineage of ${scope.code}`}
+                label={`Lineage of ${scope.said}`}
                 shown={withAncestors(nodes, living)}
                 all={nodes}
                 selected={null}

@@ -1,6 +1,6 @@
 import type { LineageNode } from '@/shared/lineage/contract';
 import { generationNumbers } from '@/shared/lineage/generations';
-import { parentShares } from '@/shared/lineage/parentShares';
+import { isPossibleParent, parentShares } from '@/shared/lineage/parentShares';
 import type { PedigreeEntry } from '@/shared/lineage/pedigree';
 import { joinOr, shareWords } from '@/shared/sheets/sayings';
 
@@ -38,7 +38,7 @@ export function saidOf(node: LineageNode, byId: ReadonlyMap<string, LineageNode>
   const side = (which: 'sire' | 'dam') => {
     const own = shares.filter((one) => one.side === which && one.id !== null);
     if (own.length === 0) return null;
-    const certain = own.length === 1 && (own[0]?.share ?? 0) > 1 - 1e-9;
+    const certain = own.length === 1 && !isPossibleParent(own[0]?.share ?? 0);
     const names = own.map(({ id, share }) => {
       const parent = byId.get(id ?? '');
       const name = parent ? nameOf(parent) : 'one not shown';

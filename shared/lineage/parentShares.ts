@@ -5,6 +5,9 @@ export type Side = 'sire' | 'dam';
 /** One possible parent of an entry and its chance; `id` null is all that is not known of that side. */
 export type ParentShare = { side: Side; id: string | null; share: number };
 
+/** A share that misses 1 by rounding only is certain. */
+export const isPossibleParent = (share: number): boolean => share < 1 - 1e-9;
+
 /** Every possible parent of an entry, each named once a side; the shares of a side sum to 1. */
 export function parentShares(entry: PedigreeEntry): ParentShare[] {
   const pairs = pairsOf(entry);

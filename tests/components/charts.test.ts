@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { kinshipSizes } from '@/components/chart/kinshipSizes';
+import { cellBeside } from '@/components/chart/kinshipSteps';
 import { kinshipWord } from '@/components/chart/kinshipWord';
 import { monthTicks, niceTicks, straight, tickWord } from '@/components/chart/scale';
 import { shareWord } from '@/components/chart/shareWord';
@@ -60,9 +61,24 @@ describe('figures', () => {
   });
 
   test('long codes go under their shape before they are cut', () => {
-    const fish = (code: string) => [{ id: code, code, sex: 'male' as const }];
-    expect(kinshipSizes(fish('A04'), fish('A03'), false).stacked).toBe(false);
-    expect(kinshipSizes(fish('DUMA-A04'), fish('A03'), false).stacked).toBe(true);
+    const fish = (code: string) => [{ id: code, code, short: code, sex: 'male' as const }];
+    expect(kinshipSizes(fish('A04'), fish('A03')).stacked).toBe(false);
+    expect(kinshipSizes(fish('DUMA-A04'), fish('A03')).stacked).toBe(true);
+  });
+});
+
+describe('walking a kinship table', () => {
+  const table = { rows: 3, columns: 4 };
+  test('arrow keys go to the cell beside, and stop at the edge', () => {
+    expect(cellBeside({ row: 0, column: 0 }, 'ArrowDown', table)).toEqual({ row: 1, column: 0 });
+    expect(cellBeside({ row: 2, column: 3 }, 'ArrowLeft', table)).toEqual({ row: 2, column: 2 });
+    expect(cellBeside({ row: 2, column: 3 }, 'ArrowRight', table)).toBeNull();
+    expect(cellBeside({ row: 0, column: 0 }, 'ArrowUp', table)).toBeNull();
+  });
+  test('Home and End go along the row; other keys nowhere', () => {
+    expect(cellBeside({ row: 1, column: 2 }, 'Home', table)).toEqual({ row: 1, column: 0 });
+    expect(cellBeside({ row: 1, column: 2 }, 'End', table)).toEqual({ row: 1, column: 3 });
+    expect(cellBeside({ row: 1, column: 2 }, 'a', table)).toBeNull();
   });
 });
 

@@ -1,0 +1,5 @@
+import { KinshipScreen } from '@/features/lineage/KinshipScreen';
+
+export default function Kinship() {
+  return <KinshipScreen />;
+}
