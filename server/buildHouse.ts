@@ -7,6 +7,7 @@ import { keepStatistics, migrateToLatest, openFile } from './db/open';
 import type { House } from './house';
 import { openMailer } from './mail';
 import { openSink } from './mail/sink';
+import { openPayments } from './payments';
 import { openPictures } from './pictures';
 
 /** Opens everything the server is made of, and says how to close it again. */
@@ -21,11 +22,13 @@ export async function buildHouse(config: Config, clock: House['clock'] = { now: 
   const sink = config.smtpUrl ? null : await openSink();
   const mailer = openMailer(config.smtpUrl ?? sink?.url ?? '', config.mailFrom);
   const pictures = await openPictures({ folder: config.uploadsFolder, maxBytes: 25_000_000, crashAt: config.crashAt });
-  const house: House = { config, db, log, clock, mailer, sink, pictures, demoWords: '' };
+  const { payments, standIn } = await openPayments(config, clock);
+  const house: House = { config, db, log, clock, mailer, sink, payments, standIn, pictures, demoWords: '' };
   const close = async () => {
     await keepStatistics(db);
     mailer.close();
     await sink?.close();
+    await standIn?.close();
     await db.destroy();
     unlock();
   };

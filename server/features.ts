@@ -12,6 +12,7 @@ import type { Serve } from './http/serve';
 import { letters } from './letters';
 import { lineage } from './lineage';
 import { members } from './members';
+import { orders } from './orders';
 import { photos } from './photos';
 import { record } from './record';
 import { rooms } from './rooms';
@@ -51,6 +52,7 @@ export const features: Feature[] = [
   today,
   lineage,
   sheets,
+  orders,
   record,
   demo,
 ];

@@ -19,16 +19,17 @@ export type Asked = {
 
 export type SignedIn = Asked & { accountId: string; sessionId: string };
 
-/** A member at work in a fishroom. Every query of a fishroom starts from here. */
-export type Scope = SignedIn & {
+/** A fishroom, whoever asks: its members, a buyer by a link, the card service. */
+export type RoomAsked = Asked & {
   roomId: string;
-  actorId: string;
-  role: Role;
   timeZone: string;
   currency: string;
   /** The fishroom's calendar day. */
   today: string;
 };
+
+/** A member at work in a fishroom. Every query of a fishroom starts from here. */
+export type Scope = SignedIn & RoomAsked & { actorId: string; role: Role };
 
 export function mustBeAllowed(
   scope: { role: Role },

@@ -1,11 +1,11 @@
 import { headCountOf } from '../../shared/broods/headCount';
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 import { linesOf } from './ledger';
 import { sharesOf, sourcesOf } from './sources';
 
 /** Heads of a brood today, those reserved, and what is left. Of a mixed batch the brood has its share, rounded down. */
 export async function availableOf(
-  scope: Scope,
+  scope: RoomAsked,
   broodId: string,
 ): Promise<{ heads: number; reserved: number; available: number }> {
   const { db, roomId } = scope;
@@ -31,7 +31,7 @@ export async function availableOf(
 }
 
 /** Heads under a reservation that is still in force: not freed, and not past its time. */
-export async function reservedOf({ db, roomId, now }: Scope, broodId: string): Promise<number> {
+export async function reservedOf({ db, roomId, now }: RoomAsked, broodId: string): Promise<number> {
   const row = await db
     .selectFrom('reservation')
     .where('roomId', '=', roomId)

@@ -6,7 +6,7 @@ import { grouped } from '../../shared/grouped';
 import { notFound, Refusal } from '../../shared/refusal';
 import { audit } from '../db/audit';
 import { parentagesOf } from '../lineage';
-import type { Scope } from '../scope';
+import type { RoomAsked, Scope } from '../scope';
 import { speciesNames } from '../species';
 import { keepBroodCode } from './begin';
 import { type Line, linesOf } from './ledger';
@@ -16,7 +16,7 @@ type Told = z.input<typeof BroodRow>;
 type BatchOf = z.input<typeof BatchTold>;
 
 /** Broods with what their ledgers and samples say; all of them, or those with heads or eggs here. */
-export async function broodRows(scope: Scope, which: { ids?: string[]; hereOnly?: boolean } = {}): Promise<Told[]> {
+export async function broodRows(scope: RoomAsked, which: { ids?: string[]; hereOnly?: boolean } = {}): Promise<Told[]> {
   const rows = await rowsOf(scope, which);
   const batches = await batchesOf(
     scope,
@@ -66,7 +66,7 @@ export async function broodRows(scope: Scope, which: { ids?: string[]; hereOnly?
   return which.hereOnly ? told.filter(({ heads, opened }) => heads > 0 || opened === null) : told;
 }
 
-function rowsOf({ db, roomId }: Scope, { ids, hereOnly }: { ids?: string[]; hereOnly?: boolean }) {
+function rowsOf({ db, roomId }: RoomAsked, { ids, hereOnly }: { ids?: string[]; hereOnly?: boolean }) {
   let query = db
     .selectFrom('brood')
     .leftJoin('strain', (join) =>
@@ -132,7 +132,7 @@ function countsOf(broodId: string, batches: BatchOf[]) {
 }
 
 /** The batches that some broods swim or swam in, with their ledgers. */
-export async function batchesOf(scope: Scope, broodIds: string[]): Promise<BatchOf[]> {
+export async function batchesOf(scope: RoomAsked, broodIds: string[]): Promise<BatchOf[]> {
   const { db, roomId } = scope;
   if (broodIds.length === 0) return [];
   const rows = await db
@@ -193,7 +193,7 @@ export async function oneBatch(scope: Scope, batchId: string): Promise<BatchOf> 
   return batch;
 }
 
-async function reservedByBrood({ db, roomId, now }: Scope): Promise<Map<string, number>> {
+async function reservedByBrood({ db, roomId, now }: RoomAsked): Promise<Map<string, number>> {
   const rows = await db
     .selectFrom('reservation')
     .where('roomId', '=', roomId)
@@ -210,7 +210,7 @@ const FEW = 600;
 
 /** The last sample of broods and batches, by their ids. */
 async function lastSamples(
-  { db, roomId }: Scope,
+  { db, roomId }: RoomAsked,
   ids: string[],
 ): Promise<Map<string, NonNullable<Told['lastSample']>>> {
   let query = db
@@ -240,7 +240,7 @@ async function lastSamples(
   return new Map(rows.map(({ broodId, batchId, ...sample }) => [broodId ?? batchId ?? '', sample]));
 }
 
-export async function oneBrood(scope: Scope, broodId: string): Promise<Told> {
+export async function oneBrood(scope: RoomAsked, broodId: string): Promise<Told> {
   const [brood] = await broodRows(scope, { ids: [broodId] });
   if (!brood) throw notFound('That brood');
   return brood;

@@ -4,12 +4,12 @@ import { type HeadCountInFull, headCountOf, NotEnoughHeads } from '../../shared/
 import type { HeadKind, LossCause } from '../../shared/broods/headEntry';
 import { Refusal } from '../../shared/refusal';
 import { newId } from '../db/newId';
-import type { Scope } from '../scope';
+import type { RoomAsked, Scope } from '../scope';
 
 export type Line = HeadLine & { batchId: string };
 
 /** The stored lines of some batches, oldest first. Balances are replays of these, never stored. */
-export async function linesOf({ db, roomId }: Scope, batchIds?: string[]): Promise<Line[]> {
+export async function linesOf({ db, roomId }: RoomAsked, batchIds?: string[]): Promise<Line[]> {
   if (batchIds?.length === 0) return [];
   let query = db
     .selectFrom('headEntry')

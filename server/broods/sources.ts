@@ -1,4 +1,4 @@
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 
 export type Source = { broodId: string; code: string; strainId: string | null; spawnLatest: string; heads: number };
 
@@ -9,7 +9,7 @@ type Row = Source & { batchId: string; fromDay: string; id: string; entryId: str
  * force is the last one made by then; undoing a joining brings back the one before.
  */
 export async function sourcesOf(
-  { db, roomId }: Scope,
+  { db, roomId }: RoomAsked,
   batchIds: string[],
   onDay = '9999-12-31',
 ): Promise<Map<string, Source[]>> {

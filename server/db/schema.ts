@@ -453,6 +453,7 @@ type PaymentTable = {
   needsRefund: Generated<0 | 1>;
   note: string | null;
   actorId: string | null;
+  refunds: string | null;
 };
 
 type PhotoTable = {
@@ -517,6 +518,17 @@ type PurchaseLineTable = {
   heads: number;
   cents: number;
   note: string | null;
+  lostHeads: Generated<number>;
+  returnedHeads: Generated<number>;
+};
+
+type ReceiptTable = {
+  roomId: string;
+  id: string;
+  purchaseId: string;
+  content: string;
+  issuedOn: string;
+  createdAt: string;
 };
 
 type RecoveryCodeTable = {
@@ -803,6 +815,7 @@ export type Database = {
   photo: PhotoTable;
   purchase: PurchaseTable;
   purchaseLine: PurchaseLineTable;
+  receipt: ReceiptTable;
   recoveryCode: RecoveryCodeTable;
   request: RequestTable;
   reservation: ReservationTable;

@@ -1,6 +1,6 @@
-import { randomBytes } from 'node:crypto';
 import { addDays } from '../../shared/days';
 import { newId } from '../db/newId';
+import { hashOfToken, tokenOf } from '../mail/tokens';
 import type { Loading } from './load';
 import type { Order } from './scenario/shape';
 
@@ -68,7 +68,7 @@ async function buyersAndListings({ db, scenario, roomId, idOf, nowMs }: Loading)
   }
 }
 
-async function oneOrder({ db, roomId, idOf }: Loading, order: Order): Promise<void> {
+async function oneOrder({ house, db, roomId, idOf }: Loading, order: Order): Promise<void> {
   const at = `${order.madeOn}T10:00:00.000Z`;
   const id = idOf(order.key);
   const { number, state, handOverAt, depositCents, cancelledBecause } = order;
@@ -84,7 +84,7 @@ async function oneOrder({ db, roomId, idOf }: Loading, order: Order): Promise<vo
       state,
       depositCents,
       note: null,
-      tokenHash: randomBytes(32).toString('hex'),
+      tokenHash: hashOfToken(tokenOf(house.config, id)),
       agreedTime: handOverAt,
       termsText: null,
       cancelledBecause,

@@ -2,6 +2,7 @@ import { dayWords } from '../../shared/days';
 import { EXIT_WORDS } from '../../shared/fish/contract';
 import { Refusal } from '../../shared/refusal';
 import { newId } from '../db/newId';
+import type { Database } from '../db/schema';
 import type { KindRules } from '../record/kinds';
 import type { Scope } from '../scope';
 import { addFinding, joinColony, keepCode, leaveColony, mustBeOurs, oneFish } from './fish';
@@ -65,14 +66,7 @@ export const fishKinds: Pick<KindRules, Kinds> = {
   },
   fishLeft: {
     async store(scope, { fishId, onDay, how, cause, note }, { entryId }) {
-      await livingOurs(scope, fishId);
-      const { db, roomId, now } = scope;
-      await db
-        .insertInto('fishExit')
-        .values({ roomId, id: newId(now), fishId, kind: how, onDay, cause, mergedInto: null, note, entryId })
-        .execute();
-      await leaveColony(scope, { fishId, onDay, entryId });
-      await endStay(scope, 'fishId', fishId, onDay, entryId);
+      await letLeave(scope, { fishId, onDay, kind: how, cause, note, entryId });
       return { onDay, about: [{ thing: 'fish', id: fishId }] };
     },
     say: ({ fishId, how, cause }, codes) =>
@@ -100,6 +94,27 @@ export const fishKinds: Pick<KindRules, Kinds> = {
     say: ({ id, toTankId, thing }, codes) => `${thing === 'batch' ? 'Batch' : codes(id)} moved to ${codes(toTankId)}`,
   },
 };
+
+type Leaving = {
+  fishId: string;
+  onDay: string;
+  kind: Database['fishExit']['kind'];
+  cause: string | null;
+  note: string | null;
+  entryId: string | null;
+};
+
+/** A fish leaves the fishroom: its colony, its tank, and the living. */
+export async function letLeave(scope: Scope, { fishId, onDay, kind, cause, note, entryId }: Leaving): Promise<void> {
+  await livingOurs(scope, fishId);
+  const { db, roomId, now } = scope;
+  await db
+    .insertInto('fishExit')
+    .values({ roomId, id: newId(now), fishId, kind, onDay, cause, mergedInto: null, note, entryId })
+    .execute();
+  await leaveColony(scope, { fishId, onDay, entryId });
+  await endStay(scope, 'fishId', fishId, onDay, entryId);
+}
 
 async function livingOurs(scope: Scope, fishId: string) {
   await mustBeOurs(scope, 'fish', fishId, 'fishId', 'Choose a fish');

@@ -1,7 +1,7 @@
 import type { Feature } from '../features';
 import { fishRoutes } from './routes';
 
-export { endStay, startStay } from './entries';
+export { endStay, letLeave, startStay } from './entries';
 export { addFinding, addFounders, freeCodes, joinColony, keepCode, leaveColony, mustBeOurs, oneFish } from './fish';
 export { fishRows } from './rows';
 

@@ -1,7 +1,7 @@
 import type { Request, RequestHandler, Response, Router } from 'express';
 import type * as z from 'zod/mini';
 import type { AnyEndpoint, Endpoint } from '../../shared/endpoint';
-import type { Asked, Scope, SignedIn } from '../scope';
+import type { Asked, RoomAsked, Scope, SignedIn } from '../scope';
 import { answerJson, isUnchanged } from './answer';
 import { parseInput } from './parseInput';
 import { askedOf, roomScope, signedInOf } from './whoAsks';
@@ -104,7 +104,7 @@ export function serveOn(router: Router) {
 }
 
 /** Runs a rule inside one write transaction of its fishroom. */
-export function inTransaction<S extends Scope, T>(scope: S, rule: (inside: S) => Promise<T>): Promise<T> {
+export function inTransaction<S extends RoomAsked, T>(scope: S, rule: (inside: S) => Promise<T>): Promise<T> {
   return scope.db.transaction().execute(async (db) => {
     const result = await rule({ ...scope, db });
     await db

@@ -72,7 +72,10 @@ async function mustBeFishOfOurs({ db, roomId }: Scope, draft: ParentageDraft): P
 }
 
 /** The parentages in force, by root. */
-export async function parentagesOf({ db, roomId }: Scope, rootIds?: string[]): Promise<Map<string, ParentageTold>> {
+export async function parentagesOf(
+  { db, roomId }: Pick<Scope, 'db' | 'roomId'>,
+  rootIds?: string[],
+): Promise<Map<string, ParentageTold>> {
   let query = db
     .selectFrom('parentage')
     .where('parentage.roomId', '=', roomId)

@@ -1,2 +1,3 @@
 export { labelsPdf } from './labelsPdf';
+export { receiptPdf } from './receiptPdf';
 export { sheetPdf } from './sheetPdf';

@@ -5,6 +5,7 @@ import { grouped } from '../../shared/grouped';
 import type { TankToday, TodayFacts } from '../../shared/today/facts';
 import { batchesOf, broodRows } from '../broods';
 import { holdRows } from '../holds';
+import { ordersToday } from '../orders';
 import type { Scope } from '../scope';
 import { speciesSeen } from '../species';
 import { allTanks } from '../tanks';
@@ -40,7 +41,7 @@ export async function todayFacts(scope: Scope): Promise<Told> {
     tanks: tanksToday,
     care: care.filter(({ kind }) => kind === 'treatment' || kind === 'quarantine'),
     species: await speciesSeen(scope, [...speciesIds]),
-    orders: [],
+    orders: await ordersToday(scope),
     tasks: await taskRows(scope),
     failedLetters: scope.role === 'owner' ? await failedLetters(scope) : 0,
     females: await femaleCount(scope),

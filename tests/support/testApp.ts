@@ -69,6 +69,7 @@ export async function testApp(changes: Partial<Config> = {}, log?: House['log'])
   await new Promise<void>((ready) => server.listen(0, '127.0.0.1', ready));
   const { port } = server.address() as AddressInfo;
   const origin = `http://127.0.0.1:${port}`;
+  if (house.standIn) house.standIn.deliverTo = `${origin}/webhooks/stripe`;
   return {
     house,
     origin,
