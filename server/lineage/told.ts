@@ -22,52 +22,55 @@ export type ToldAnimal = {
 type InRoom = Pick<Scope, 'db' | 'roomId'>;
 
 /** Everything that sheets from elsewhere tell of the fish here and their ancestors, by fish. */
-export async function toldAnimals({ db, roomId }: InRoom): Promise<Map<string, ToldAnimal>> {
+export async function toldAnimals(scope: InRoom): Promise<Map<string, ToldAnimal>> {
+  const { db, roomId } = scope;
   const rows = await db
     .selectFrom('toldFish')
-    .innerJoin('importedSheet as source', (join) =>
-      join.onRef('source.roomId', '=', 'toldFish.roomId').onRef('source.id', '=', 'toldFish.importedSheetId'),
-    )
-    .leftJoin('foreignFish', (join) =>
-      join.onRef('foreignFish.roomId', '=', 'toldFish.roomId').onRef('foreignFish.fishId', '=', 'toldFish.fishId'),
-    )
-    .where('toldFish.roomId', '=', roomId)
-    .select(({ eb, fn }) => [
-      'toldFish.fishId',
-      'toldFish.here',
-      'toldFish.entry',
-      'source.id as importId',
-      'source.issuer',
-      'source.number',
-      'source.signature',
-      'foreignFish.issuer as namedBy',
-      'foreignFish.foreignId',
-      fn<string>('json_extract', ['source.content', eb.val('$.fishroom.name')]).as('room'),
-      fn<string>('json_extract', ['source.content', eb.val('$.issue.on')]).as('issuedOn'),
-    ])
+    .where('roomId', '=', roomId)
+    .select(['fishId', 'here', 'entry', 'importedSheetId'])
     .execute();
+  if (rows.length === 0) return new Map();
+  const sheets = await sheetsTold(scope);
+  const nameOf = new Map([...(await foreignNames(scope))].map(([name, fishId]) => [fishId, name]));
   return new Map(
-    rows.map((row): [string, ToldAnimal] => {
-      const entry: AncestryEntry = JSON.parse(row.entry);
-      const checked = row.signature === 'valid';
+    rows.flatMap(({ fishId, here, entry: text, importedSheetId }): [string, ToldAnimal][] => {
+      const sheet = sheets.get(importedSheetId);
+      if (!sheet) return [];
+      const entry: AncestryEntry = JSON.parse(text);
+      const checked = sheet.signature === 'valid';
       const bredBy = splitAnimalId(entry.id)?.roomId;
-      return [
-        row.fishId,
-        {
-          fishId: row.fishId,
-          name: row.namedBy && row.foreignId ? animalId(row.namedBy, row.foreignId) : null,
-          here: row.here === 1,
-          room: entry.room ?? (bredBy === row.issuer ? row.room : `by ${row.room}’s sheet`),
-          entry,
-          rank: rankOf(entry.id, { issuer: row.issuer, checked }),
-          issuedOn: row.issuedOn,
-          importId: row.importId,
-          number: row.number,
-          signature: checked ? 'valid' : 'keyUnknown',
-        },
-      ];
+      const animal: ToldAnimal = {
+        fishId,
+        name: nameOf.get(fishId) ?? null,
+        here: here === 1,
+        room: entry.room ?? (bredBy === sheet.issuer ? sheet.room : `by ${sheet.room}’s sheet`),
+        entry,
+        rank: rankOf(entry.id, { issuer: sheet.issuer, checked }),
+        issuedOn: sheet.issuedOn,
+        importId: importedSheetId,
+        number: sheet.number,
+        signature: checked ? 'valid' : 'keyUnknown',
+      };
+      return [[fishId, animal]];
     }),
   );
+}
+
+/** The sheets themselves, apart from their animals: a content of megabytes is read once, not for each of its ancestors. */
+async function sheetsTold({ db, roomId }: InRoom) {
+  const rows = await db
+    .selectFrom('importedSheet')
+    .where('roomId', '=', roomId)
+    .select(({ eb, fn }) => [
+      'id',
+      'issuer',
+      'number',
+      'signature',
+      fn<string>('json_extract', ['content', eb.val('$.fishroom.name')]).as('room'),
+      fn<string>('json_extract', ['content', eb.val('$.issue.on')]).as('issuedOn'),
+    ])
+    .execute();
+  return new Map(rows.map((row) => [row.id, row]));
 }
 
 /** What the fishroom makes of names that others gave. */

@@ -405,6 +405,17 @@ describe('names of animals', () => {
     expect([page.fish.strainId, page.lot, page.fish.tank?.code]).toEqual([null, null, 'Q1']);
   });
 
+  test('a sheet with a thousand ancestors comes in whole; one beyond all bounds is refused as too large', async () => {
+    const room = await roomIn(fennel.app);
+    const more = Array.from({ length: 1000 }, (_, i) => wild(1000 + i, `W${i}`, i % 2 ? 'male' : 'female'));
+    const source = await invented((content) => ({ ...content, ancestry: [...content.ancestry, ...more] }));
+    const { ancestors } = await taken(room, source, newStrain('DUMA'));
+    expect(ancestors).toBe(duboisi.ancestry.length - 1 + 1000);
+    const over = { ...source, jws: 'a'.repeat(7_000_000) };
+    const answer = await room.owner.ask(previewImport, { params: { roomId: room.roomId }, body: { source: over } });
+    expect(answer.status).toBe(413);
+  });
+
   test('two sheets that make a fish its own ancestor are not both taken in, and nothing of the second is', async () => {
     const room = await roomIn(fennel.app);
     const id = (roomId: string) => animalId(roomId, '01900000-0000-7000-8000-0000000000f1');
