@@ -1,4 +1,4 @@
-// One entry for npm start, dev, build, test, check and bench. Node's own modules only, so that it runs on a fresh clone.
+// One entry for npm start, dev, build, test, check, bench and the upkeep commands. Node's own modules only, so that it runs on a fresh clone.
 import { spawn, spawnSync } from 'node:child_process';
 import { createHash } from 'node:crypto';
 import { existsSync, mkdirSync, readdirSync, readFileSync, statSync, writeFileSync } from 'node:fs';
@@ -183,6 +183,8 @@ else if (task === 'start') {
   env.ORIGIN = process.env.ORIGIN;
   hold([serve(true), spawn(bin('expo'), ['start', '--web', '--port', port], { stdio: 'inherit', env })]);
 } else if (task === 'check') conclude(checks());
+else if (['backup', 'restore', 'doctor'].includes(task))
+  run(process.execPath, ['--import', 'tsx', 'server/command.ts', ...process.argv.slice(2)]);
 else if (task === 'bench') run(process.execPath, ['--import', 'tsx', 'scripts/bench.ts', ...process.argv.slice(3)]);
 else if (task === 'journeys' || task === 'test') {
   browser();
@@ -190,6 +192,6 @@ else if (task === 'journeys' || task === 'test') {
   build();
   conclude(...before, vitest('journeys'));
 } else {
-  console.error('usage: node scripts/run.mjs start|dev|build|check|test|journeys|bench');
+  console.error('usage: node scripts/run.mjs start|dev|build|check|test|journeys|bench|backup|restore|doctor');
   process.exit(2);
 }

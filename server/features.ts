@@ -21,6 +21,7 @@ import { species } from './species';
 import { strains } from './strains';
 import { tanks } from './tanks';
 import { today } from './today';
+import { transfer } from './transfer';
 import { water } from './water';
 
 /** What a feature may add to the app. `before` stands ahead of body parsing; `pages` answers addresses outside /api. */
@@ -54,5 +55,6 @@ export const features: Feature[] = [
   sheets,
   orders,
   record,
+  transfer,
   demo,
 ];

@@ -3,6 +3,7 @@ import { broodRoutes } from './routes';
 
 export { availableOf, reservedOf } from './available';
 export { beginBrood } from './begin';
+export { batchesBelowZero } from './belowZero';
 export { batchesOf, broodRows, oneBatch, oneBrood } from './broods';
 export { addLine, countOf, linesOf } from './ledger';
 export { changeClaim, claimsOf, freeHeads, holdUntil, reserveHeads } from './reservations';

@@ -86,3 +86,11 @@ export async function integrityOf(db: Db): Promise<string> {
   const { rows } = await sql<{ integrity_check: string }>`pragma integrity_check`.execute(db);
   return rows.map((row) => row.integrity_check).join('; ');
 }
+
+/** Rows that refer to something that is not there. None, as long as foreign keys are kept. */
+export async function brokenReferences(db: Db): Promise<{ table: string; to: string; count: number }[]> {
+  const { rows } = await sql<{ table: string; to: string; count: number }>`
+    select "table", parent as "to", count(*) as count from pragma_foreign_key_check() group by "table", parent
+  `.execute(db);
+  return rows;
+}

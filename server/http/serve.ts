@@ -1,6 +1,7 @@
 import type { Request, RequestHandler, Response, Router } from 'express';
 import type * as z from 'zod/mini';
 import type { AnyEndpoint, Endpoint } from '../../shared/endpoint';
+import { crashPoint } from '../pictures/crashPoint';
 import type { Asked, RoomAsked, Scope, SignedIn } from '../scope';
 import { answerJson, isUnchanged } from './answer';
 import { parseInput } from './parseInput';
@@ -104,8 +105,8 @@ export function serveOn(router: Router) {
 }
 
 /** Runs a rule inside one write transaction of its fishroom. */
-export function inTransaction<S extends RoomAsked, T>(scope: S, rule: (inside: S) => Promise<T>): Promise<T> {
-  return scope.db.transaction().execute(async (db) => {
+export async function inTransaction<S extends RoomAsked, T>(scope: S, rule: (inside: S) => Promise<T>): Promise<T> {
+  const stored = await scope.db.transaction().execute(async (db) => {
     const result = await rule({ ...scope, db });
     await db
       .updateTable('room')
@@ -114,6 +115,8 @@ export function inTransaction<S extends RoomAsked, T>(scope: S, rule: (inside: S
       .execute();
     return result;
   });
+  crashPoint(scope.house.config.crashAt)('after-commit');
+  return stored;
 }
 
 export type { ScopeOf };

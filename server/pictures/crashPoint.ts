@@ -1,4 +1,4 @@
-export type CrashPoint = 'before-file' | 'mid-file' | 'after-file';
+export type CrashPoint = 'before-file' | 'mid-file' | 'after-file' | 'after-commit';
 
 /** For the crash test only: dies as a pulled plug would, without a word, when the named point is reached. */
 export function crashPoint(chosen: string | null | undefined) {

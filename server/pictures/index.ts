@@ -14,6 +14,7 @@ import { keyOf, openShelf, type PictureKey } from './shelf';
 import { type Swept, sweepShelf } from './sweep';
 
 export { whileDrawing } from './decoders';
+export type { PictureReport } from './integrity';
 export { mustFitQuota } from './refusals';
 
 const AT_ONCE = 2;
@@ -55,6 +56,7 @@ export async function openPictures(options: {
   limitDecoders();
   const lane = openLane({ places: AT_ONCE, waiting: WAITING });
   const shelf = openShelf(options.folder, crashPoint(options.crashAt));
+  shelf.empty();
   const claim = openClaims(shelf);
   const { incoming, tempPath, removeRoom, bytesOf } = shelf;
 
@@ -87,4 +89,13 @@ export async function openPictures(options: {
     report: (rows, roomId) => reportOn(shelf, rows, roomId),
     tempPath,
   };
+}
+
+/** Compares rows with a folder of pictures that another process may be using; touches nothing. */
+export function pictureReport(folder: string, rows: Iterable<PictureRow>, roomId?: string): Promise<PictureReport> {
+  return reportOn(
+    openShelf(folder, () => {}),
+    rows,
+    roomId,
+  );
 }

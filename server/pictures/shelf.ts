@@ -21,8 +21,12 @@ export const SIZE_NAMES = ['large', 'small'] as const satisfies readonly Picture
  */
 export function openShelf(folder: string, crash: (point: CrashPoint) => void) {
   const incoming = join(folder, '.incoming');
-  rmSync(incoming, { recursive: true, force: true });
-  mkdirSync(incoming, { recursive: true });
+
+  /** For the one process that owns the folder, before anything is stored. */
+  function empty(): void {
+    rmSync(incoming, { recursive: true, force: true });
+    mkdirSync(incoming, { recursive: true });
+  }
 
   const tempPath = (): string => join(incoming, randomBytes(16).toString('hex'));
   const roomOf = (roomId: string): string => join(folder, mustBeId(roomId));
@@ -61,6 +65,7 @@ export function openShelf(folder: string, crash: (point: CrashPoint) => void) {
 
   return {
     folder,
+    empty,
     tempPath,
     incoming,
     fileOf,
