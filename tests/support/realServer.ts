@@ -39,7 +39,7 @@ export async function realServer(): Promise<RealServer> {
   const port = await freePort();
   const origin = `http://127.0.0.1:${port}`;
   const env = {
-    NODE_ENV: 'test',
+    NODE_ENV: 'test' as const,
     DEMO: '0',
     LOG_LEVEL: 'silent',
     HOST: '127.0.0.1',
