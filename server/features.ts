@@ -14,6 +14,7 @@ import { lineage } from './lineage';
 import { members } from './members';
 import { orders } from './orders';
 import { photos } from './photos';
+import { plans } from './plans';
 import { record } from './record';
 import { rooms } from './rooms';
 import { sheets } from './sheets';
@@ -52,6 +53,7 @@ export const features: Feature[] = [
   water,
   today,
   lineage,
+  plans,
   sheets,
   orders,
   record,

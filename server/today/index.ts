@@ -13,6 +13,7 @@ import { addOne, changeOne, decide } from './tasks';
 
 export { todayFacts } from './facts';
 export { intervalsOf } from './intervals';
+export { addOne as addTaskFor } from './tasks';
 
 export const today: Feature = {
   routes: (serve) => {

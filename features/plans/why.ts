@@ -1,0 +1,34 @@
+import type { LineageNode } from '@/shared/lineage/contract';
+import { founderContributions, UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
+import type { PedigreeEntry } from '@/shared/lineage/pedigree';
+
+export type FoundersOf = (ids: string[]) => Map<string, number>;
+
+export const foundersIn =
+  (entries: PedigreeEntry[]): FoundersOf =>
+  (ids) =>
+    founderContributions(entries, ids);
+
+const NAMED = 3;
+
+/** What two fish have in common, in words: "Both carry DUMA-A01 and DUMA-A03". */
+export function whyRelated(
+  founders: FoundersOf,
+  byId: ReadonlyMap<string, LineageNode>,
+  male: string,
+  female: string,
+  f: number,
+): string {
+  const [his, hers] = [founders([male]), founders([female])];
+  const shared = [...his.keys()].filter((id) => id !== UNKNOWN_FOUNDERS && hers.has(id));
+  if (f > 0 && shared.length > 0) {
+    const codes = shared.map((id) => byId.get(id)?.code ?? 'one without a code');
+    const rest = codes.length - NAMED;
+    return `Both carry ${joinAnd(codes.slice(0, NAMED))}${rest > 0 ? ` and ${rest} more` : ''}`;
+  }
+  const blank = Math.max(his.get(UNKNOWN_FOUNDERS) ?? 0, hers.get(UNKNOWN_FOUNDERS) ?? 0);
+  return blank > 0.01 ? 'None in common is known; part of the pedigree is not' : 'No founder in common';
+}
+
+const joinAnd = (words: string[]): string =>
+  words.length < 3 ? words.join(' and ') : `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
