@@ -3,7 +3,6 @@ import { ShareBars } from '@/components/chart/ShareBars';
 import { Select } from '@/components/form/Select';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
-import { Code } from '@/components/ui/Code';
 import { FiguresStrip } from '@/components/ui/FiguresStrip';
 import { Notice } from '@/components/ui/Notice';
 import { Section } from '@/components/ui/Section';
@@ -13,7 +12,7 @@ import type { LineageNode } from '@/shared/lineage/contract';
 import { UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
 import { PairRows } from './PairRows';
 import { entryOf, type Group, LIMITS, type Plan } from './usePlan';
-import { type FoundersOf, foundersIn } from './why';
+import { type FoundersOf, foundersIn, headsWords } from './why';
 
 /** What the program proposes, or what the keeper made of it: fish, F of every pair, founders carried. */
 export function GroupPart({ plan, nodes }: { plan: Plan; nodes: readonly LineageNode[] }) {
@@ -77,7 +76,7 @@ function OneGroup({ title, group, figures, plan, founders, byId }: OneProps) {
   const wordOf = (id: string) => byId.get(id)?.code ?? 'one without a code';
   const fresh = shares.filter(([id]) => !have.has(id));
   return (
-    <Section title={title} aside={`${group.males.length} males, ${group.females.length} females`}>
+    <Section title={title} aside={headsWords(group)}>
       {figures ? (
         <FiguresStrip
           figures={[
@@ -121,22 +120,16 @@ function Swaps({ group, plan }: { group: Group; plan: Plan }) {
         if (!fish) return null;
         const others = plan.candidates.filter((one) => one.sex === fish.sex && plan.isIn(one) && !inPlan.has(one.id));
         return (
-          <View key={id} style={{ minWidth: 168, gap: space[1] }}>
-            <View style={{ flexDirection: 'row', alignItems: 'center', gap: space[2] }}>
-              <SexShape sex={fish.sex} />
-              <Code>{fish.code}</Code>
-              {fish.tank ? (
-                <Text size="small" tone="soft">
-                  {fish.tank}
-                </Text>
-              ) : null}
+          <View key={id} style={{ flexDirection: 'row', alignItems: 'center', gap: space[2], minWidth: 190 }}>
+            <SexShape sex={fish.sex} />
+            <View style={{ flexGrow: 1 }}>
+              <Select
+                label={`Swap ${fish.code} for`}
+                value={id}
+                options={[fish, ...others].map((one) => ({ value: one.id, code: one.code, word: one.tank ?? '' }))}
+                onChange={(to) => plan.swap(id, to)}
+              />
             </View>
-            <Select
-              label={`Swap ${fish.code} for`}
-              value={id}
-              options={[fish, ...others].map((one) => ({ value: one.id, code: one.code, word: one.tank ?? '' }))}
-              onChange={(to) => plan.swap(id, to)}
-            />
           </View>
         );
       })}

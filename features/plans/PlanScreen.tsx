@@ -22,7 +22,7 @@ import { PairRows } from './PairRows';
 import { planQuery } from './queries';
 import { STATE_WORDS } from './SavedPlans';
 import { entryOf } from './usePlan';
-import { foundersIn } from './why';
+import { foundersIn, headsWords } from './why';
 
 type Props = { planId: string; nodes: readonly LineageNode[] | undefined };
 
@@ -75,7 +75,7 @@ function Page({ plan, nodes, back }: PageProps) {
               <Section
                 key={males.join()}
                 title={groups.length > 1 ? `Tank ${i + 1}` : 'The group'}
-                aside={`${males.length} males, ${females.length} females`}
+                aside={headsWords({ males, females })}
               >
                 <FiguresStrip
                   figures={[

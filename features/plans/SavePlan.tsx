@@ -14,6 +14,7 @@ import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { newId } from '@/features/entries';
 import { useRoom } from '@/hooks/useRoom';
+import { formatDate } from '@/shared/days';
 import { may } from '@/shared/roles';
 import { line, TypedNote } from '@/shared/shapes';
 import type { SpeciesProfile } from '@/shared/species/profile';
@@ -34,7 +35,7 @@ export function SavePlan({ plan, strainId, profile }: Props) {
   const [id] = useState(newId);
   const { form, notice } = useSchemaForm({
     schema: Draft,
-    start: { name: `Plan of ${room.today}`, note: '' },
+    start: { name: `Plan of ${formatDate(room.today)}`, note: '' },
     save: async ({ name, note }) => {
       const groups = plan.groups.map((group, i) => ({ ...group, tankId: tanks[i] ?? null }));
       await save.mutateAsync({ id, name, content: { strainId, groups, limit: Number(plan.limit), note } });

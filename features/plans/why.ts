@@ -32,3 +32,9 @@ export function whyRelated(
 
 const joinAnd = (words: string[]): string =>
   words.length < 3 ? words.join(' and ') : `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+
+/** "1 male, 5 females". */
+export const headsWords = ({ males, females }: { males: string[]; females: string[] }): string =>
+  `${counted(males.length, 'male')}, ${counted(females.length, 'female')}`;
+
+const counted = (count: number, word: string): string => `${count} ${word}${count === 1 ? '' : 's'}`;

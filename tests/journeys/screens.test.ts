@@ -80,6 +80,7 @@ async function somethingOfEach(): Promise<Found> {
     thing: 'brood',
     thingId: full?.id ?? '',
     entryId: NOBODY,
+    planId: NOBODY,
     importId: NOBODY,
     token: 'AAAAAAAAAAAAAAAAAAAAAA',
     holdTank: open?.tank.id ?? '',
