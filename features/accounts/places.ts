@@ -28,7 +28,7 @@ export function placeOf(pathname: string): { place: PlaceName | null; sub: strin
   if (!first) return { place: 'today', sub: null, bare: false };
   return {
     place: PLACE_OF[first] ?? null,
-    sub: (first === 'stock' ? second : first) ?? null,
+    sub: (first === 'stock' || first === 'buyers' ? second : first) ?? null,
     bare: first === 'record',
   };
 }
@@ -53,6 +53,11 @@ export function placesOf(roomId: string, role: Role): Place[] {
     },
     { name: 'lineage', href: `${home}/lineage` },
   ];
-  if (may(role, 'buyer:see') || may(role, 'catch:see')) places.push({ name: 'buyers', href: `${home}/buyers` });
+  if (may(role, 'buyer:see') || may(role, 'catch:see'))
+    places.push({
+      name: 'buyers',
+      href: `${home}/buyers`,
+      subPlaces: [{ name: 'orders', word: 'Orders', href: `${home}/buyers/orders` }],
+    });
   return places;
 }

@@ -7,6 +7,8 @@ export const roomPages: readonly RoomPage[] = [
   { name: 'fishroom', word: 'Fishroom', note: 'Name, place, time zone, currency, units', needs: 'room:see' },
   { name: 'members', word: 'Members', note: 'Roles, invitations, leaving', needs: 'member:see' },
   { name: 'sheets', word: 'Lineage sheets', note: 'What they tell of other people, keys', needs: 'key:manage' },
+  { name: 'orders', word: 'Orders', note: 'Holding time, deposit, losses, bank transfer', needs: 'money:see' },
+  { name: 'letters', word: 'Letters', note: 'What went out, what waits, what was not taken', needs: 'buyer:see' },
   { name: 'trail', word: 'Audit trail', note: 'Who recorded and changed what, and when', needs: 'audit:see' },
 ];
 

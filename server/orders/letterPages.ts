@@ -1,6 +1,4 @@
 import type { LetterKind } from '../../shared/orders/letterKinds';
-import { notFound, Refusal } from '../../shared/refusal';
-import { audit } from '../db/audit';
 import { htmlBody, textBody } from '../mail/letterBody';
 import { tokenOf } from '../mail/tokens';
 import { TOKEN_HERE } from '../mail/writeLetter';
@@ -24,24 +22,4 @@ export async function letterPreview(scope: Scope, orderId: string, kind: LetterK
     text: filled(textBody(draft, foot)),
     html: filled(htmlBody(draft.subject, draft, foot)),
   };
-}
-
-/** A letter that was not taken, once more from the beginning. */
-export async function letterAgain(scope: Scope, letterId: string): Promise<void> {
-  const { db, roomId, now } = scope;
-  const letter = await db
-    .selectFrom('letter')
-    .where('roomId', '=', roomId)
-    .where('id', '=', letterId)
-    .select('state')
-    .executeTakeFirst();
-  if (!letter) throw notFound('That letter');
-  if (letter.state !== 'failed') throw new Refusal('conflict', 'That letter has not failed');
-  await db
-    .updateTable('letter')
-    .set({ state: 'waiting', attempts: 0, nextTryAt: now, lastError: null })
-    .where('roomId', '=', roomId)
-    .where('id', '=', letterId)
-    .execute();
-  await audit(scope, { action: 'letter sent again', about: 'letter', aboutId: letterId });
 }

@@ -1,13 +1,15 @@
 import { DONE } from '../../shared/endpoint';
 import { exportBooks, readBooks } from '../../shared/orders/books';
+import { addBuyerName, listBuyerNames } from '../../shared/orders/buyerNames';
 import * as line from '../../shared/orders/contract';
 import { eraseBuyer, exportBuyer } from '../../shared/orders/privacy';
 import type { Serve } from '../http/serve';
 import { bookDeaths, takeBack } from './afterwards';
 import { booksPage, sendBooks } from './books';
+import { addName, buyerNames } from './buyerNames';
 import { addMessage, agree, changeOne, offer, readMessages } from './change';
 import { giveOver } from './handOver';
-import { letterAgain, letterPreview } from './letterPages';
+import { letterPreview } from './letterPages';
 import { changeOneLine, makeOrder } from './make';
 import { cancel, move } from './moves';
 import { orderPage } from './page';
@@ -42,12 +44,10 @@ export function orderRoutes(serve: Serve): void {
   serve.work(line.giveBack, (scope, { params, body }) => payBack(scope, params.orderId, body));
   serve.read(line.printReceipt, (scope, { params }, { res }) => sendReceipt(scope, params.orderId, params.paper, res));
   serve.read(line.previewLetter, (scope, { params, query }) => letterPreview(scope, params.orderId, query.kind));
-  serve.write(line.sendLetterAgain, async (scope, { params }) => {
-    await letterAgain(scope, params.letterId);
-    return DONE;
-  });
   serve.read(line.readTerms, (scope) => termsPage(scope));
   serve.write(line.changeTerms, (scope, { body }) => setTerms(scope, body));
+  serve.read(listBuyerNames, async (scope) => ({ buyers: await buyerNames(scope) }));
+  serve.write(addBuyerName, (scope, { body }) => addName(scope, body));
   serve.read(readBooks, (scope, { query }) => booksPage(scope, query.year));
   serve.read(exportBooks, (scope, { query }, { res }) => sendBooks(scope, query.year, res));
   serve.read(exportBuyer, (scope, { params }, { res }) => sendBuyer(scope, params.buyerId, res));

@@ -294,14 +294,6 @@ export const previewLetter = endpoint({
   output: z.strictObject({ to: z.nullable(z.string()), subject: z.string(), text: z.string(), html: z.string() }),
 });
 
-export const sendLetterAgain = endpoint({
-  method: 'POST',
-  path: '/api/rooms/:roomId/letters/:letterId/again',
-  needs: 'sale:write',
-  params: inRoom({ letterId: Id }),
-  output: Done,
-});
-
 export const readTerms = endpoint({
   method: 'GET',
   path: '/api/rooms/:roomId/order-terms',

@@ -107,20 +107,22 @@ export function refusalOf({ state, lapsed }: OrderNow, move: OrderMove): string 
   return `This order is ${ORDER_STATE_WORDS[state].toLowerCase()}: that is not possible now`;
 }
 
-/** The four bars of an order and which of them it stands on; 0 before the first. */
-export function stepsOf(state: OrderState, deposit: boolean): { labels: string[]; step: number } {
-  const last = state === 'sent' ? 'Sent' : 'Collected';
-  const labels = deposit ? ['Reserved', 'Deposit paid', 'Ready', last] : ['Reserved', 'Ready', last];
+/** The bars of an order and which of them it stands on, from 0; below before the first. */
+export function stepsOf(state: OrderState, deposit: boolean): { steps: string[]; current: number } {
+  const steps = [...(deposit ? ['Reserved', 'Deposit paid'] : ['Reserved']), 'Ready', 'Collected'];
+  const ready = steps.length - 2;
   const at: Record<OrderState, number> = {
-    requested: 0,
-    reserved: 1,
-    depositAsked: 1,
-    depositPaid: deposit ? 2 : 1,
-    ready: deposit ? 3 : 2,
-    collected: labels.length,
-    sent: labels.length,
-    closed: labels.length,
-    cancelled: 0,
+    requested: -1,
+    cancelled: -1,
+    reserved: 0,
+    depositAsked: 0,
+    depositPaid: ready - 1,
+    ready,
+    collected: ready + 1,
+    sent: ready + 1,
+    closed: ready + 1,
   };
-  return { labels, step: at[state] };
+  const current = at[state];
+  const word = state === 'depositPaid' && !deposit ? 'Paid' : ORDER_STATE_WORDS[state];
+  return { steps: steps.map((step, i) => (i === current ? word : step)), current };
 }

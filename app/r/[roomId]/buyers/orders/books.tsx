@@ -1,0 +1,5 @@
+import { BooksScreen } from '@/features/orders/BooksScreen';
+
+export default function Books() {
+  return <BooksScreen />;
+}

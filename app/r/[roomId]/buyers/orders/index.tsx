@@ -1,0 +1,5 @@
+import { OrdersScreen } from '@/features/orders/OrdersScreen';
+
+export default function Orders() {
+  return <OrdersScreen />;
+}

@@ -1,0 +1,5 @@
+import { NewOrderScreen } from '@/features/orders/NewOrderScreen';
+
+export default function NewOrder() {
+  return <NewOrderScreen />;
+}

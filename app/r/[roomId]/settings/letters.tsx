@@ -1,0 +1,5 @@
+import { LettersScreen } from '@/features/letters/LettersScreen';
+
+export default function Letters() {
+  return <LettersScreen />;
+}

@@ -1,0 +1,5 @@
+import { TermsScreen } from '@/features/orders/TermsScreen';
+
+export default function OrderTerms() {
+  return <TermsScreen />;
+}
