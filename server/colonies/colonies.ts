@@ -5,7 +5,7 @@ import { notFound, Refusal } from '../../shared/refusal';
 import { audit } from '../db/audit';
 import { isUniqueViolation } from '../db/constraint';
 import { newId } from '../db/newId';
-import { addFounders, endStay, fishRows, freeCodes, joinColony, mustBeOurs, startStay } from '../fish';
+import { addFounders, endStay, fishRows, freeCodes, joinColony, mustBeOurs, mustLiveHere, startStay } from '../fish';
 import type { Scope } from '../scope';
 import { speciesNames } from '../species';
 
@@ -121,7 +121,7 @@ export async function startColony(scope: Scope, adding: z.output<typeof addColon
   );
   await startStay(scope, { column: 'colonyId', id, tankId, onDay: facts.startedOn, entryId: null });
   for (const fishId of fishIds) {
-    await mustBeOurs(scope, 'fish', fishId, 'fishIds', 'Choose fish of this fishroom');
+    await mustLiveHere(scope, { fishId, field: 'fishIds', sentence: 'Choose fish of this fishroom' });
     await joinColony(scope, { fishId, colonyId: id, onDay: facts.startedOn, entryId: null });
   }
   for (const [sex, heads] of [

@@ -5,7 +5,7 @@ import { newId } from '../db/newId';
 import type { Database } from '../db/schema';
 import type { KindRules } from '../record/kinds';
 import type { Scope } from '../scope';
-import { addFinding, joinColony, keepCode, leaveColony, mustBeOurs, oneFish } from './fish';
+import { addFinding, joinColony, keepCode, leaveColony, mustBeOurs, mustLiveHere, oneFish } from './fish';
 import { fishRows } from './rows';
 
 type Kinds = 'dominant' | 'sexSeen' | 'markSeen' | 'toldApart' | 'fishLeft' | 'moved';
@@ -117,7 +117,7 @@ export async function letLeave(scope: Scope, { fishId, onDay, kind, cause, note,
 }
 
 async function livingOurs(scope: Scope, fishId: string) {
-  await mustBeOurs(scope, 'fish', fishId, 'fishId', 'Choose a fish');
+  await mustLiveHere(scope, { fishId, field: 'fishId', sentence: 'Choose a fish' });
   const fish = await oneFish(scope, fishId);
   if (fish.exit) {
     const { kind, onDay } = fish.exit;

@@ -160,6 +160,16 @@ export async function mustBeOurs(
   if (!row) throw new Refusal('invalid', sentence, { [field]: sentence });
 }
 
+/** As `mustBeOurs`; an ancestor that is known from a sheet of another fishroom has no life here to record. */
+export async function mustLiveHere(
+  scope: Scope,
+  { fishId, field, sentence }: { fishId: string; field: string; sentence: string },
+): Promise<void> {
+  await mustBeOurs(scope, 'fish', fishId, field, sentence);
+  if ((await oneFish(scope, fishId)).origin === 'imported')
+    throw new Refusal('invalid', 'That fish lives in another fishroom', { [field]: sentence });
+}
+
 /** Runs a write that sets a fish's code, and says which code is taken. */
 export async function keepCode<T>(code: string | null, field: string, write: () => Promise<T>): Promise<T> {
   try {

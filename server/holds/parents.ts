@@ -1,12 +1,12 @@
 import type { FishRow } from '../../shared/fish/contract';
 import { Refusal } from '../../shared/refusal';
-import { mustBeOurs, oneFish } from '../fish';
+import { mustBeOurs, mustLiveHere, oneFish } from '../fish';
 import type { Scope } from '../scope';
 import { profileIn } from '../species';
 
 /** The fish that holds: a female or unsexed, except where the species' males hold. */
 export async function mayHold(scope: Scope, holderId: string): Promise<FishRow> {
-  await mustBeOurs(scope, 'fish', holderId, 'holderId', 'Choose a fish');
+  await mustLiveHere(scope, { fishId: holderId, field: 'holderId', sentence: 'Choose a fish' });
   const holder = await oneFish(scope, holderId);
   if (holder.sex === 'male' && !(await malesHold(scope, holder.speciesId))) {
     throw new Refusal('invalid', 'A male is recorded here', { holderId: 'Choose a female, or correct the sex first' });

@@ -115,6 +115,8 @@ async function mustLive(
     )
     .where('fish.roomId', '=', scope.roomId)
     .where('fish.id', '=', fishId)
+    // An ancestor of another fishroom, known from its sheet, has no life here.
+    .where('fish.origin', '<>', 'imported')
     .select(['fish.id', 'fishExit.id as exitId'])
     .executeTakeFirst();
   if (!row || row.exitId)

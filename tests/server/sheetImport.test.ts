@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest';
 import { keySet, newSheetKey, openSheetKey, sheetBytes, signSheet } from '@/server/sheets/signing';
+import { addColony } from '@/shared/colonies/contract';
 import { listFish, readFish } from '@/shared/fish/contract';
 import { readPedigree } from '@/shared/lineage/contract';
 import { inbreeding } from '@/shared/lineage/inbreeding';
@@ -26,7 +27,7 @@ import {
 import { readKeySet } from '@/shared/sheets/sheetFile';
 import { type Known, memberOf, ownerWithRoom } from '../support/accounts';
 import { duboisi, wild } from '../support/sheetContent';
-import { broodIn, type Colony, colonyIn, record, TODAY, tankIn } from '../support/stock';
+import { broodIn, type Colony, colonyIn, record, TODAY, tankIn, tryRecord } from '../support/stock';
 import { makeId, type TestApp, testApp } from '../support/testApp';
 
 /** A fishroom with an owner, and a tank to put what comes in. */
@@ -225,6 +226,31 @@ describe('a sheet from another installation', () => {
     expect(await kin(larkmoor, id, larkmoor.son)).toBeCloseTo(0.25, 12);
     expect(await kin(larkmoor, id, larkmoor.colony.males[0] ?? '')).toBeCloseTo(3 / 16, 12);
   });
+});
+
+test('an ancestor that lives elsewhere is no fish to record, to move or to pair here, and gets no sheet here', async () => {
+  const ancestor = (await pedigree(fennel)).find(({ living }) => !living)?.id ?? '';
+  const params = { roomId: fennel.roomId };
+  const found = { kind: 'dominant', fishId: ancestor, onDay: TODAY, note: null };
+  const finding = await tryRecord(fennel.owner, fennel.roomId, found);
+  expect([finding.status, Object.keys(finding.body.error?.fields ?? {})]).toEqual([422, ['fishId']]);
+  const colony = await fennel.owner.ask(addColony, {
+    params,
+    body: {
+      id: makeId(),
+      code: 'MOKA-Z',
+      strainId: (await look(fennel, (await issued(larkmoor, { thing: 'fish', subjectId: larkmoor.son })).file))
+        .strains[0],
+      startedOn: TODAY,
+      note: null,
+      tankId: fennel.quarantine,
+      fishIds: [ancestor],
+      newFish: { males: 0, females: 0, unsexed: 0, lotId: null, coded: true },
+    },
+  });
+  expect([colony.status, colony.body.error?.fields]).toEqual([422, { fishIds: 'Choose fish of this fishroom' }]);
+  const sheet = await fennel.owner.ask(previewSheet, { params, query: { thing: 'fish', id: ancestor } });
+  expect(sheet.status).toBe(409);
 });
 
 describe('the same sheet again', () => {
