@@ -119,7 +119,8 @@ export function KinshipTable(props: KinshipTableProps) {
           const fish = down[index];
           return fish ? (
             <KinshipRow
-              key={fish.id}
+              // By place: another search changes what a row says, it does not make the row anew.
+              key={index}
               fish={fish}
               index={index}
               sizes={sizes}
@@ -161,7 +162,7 @@ const KinshipRow = memo(function KinshipRow(row: RowProps) {
       <KinshipRowHead fish={fish} sizes={sizes} />
       {columns.map((column) => (
         <KinshipCell
-          key={column.fish.id}
+          key={column.index}
           down={fish}
           across={column.fish}
           value={valueFor(fish, column.fish)}

@@ -47,7 +47,7 @@ function PairBody({ nodes, kin, a, b }: BodyProps) {
       <PairFigures facts={facts} self={self} />
       <KeyValues pairs={facts.known.map(({ code, said }) => ({ key: code, value: capital(said) }))} />
       {self ? null : <Shared facts={facts} />}
-      {!self && facts.between.length > 2 ? (
+      {!self && facts.shared.length > 0 ? (
         <Suspense fallback={<Loading label="Drawing the lineage" rows={3} />}>
           <LineageGraph
             label={`What ${nameOf(a)} and ${nameOf(b)} share`}
@@ -75,7 +75,9 @@ function PairBody({ nodes, kin, a, b }: BodyProps) {
             key={node.id}
             grow
             small
-            label={`Lineage of ${nameOf(node)}`}
+            icon="lineage"
+            label={nameOf(node)}
+            describe={`Lineage of ${nameOf(node)}`}
             href={`/r/${room.id}/lineage/${node.id}`}
           />
         ))}
@@ -116,7 +118,7 @@ function Shared({ facts }: { facts: PairFacts }) {
             margin={<SexShape sex={sex} possible={!certain} />}
             title={<Code>{code}</Code>}
             note={words}
-            trailing={certain ? undefined : 'possible, not certain'}
+            trailing={certain ? undefined : 'possible'}
           />
         ))}
       </Rows>

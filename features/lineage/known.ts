@@ -10,6 +10,6 @@ export function knownOf(fish: readonly LineageNode[], depth: ReadonlyMap<string,
     return { short: `${least.toFixed(1)} gen`, said: `pedigree known equal to ${least.toFixed(1)} full generations` };
   const bare = fish.filter(({ id }) => (depth.get(id) ?? 0) === 0);
   if (bare.every(({ founderGeneration }) => founderGeneration === 0))
-    return { short: 'wild', said: 'wild founders, taken as unrelated' };
+    return { short: 'wild', said: 'wild, taken as unrelated to others' };
   return { short: 'none', said: 'no ancestors are recorded' };
 }

@@ -41,9 +41,7 @@ export function pairFacts(nodes: Nodes, kin: GroupKinship, [a, b]: readonly [Lin
     })),
     shared: ancestors.flatMap(({ id, back, certain }) => {
       const node = byId.get(id);
-      const words = `${ancestorWord(back[0])} of ${nameOf(a)}, ${ancestorWord(back[1])} of ${nameOf(b)}`;
-      const same = back[0] === back[1] ? `${ancestorWord(back[0])} of both` : words;
-      return node ? [{ id, code: nameOf(node), words: same, certain, sex: node.sex }] : [];
+      return node ? [{ id, code: nameOf(node), words: backWords(back, [a, b]), certain, sex: node.sex }] : [];
     }),
     between: shownNodes,
     doubts: shownNodes.filter(isDoubtful).map((node) => saidOf(node, byId)),
@@ -60,8 +58,15 @@ function outcomesOf(entries: readonly PedigreeEntry[], sire: string, dam: string
   return inbreedingOutcomes([...entries, young], id, MOST_CASES);
 }
 
-/** 0: the fish itself; 1: parent; 3: great-grandparent; 5: ancestor 5 generations back. */
-export function ancestorWord(back: number): string {
+/** "parent of both", "parent of DUMA-A04", "parent of DUMA-A04, grandparent of DUMA-26C". */
+function backWords(back: readonly [number, number], pair: readonly [LineageNode, LineageNode]): string {
+  if (back[0] === back[1]) return `${ancestorWord(back[0])} of both`;
+  const words = pair.flatMap((node, i) => (back[i] ? [`${ancestorWord(back[i])} of ${nameOf(node)}`] : []));
+  return words.join(', ');
+}
+
+/** 1: parent; 3: great-grandparent; 5: ancestor 5 generations back. */
+function ancestorWord(back: number): string {
   if (back > 4) return `ancestor ${back} generations back`;
-  return ['the fish itself', 'parent', 'grandparent', 'great-grandparent', 'great-great-grandparent'][back] ?? '';
+  return ['', 'parent', 'grandparent', 'great-grandparent', 'great-great-grandparent'][back] ?? '';
 }

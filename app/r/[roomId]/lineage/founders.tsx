@@ -1,0 +1,5 @@
+import { FoundersScreen } from '@/features/lineage/FoundersScreen';
+
+export default function Founders() {
+  return <FoundersScreen />;
+}
