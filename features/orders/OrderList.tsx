@@ -18,17 +18,17 @@ import { useRoom } from '@/hooks/useRoom';
 import { useUrlWord } from '@/hooks/useUrlWord';
 import { formatMoney } from '@/shared/money';
 import type { OrderRow } from '@/shared/orders/shapes';
-import { isOpen, ORDER_STATE_WORDS, stepsOf } from '@/shared/orders/state';
+import { ORDER_STATE_WORDS, stepsOf } from '@/shared/orders/state';
 import { may } from '@/shared/roles';
 import { ordersQuery } from './queries';
 import { needWords, whenWords } from './words';
 
-/** Orders, newest first: those whose fish are still here, or all. */
+/** Orders, newest first: those that are not closed, or all. */
 export function OrderList({ chosen }: { chosen?: string }) {
   const room = useRoom();
   const { data, error, refetch } = useQuery(ordersQuery(room.id));
   const [show, setShow] = useUrlWord('show', 'open', ['open', 'all']);
-  const open = data?.filter(({ state }) => isOpen(state)) ?? [];
+  const open = data?.filter(({ state }) => state !== 'closed' && state !== 'cancelled') ?? [];
   const shown = show === 'open' ? open : (data ?? []);
   const add = `/r/${room.id}/buyers/orders/new` as const;
   return (
@@ -88,7 +88,11 @@ function OrderLine({ order, selected }: { order: OrderRow; selected: boolean }) 
   const { steps, current } = stepsOf(state, hasDeposit);
   const need = needWords(order);
   const amount =
-    toPayCents === null || !isOpen(state) ? null : toPayCents === 0 ? 'Paid' : formatMoney(toPayCents, room.currency);
+    toPayCents === null || state === 'closed' || state === 'cancelled'
+      ? null
+      : toPayCents === 0
+        ? 'Paid'
+        : formatMoney(toPayCents, room.currency);
   return (
     <Row
       href={`/r/${room.id}/orders/${order.id}`}

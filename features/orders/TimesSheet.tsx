@@ -50,7 +50,7 @@ export function TimesSheet({ told, onClose }: { told: OrderPage; onClose: () => 
     <Sheet open title="Times for the collection" onClose={onClose}>
       <View style={{ gap: space[4] }}>
         <Form form={form} notice={notice} label="A time">
-          <DateField name="day" label="Day" today={room.today} />
+          <DateField name="day" label="Day" today={room.today} latest={null} earliest={room.today} />
           <TextField name="clock" label="Time" inputMode="numeric" />
           <Button small icon="plus" label="Add this time" onPress={() => void form.submitForm()} />
         </Form>

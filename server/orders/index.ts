@@ -1,10 +1,12 @@
 import type { Feature } from '../features';
 import { standInPages } from '../payments';
+import { startLapses } from './lapses';
 import { ownRoutes } from './ownRoutes';
 import { startReminders } from './reminders';
 import { orderRoutes } from './routes';
 import { stripeWebhook } from './webhook';
 
+export { touchLapsed } from './lapses';
 export { makeOrder } from './make';
 export { remind } from './reminders';
 export { ordersToday } from './today';
@@ -16,5 +18,8 @@ export const orders: Feature = {
     ownRoutes(serve);
   },
   pages: standInPages,
-  start: async (house) => startReminders(house),
+  start: async (house) => {
+    const workers = [startReminders(house), startLapses(house)];
+    return { stop: async () => void (await Promise.all(workers.map((worker) => worker.stop()))) };
+  },
 };

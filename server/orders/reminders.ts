@@ -1,4 +1,5 @@
 import { addDays, dayOf } from '../../shared/days';
+import { touchRooms } from '../db/touchRooms';
 import type { House } from '../house';
 import { writeOrderLetter } from './letters';
 import { roomAsked } from './room';
@@ -34,6 +35,7 @@ export async function remind(house: House): Promise<number> {
         .select('id')
         .executeTakeFirst();
       if (earlier) return 0;
+      await touchRooms(inside, [roomId]);
       await writeOrderLetter(await roomAsked({ ...asked, db: inside }, roomId), id, 'reminder');
       return 1;
     });

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, test } from 'vitest';
-import { remind } from '@/server/orders';
+import { remind, touchLapsed } from '@/server/orders';
 import { readBrood } from '@/shared/broods/contract';
+import { readFish } from '@/shared/fish/contract';
 import { exportBooks, readBooks } from '@/shared/orders/books';
 import {
   addOrder,
@@ -109,6 +110,31 @@ describe('no fish is sold twice', () => {
     expect(await available()).toBe(10);
   });
 
+  test('twenty who ask at once for one fish with a code: one gets it', async () => {
+    const fishId = colony.males[0] ?? '';
+    const line = () => ({ id: makeId(), broodId: null, fishId, lot: 'single', heads: 1, note: null });
+    const answers = await Promise.all(
+      Array.from({ length: 20 }, () => owner.ask(addOrder, { params: { roomId }, body: draftOf(buyer.id, [line()]) })),
+    );
+    expect(answers.map(({ status }) => status).sort()).toEqual([200, ...Array(19).fill(409)]);
+    const made = answers.find(({ status }) => status === 200)?.body;
+    const { version } = await owner.get(changeLine, {
+      params: { roomId, orderId: made?.id, lineId: made?.lines[0]?.id },
+      body: { version: made?.version, heads: 1, cents: 4500 },
+    });
+    expect((await now(sale, { id: made?.id ?? '' })).order.totalCents).toBe(4500);
+    const ready = await owner.get(moveOrder, {
+      ...at(made?.id ?? ''),
+      body: { version, move: 'markReady', depositCents: null },
+    });
+    await keeper.get(handOver, {
+      ...at(made?.id ?? ''),
+      body: { version: ready.version, how: 'collect', catches: [], issueSheets: true, paid: null },
+    });
+    const { fish } = await owner.get(readFish, { params: { roomId, fishId } });
+    expect(fish.exit).toMatchObject({ kind: 'sold', onDay: TODAY });
+  });
+
   test.each([0, -1, 1e9, 1.5, '2', null])('%s heads are refused, the field named', async (heads) => {
     const body = draftOf(buyer.id, [lineOf(brood.broodId, 1, { heads })]);
     const answer = await owner.ask(addOrder, { params: { roomId }, body });
@@ -149,6 +175,19 @@ describe('no fish is sold twice', () => {
     expect(await available()).toBe(2);
     app.later({ days: 3 });
     try {
+      // A copy from before is not called unchanged once the hold is over.
+      const { changeNumber } = await app.house.db
+        .selectFrom('room')
+        .where('id', '=', roomId)
+        .select('changeNumber')
+        .executeTakeFirstOrThrow();
+      expect(await touchLapsed(app.house, '2026-05-17T09:00:00.000Z', '2026-05-17T09:12:00.000Z')).toBe(1);
+      const after = await app.house.db
+        .selectFrom('room')
+        .where('id', '=', roomId)
+        .select('changeNumber')
+        .executeTakeFirstOrThrow();
+      expect(after.changeNumber).toBe(changeNumber + 1);
       const { order } = await now(sale, made);
       expect(order).toMatchObject({ state: 'reserved', lapsed: true, reservedUntil: null });
       expect(await available()).toBe(10);
