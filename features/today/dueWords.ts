@@ -33,7 +33,7 @@ export const DUE_ICONS: Record<DueKind, IconName> = {
 };
 
 /** "29 heads, last 13 Apr. Take 15 fish." Says since when, or how late, so that the number in the margin is understood. */
-export function dueNote({ kind, heads, lastOn, amount, tankCode, lateDays }: Due): string {
+export function dueNote({ kind, heads, lastOn, amount, tankCode, lateDays, title }: Due): string {
   const last = lastOn ? `last ${formatShortDay(lastOn)}` : 'never yet';
   const late = lateDays === 0 ? 'due today' : `${lateDays} ${lateDays === 1 ? 'day' : 'days'} late`;
   const where = tankCode ? `, ${tankCode}` : '';
@@ -46,6 +46,8 @@ export function dueNote({ kind, heads, lastOn, amount, tankCode, lateDays }: Due
       return `${capital(last)}${where}. ${capital(late)}.`;
     case 'waterChange':
       return `${capital(last)}${amount ? `, ${amount} %` : ''}. ${capital(late)}.`;
+    case 'reservationEnds':
+      return `${title}.`;
     default:
       return `${lastOn ? `${capital(last)}. ` : ''}${capital(late)}.`;
   }

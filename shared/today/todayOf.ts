@@ -1,5 +1,5 @@
 import { stageOf } from '../broods/stage';
-import { addDays, type Day, daysBetween } from '../days';
+import { addDays, type Day, daysBetween, formatShortDay } from '../days';
 import { careClock, careProfileOf } from '../holds/careProfile';
 import type { Clock } from '../holds/clock';
 import { clockState } from '../holds/clockWords';
@@ -80,6 +80,7 @@ export function todayOf(facts: TodayFacts, choices: UnitChoices): Today {
       ...batchDues(facts, profiles),
       ...tankDues(facts),
       ...careDues(facts),
+      ...orderDues(facts),
       ...ownTasks(facts),
     ],
     facts,
@@ -277,6 +278,18 @@ function careDues({ care, tanks, today }: TodayFacts): Due[] {
         today,
       ),
     ];
+  });
+}
+
+/** A word to the buyer before the fish are free again. */
+function orderDues({ orders, intervals, today }: TodayFacts): Due[] {
+  return orders.flatMap(({ id, number, reservedUntil }) => {
+    if (reservedUntil === null) return [];
+    const until = reservedUntil.slice(0, 10);
+    const facts = { heads: null, tankCode: null, amount: null, assignedTo: null, lastOn: null };
+    const title = `Held until ${formatShortDay(until)}`;
+    const dueOn = addDays(until, -intervals.reservationEnds);
+    return [due({ ...facts, thing: 'order', id, kind: 'reservationEnds', code: String(number), dueOn, title }, today)];
   });
 }
 
