@@ -1,5 +1,13 @@
-import { readPedigree } from '../../shared/lineage/contract';
+import {
+  changeParentage,
+  listContradictions,
+  previewParentage,
+  readParentage,
+  readPedigree,
+} from '../../shared/lineage/contract';
 import type { Feature } from '../features';
+import { changeOf, parentageOf, previewOf } from './change';
+import { contradictionsOf } from './contradictions';
 import { lineageNodes } from './nodes';
 
 export { lineageNodes } from './nodes';
@@ -10,5 +18,9 @@ export { drawKey, foreignNames, type ToldAnimal, toldAnimals } from './told';
 export const lineage: Feature = {
   routes: (serve) => {
     serve.read(readPedigree, async (scope, { query }) => ({ nodes: await lineageNodes(scope, query.around) }));
+    serve.read(readParentage, (scope, { params }) => parentageOf(scope, params.animalId));
+    serve.work(previewParentage, (scope, { params, body }) => previewOf(scope, params.animalId, body));
+    serve.write(changeParentage, (scope, { params, body }) => changeOf(scope, params.animalId, body));
+    serve.read(listContradictions, async (scope) => ({ contradictions: await contradictionsOf(scope) }));
   },
 };

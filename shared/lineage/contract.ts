@@ -1,7 +1,10 @@
 import * as z from 'zod/mini';
 import { DayText } from '../days';
-import { endpoint, inRoom } from '../endpoint';
+import { Done, endpoint, inRoom } from '../endpoint';
+import { ParentageTold } from '../holds/contract';
 import { Id } from '../ids';
+import { Instant } from '../shapes';
+import { ParentageDraft } from './parentageDraft';
 
 const Candidates = z.array(z.strictObject({ id: z.nullable(Id), weight: z.number() }));
 const Parent = z.discriminatedUnion('kind', [
@@ -57,4 +60,88 @@ export const readPedigree = endpoint({
   params: inRoom({}),
   query: z.strictObject({ around: z.optional(Id) }),
   output: z.strictObject({ nodes: z.array(LineageNode) }),
+});
+
+const inAnimal = inRoom({ animalId: Id });
+
+/** The parentage that can be changed at a fish, a brood or a hold. A fish without one of its own has that of its brood. */
+export const readParentage = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/animals/:animalId/parentage',
+  needs: 'lineage:see',
+  params: inAnimal,
+  output: z.strictObject({
+    thing: z.enum(['fish', 'brood', 'hold']),
+    name: z.nullable(z.string()),
+    /** How often it was set; 0 for a fish that has none of its own. A change carries the one it saw. */
+    turn: z.number(),
+    parentage: ParentageTold,
+    /** Every turn of it, newest first: nothing that was said before is lost. */
+    turns: z.array(z.strictObject({ turn: z.number(), basis: z.nullable(z.string()), by: z.string(), at: Instant })),
+  }),
+});
+
+const Figures = z.strictObject({
+  f: z.number(),
+  generation: z.nullable(z.strictObject({ low: z.number(), high: z.number() })),
+  /** Complete generation equivalents. */
+  known: z.number(),
+});
+const Change = z.strictObject({
+  id: Id,
+  thing: z.enum(['fish', 'brood']),
+  code: z.nullable(z.string()),
+  before: Figures,
+  after: Figures,
+});
+export type LineageChange = z.output<typeof Change>;
+
+const change = z.strictObject({
+  turn: z.number('Send the turn').check(z.int('A whole number'), z.minimum(0, 'From zero')),
+  parentage: ParentageDraft,
+});
+
+/** What a change would do to everything downstream. Nothing is written. */
+export const previewParentage = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/animals/:animalId/parentage/preview',
+  needs: 'parentage:write',
+  params: inAnimal,
+  body: change,
+  output: z.strictObject({
+    changes: z.array(Change),
+    /** Sheets in force that say otherwise. */
+    sheets: z.array(z.strictObject({ id: Id, number: z.string() })),
+    doubts: z.array(z.string()),
+  }),
+});
+
+/** A new turn of a parentage; the turns before it stay. */
+export const changeParentage = endpoint({
+  method: 'PUT',
+  path: '/api/rooms/:roomId/animals/:animalId/parentage',
+  needs: 'parentage:write',
+  params: inAnimal,
+  body: change,
+  output: Done,
+});
+
+export const CONTRADICTIONS = ['younger', 'sex', 'dead', 'away', 'loop'] as const;
+const Contradiction = z.strictObject({
+  kind: z.enum(CONTRADICTIONS),
+  thing: z.enum(['fish', 'brood', 'hold']),
+  id: Id,
+  name: z.string(),
+  parent: z.nullable(z.strictObject({ id: Id, name: z.string() })),
+  says: z.string(),
+});
+export type Contradiction = z.output<typeof Contradiction>;
+
+/** What cannot all be true of parents and young as they are recorded. */
+export const listContradictions = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/contradictions',
+  needs: 'lineage:see',
+  params: inRoom({}),
+  output: z.strictObject({ contradictions: z.array(Contradiction) }),
 });
