@@ -14,6 +14,7 @@ export const DUE_WORDS: Record<DueKind, string> = {
   treatmentEnd: 'Treatment ends',
   quarantineEnd: 'Quarantine ends',
   reservationEnds: 'Reservation ends',
+  answer: 'Answer a buyer',
   own: 'Task',
 };
 
@@ -29,6 +30,7 @@ export const DUE_ICONS: Record<DueKind, IconName> = {
   treatmentEnd: 'tick',
   quarantineEnd: 'tick',
   reservationEnds: 'buyers',
+  answer: 'buyers',
   own: 'today',
 };
 
@@ -48,6 +50,8 @@ export function dueNote({ kind, heads, lastOn, amount, tankCode, lateDays, title
       return `${capital(last)}${amount ? `, ${amount} %` : ''}. ${capital(late)}.`;
     case 'reservationEnds':
       return `${title}.`;
+    case 'answer':
+      return `${title}. ${lateDays === 0 ? 'Asked today.' : `Waits for ${lateDays} ${lateDays === 1 ? 'day' : 'days'}.`}`;
     default:
       return `${lastOn ? `${capital(last)}. ` : ''}${capital(late)}.`;
   }

@@ -29,9 +29,7 @@ export async function checkoutOf(scope: RoomAsked, orderId: string, token: strin
   if (!due) throw new Refusal('conflict', 'There is nothing to pay for this order now');
   if (!house.payments) throw new Refusal('conflict', 'This fishroom takes no cards: pay by transfer or in cash');
   const earlier = await checkoutsOf(scope, orderId);
-  const open = earlier.find(
-    (one) => one.state === 'open' && one.kind === due.kind && one.cents === due.cents && one.expiresAt > now,
-  );
+  const open = openOne(earlier, due, now);
   if (open) return { url: open.url };
   const end = Math.min(Date.parse(row.reservedUntil ?? '9999-12-31'), Date.parse(now) + MOST_MS);
   const asked = {
@@ -46,13 +44,15 @@ export async function checkoutOf(scope: RoomAsked, orderId: string, token: strin
   };
   const session = await house.payments.openCheckout(asked).catch((error: unknown) => {
     log.error({ err: error, event: 'checkout', outcome: 'failed' }, 'the card service opened no page');
-    throw new Refusal(
-      'busy',
-      'The card service does not answer. Nothing was paid. Try again in a moment.',
-      {},
-      { retryAfter: 30 },
-    );
+    return null;
   });
+  if (!session) {
+    // Two taps at once: the other one may have opened the page.
+    const other = openOne(await checkoutsOf(scope, orderId), due, now);
+    if (other) return { url: other.url };
+    const words = 'The card service does not answer. Nothing was paid. Try again in a moment.';
+    throw new Refusal('busy', words, {}, { retryAfter: 30 });
+  }
   await inTransaction(scope, ({ db, roomId }) =>
     db
       .insertInto('checkout')
@@ -72,6 +72,11 @@ export async function checkoutOf(scope: RoomAsked, orderId: string, token: strin
   );
   return { url: session.url };
 }
+
+type Open = { state: string; kind: string; cents: number; expiresAt: string; url: string };
+
+const openOne = <One extends Open>(all: One[], due: PayNow, now: string): One | undefined =>
+  all.find((one) => one.state === 'open' && one.kind === due.kind && one.cents === due.cents && one.expiresAt > now);
 
 function checkoutsOf({ db, roomId }: RoomAsked, orderId: string) {
   return db

@@ -49,12 +49,7 @@ export function receiptPages(content: ReceiptContent, buyerName: string, paper: 
     ...content.payments.map(({ words, onDay, cents }) =>
       amountRow([plain(onDay ? `${words}, ${formatDate(onDay)}` : words)], money(-cents), widthMm),
     ),
-    amountRow(
-      [{ text: content.toPayCents > 0 ? 'Still to pay' : 'Paid', face: 'bold' }],
-      money(content.toPayCents),
-      widthMm,
-      'bold',
-    ),
+    amountRow([{ text: 'Left to pay', face: 'bold' }], money(content.toPayCents), widthMm, 'bold'),
     footBlock(content, widthMm),
   ];
   return paginate(blocks, { firstMm: roomMm, nextMm: roomMm }).map((page) => ({
@@ -100,7 +95,11 @@ function amountRow(spans: Span[], amount: string, widthMm: number, face: Face = 
 
 function footBlock({ sheets, way }: ReceiptContent, widthMm: number): Block {
   const says = [
-    ...(sheets.length > 0 ? [`Lineage sheets ${sheets.join(', ')} belong to these fish.`] : []),
+    ...(sheets.length > 0
+      ? [
+          `${sheets.length === 1 ? 'Lineage sheet' : 'Lineage sheets'} ${sheets.join(', ')} ${sheets.length === 1 ? 'belongs' : 'belong'} to these fish.`,
+        ]
+      : []),
     ...(way === 'Sale' ? [] : [`The fish left as: ${way.toLowerCase()}.`]),
     'Never release fish. Owning, selling and moving them may need a permit: check locally. Kept in Kinwater.',
   ].join(' ');

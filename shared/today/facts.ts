@@ -42,6 +42,8 @@ export const OrderToday = z.strictObject({
   time: z.nullable(z.string()),
   toPayCents: z.nullable(z.number()),
   reservedUntil: z.nullable(z.string()),
+  /** Since when somebody waits for an answer: a request, or a message that nobody read; for owners. */
+  waitsSince: z.nullable(DayText),
   /** Heads by which it falls short since deaths. */
   short: z.number(),
 });

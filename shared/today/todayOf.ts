@@ -47,6 +47,7 @@ export type DueKind =
   | 'treatmentEnd'
   | 'quarantineEnd'
   | 'reservationEnds'
+  | 'answer'
   | 'own';
 
 export type Trouble = { tank: TankToday; finding: Finding; at: string };
@@ -281,15 +282,17 @@ function careDues({ care, tanks, today }: TodayFacts): Due[] {
   });
 }
 
-/** A word to the buyer before the fish are free again. */
+/** Whoever waits for an answer; and a word to the buyer before the fish are free again. */
 function orderDues({ orders, intervals, today }: TodayFacts): Due[] {
-  return orders.flatMap(({ id, number, reservedUntil }) => {
-    if (reservedUntil === null) return [];
-    const until = reservedUntil.slice(0, 10);
+  return orders.flatMap(({ id, number, reservedUntil, waitsSince, what }) => {
     const facts = { heads: null, tankCode: null, amount: null, assignedTo: null, lastOn: null };
+    const order = { ...facts, thing: 'order' as const, id, code: String(number) };
+    const dues = waitsSince ? [due({ ...order, kind: 'answer', dueOn: waitsSince, title: what }, today)] : [];
+    if (reservedUntil === null) return dues;
+    const until = reservedUntil.slice(0, 10);
     const title = `Held until ${formatShortDay(until)}`;
     const dueOn = addDays(until, -intervals.reservationEnds);
-    return [due({ ...facts, thing: 'order', id, kind: 'reservationEnds', code: String(number), dueOn, title }, today)];
+    return [...dues, due({ ...order, kind: 'reservationEnds', dueOn, title }, today)];
   });
 }
 

@@ -490,6 +490,10 @@ describe('who sees what', () => {
     const picked = await guest.get(pickOwnTime, { params: { token }, body: { time: '2026-05-20T10:30' } });
     expect(picked.agreedTime).toBe('2026-05-20T10:30');
     await guest.get(writeOwnMessage, { params: { token }, body: { id: makeId(), body: 'May I bring my daughter?' } });
+    const waiting = await owner.get(readToday, { params: { roomId } });
+    expect(waiting.orders.find(({ id }) => id === made.id)?.waitsSince).toBe(TODAY);
+    const seen = await keeper.get(readToday, { params: { roomId } });
+    expect(seen.orders.find(({ id }) => id === made.id)?.waitsSince).toBeNull();
     const { order } = await now(sale, made);
     expect(order).toMatchObject({ agreedTime: '2026-05-20T10:30', unread: 1 });
     expect(order.version).toBeGreaterThan(version);
