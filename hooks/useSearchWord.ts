@@ -3,7 +3,7 @@ import { useUrlWord } from './useUrlWord';
 
 const PAUSE_MS = 300;
 
-/** A search over much: what is typed counts at once, the address follows when the keeper pauses. */
+/** A search or filter over much: it counts at once, the address follows when the keeper pauses. */
 export function useSearchWord(key: string): [string, (word: string) => void] {
   const [kept, keep] = useUrlWord<string>(key, '');
   const [typed, setTyped] = useState(kept);

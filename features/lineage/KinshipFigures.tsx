@@ -16,6 +16,8 @@ const LIMIT = 0.125;
 
 type Props = {
   nodes: Nodes;
+  /** All that the compared ones are chosen from. */
+  fish: readonly LineageNode[];
   group: readonly LineageNode[];
   search: string;
   order: Order;
@@ -24,8 +26,8 @@ type Props = {
 };
 
 /** The table, what its marks mean, and the pair that was pressed. */
-export function KinshipFigures({ nodes, group, search, order, view, said }: Props) {
-  const kin = useKinship(nodes, group);
+export function KinshipFigures({ nodes, fish, group, search, order, view, said }: Props) {
+  const kin = useKinship(nodes, fish, group);
   const [picked, setPicked] = useState<{ down: string; across: string } | null>(null);
   const byId = useMemo(() => new Map<string, LineageNode>(group.map((node) => [node.id, node])), [group]);
   const sides = useMemo(

@@ -23,7 +23,7 @@ export function KinshipScreen() {
 function Compared({ nodes, scope }: { nodes: Nodes; scope: Scope }) {
   const wide = useIsWide();
   const [search, setSearch] = useSearchWord('q');
-  const [keptWord, setKept] = useUrlWord<string>('show', '');
+  const [keptWord, setKept] = useSearchWord('show');
   const [order, setOrder] = useUrlWord<Order>('sort', 'mean', ['mean', 'code']);
   const [view, setView] = useUrlWord<Sides>('view', wide ? 'all' : 'pairs', ['pairs', 'all']);
   const fish = useMemo(() => fishIn(nodes, scope), [nodes, scope]);
@@ -51,7 +51,15 @@ function Compared({ nodes, scope }: { nodes: Nodes; scope: Scope }) {
       {group.length === 0 ? (
         <EmptyState small title="No fish is like that" words="Change the filters." />
       ) : (
-        <KinshipFigures nodes={nodes} group={group} search={search} order={order} view={view} said={scope.said} />
+        <KinshipFigures
+          nodes={nodes}
+          fish={fish}
+          group={group}
+          search={search}
+          order={order}
+          view={view}
+          said={scope.said}
+        />
       )}
     </View>
   );

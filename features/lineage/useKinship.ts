@@ -16,14 +16,19 @@ export type GroupKinship = {
   depth: ReadonlyMap<string, number>;
 };
 
-/** The kinships of a group: worked out once for its fish, whatever is searched for among them. */
-export function useKinship(nodes: Nodes, group: readonly LineageNode[]): GroupKinship {
+/** The kinships of a group: those of all the fish that it is chosen from are worked out once, whatever is filtered after. */
+export function useKinship(
+  nodes: Nodes,
+  fish: readonly LineageNode[],
+  group: readonly LineageNode[] = fish,
+): GroupKinship {
   const entries = useMemo(() => entriesOf(nodes), [nodes]);
   const depth = useMemo(() => allEquivalentGenerations(entries), [entries]);
-  const asked = group.map(({ id }) => id).join(' ');
-  return useMemo(() => {
-    const ids = asked === '' ? [] : asked.split(' ');
-    const matrix = kinship(entries, ids);
-    return { entries, matrix, mean: meanKinship(matrix, ids), depth };
-  }, [entries, depth, asked]);
+  const matrix = useMemo(() => kinship(entries, idsOf(fish)), [entries, fish]);
+  return useMemo(
+    () => ({ entries, matrix, depth, mean: meanKinship(matrix, idsOf(group)) }),
+    [entries, matrix, depth, group],
+  );
 }
+
+const idsOf = (fish: readonly LineageNode[]): string[] => fish.map(({ id }) => id);
