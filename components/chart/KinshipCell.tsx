@@ -2,6 +2,7 @@ import { Text as NativeText, StyleSheet, View } from 'react-native';
 import { line } from '@/components/theme/space';
 import type { Theme } from '@/components/theme/theme';
 import { family } from '@/components/theme/type';
+import { elementOf } from '@/components/ui/elementOf';
 import type { KinFish } from './KinshipTable';
 import type { KinshipSizes } from './kinshipSizes';
 import { kinshipWord } from './kinshipWord';
@@ -53,32 +54,31 @@ export function KinshipCell(props: Props) {
   const fill = quiet ? theme.rule : over ? theme.trouble : theme.stage.subadult;
   return (
     <View
-      role="cell"
+      ref={asGridCell}
+      aria-selected={picked}
       aria-colindex={column + 2}
+      aria-label={said(props, over)}
+      tabIndex={reachable ? 0 : -1}
+      dataSet={{ cell: `${row} ${column}` }}
       style={[
         styles.cell,
         { left, width: sizes.column, height: sizes.row - 1, borderLeftColor: theme.rule },
         self ? { backgroundColor: theme.well } : null,
+        picked ? { borderWidth: 3, borderColor: theme.ink } : null,
       ]}
     >
-      <View
-        role="button"
-        aria-pressed={picked}
-        aria-label={said(props, over)}
-        tabIndex={reachable ? 0 : -1}
-        dataSet={{ cell: `${row} ${column}` }}
-        style={[styles.press, picked ? { borderWidth: 3, borderColor: theme.ink } : null]}
-      >
-        <View style={[styles.bar, { height, backgroundColor: fill }]} />
-        {f >= FULL_SIBS && !quiet ? <View style={[styles.triangle, { borderBottomColor: theme.trouble }]} /> : null}
-        <NativeText style={[bold ? styles.boldFigure : styles.figure, { color: bold ? theme.ink : theme.ink2 }]}>
-          {kinshipWord(f)}
-        </NativeText>
-        <NativeText style={[styles.known, { color: theme.ink2 }]}>{known}</NativeText>
-      </View>
+      <View style={[styles.bar, { height, backgroundColor: fill }]} />
+      {f >= FULL_SIBS && !quiet ? <View style={[styles.triangle, { borderBottomColor: theme.trouble }]} /> : null}
+      <NativeText style={[bold ? styles.boldFigure : styles.figure, { color: bold ? theme.ink : theme.ink2 }]}>
+        {kinshipWord(f)}
+      </NativeText>
+      <NativeText style={[styles.known, { color: theme.ink2 }]}>{known}</NativeText>
     </View>
   );
 }
+
+/** The native types know no such role. */
+const asGridCell = (view: View | null) => elementOf(view)?.setAttribute('role', 'gridcell');
 
 function said({ down, across, value }: Props, over: boolean): string {
   const whom = value.self ? `${down.code} with itself` : `${across.code} with ${down.code}`;
@@ -95,8 +95,14 @@ const figure = {
 } as const;
 
 const styles = StyleSheet.create({
-  cell: { position: 'absolute', top: 0, borderLeftWidth: line.row },
-  press: { flexGrow: 1, justifyContent: 'center', paddingRight: 6, cursor: 'pointer' },
+  cell: {
+    position: 'absolute',
+    top: 0,
+    borderLeftWidth: line.row,
+    justifyContent: 'center',
+    paddingRight: 6,
+    cursor: 'pointer',
+  },
   bar: { position: 'absolute', left: 3, bottom: 2, width: 7 },
   figure: { ...figure, fontVariant: ['tabular-nums'] },
   boldFigure: { ...figure, fontVariant: ['tabular-nums'], fontWeight: '700' },

@@ -102,7 +102,7 @@ export function KinshipTable(props: KinshipTableProps) {
   return (
     <View
       ref={box}
-      role="table"
+      role="grid"
       aria-label={label}
       aria-rowcount={down.length + 1}
       aria-colcount={across.length + 1}

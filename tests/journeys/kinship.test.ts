@@ -58,12 +58,12 @@ const open = async (page: Page, path: string) => {
   await page.getByText('Loading', { exact: false }).first().waitFor({ state: 'hidden' });
 };
 
-const cell = (page: Page, two: string) => page.getByRole('button', { name: new RegExp(`^${two}: kinship`) });
+const cell = (page: Page, two: string) => page.getByRole('gridcell', { name: new RegExp(`^${two}: kinship`) });
 
 /** Goes along the table until the cell of two fish is drawn. */
 async function broughtIn(page: Page, two: string): Promise<Locator> {
   const found = cell(page, two);
-  const table = page.getByRole('table');
+  const table = page.getByRole('grid');
   await table.waitFor();
   for (let step = 0; step < 60 && (await found.count()) === 0; step += 1) {
     await table.evaluate((box) => box.scrollBy({ left: box.clientWidth / 2 }));
@@ -77,7 +77,7 @@ async function kinshipOf(page: Page, down: string, across: string): Promise<stri
   await page.getByRole('searchbox', { name: /Fish, tank, colony/ }).fill(down);
   const found = await broughtIn(page, down === across ? `${down} with itself` : `${across} with ${down}`);
   const said = (await found.first().getAttribute('aria-label')) ?? '';
-  await page.getByRole('table').evaluate((table) => table.scrollTo({ left: 0 }));
+  await page.getByRole('grid').evaluate((table) => table.scrollTo({ left: 0 }));
   return /kinship ([\d.]+)/.exec(said)?.[1] ?? said;
 }
 
@@ -117,7 +117,7 @@ type Asked = { search: string; rows: number } | { press: string; rows: number };
 /** Milliseconds from the letter or the press until the table is drawn anew, measured in the page itself. */
 const answeredIn = (page: Page, asked: Asked): Promise<number> =>
   page.evaluate(async (of) => {
-    const table = () => document.querySelector('[role=table]');
+    const table = () => document.querySelector('[role=grid]');
     const from = performance.now();
     if ('search' in of) {
       const field = document.querySelector<HTMLInputElement>('main input[type=search]');
