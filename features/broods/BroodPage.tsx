@@ -135,6 +135,9 @@ function BroodMenu({ told: { brood } }: { told: BroodTold }) {
       : []),
     ...(may(room.role, 'hand:over') ? [{ word: 'Left: given, traded, sold', href: form('left') }] : []),
     { word: 'Lineage', href: `/r/${room.id}/lineage/${brood.id}` as const },
+    ...(may(room.role, 'parentage:write')
+      ? [{ word: 'Set parents', href: `/r/${room.id}/lineage/parents/${brood.id}` as const }]
+      : []),
   ];
   return <Menu label="More" items={items} />;
 }

@@ -99,6 +99,9 @@ function FishMenu({ told: { fish } }: { told: FishTold }) {
       label="More"
       items={[
         { word: 'Lineage', href: `${home}/lineage/${fish.id}` },
+        ...(may(room.role, 'parentage:write')
+          ? [{ word: 'Set parents', href: `${home}/lineage/parents/${fish.id}` as const }]
+          : []),
         { word: 'Lineage sheet', href: `${home}/sheets/new?fish=${fish.id}` },
         ...(may(room.role, 'entry:record') && !fish.exit
           ? [

@@ -27,6 +27,8 @@ export function HoldMenu({ hold }: { hold: HoldRow }) {
       note: hold.holder ? `Its days, or the ${carer}` : `Its days, or which ${carer} it is`,
       href: `${home}/record/hold-correction?hold=${hold.id}`,
     });
+  if (may(room.role, 'parentage:write'))
+    items.push({ word: 'Set parents', icon: 'lineage', href: `${home}/lineage/parents/${hold.id}` });
   if (hold.holder) items.push({ word: `The ${carer}`, icon: 'next', href: `${home}/fish/${hold.holder.id}` });
   if (hold.colony)
     items.push({ word: `Colony ${hold.colony.code}`, icon: 'next', href: `${home}/colonies/${hold.colony.id}` });

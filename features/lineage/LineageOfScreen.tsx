@@ -91,6 +91,9 @@ function LineageOf({ nodes, node, sheet }: { nodes: Nodes; node: LineageNode; sh
             label={node.thing === 'brood' ? 'The brood' : 'The fish'}
             href={`${home}/${place}/${node.id}`}
           />
+          {may(room.role, 'parentage:write') ? (
+            <Button grow small icon="edit" label="Set parents" href={`${home}/lineage/parents/${node.id}`} />
+          ) : null}
           {may(room.role, 'sheet:see') ? (
             <Button
               grow

@@ -1,6 +1,7 @@
 import { queryOptions } from '@tanstack/react-query';
+import type * as z from 'zod/mini';
 import { call } from '@/features/call';
-import { readPedigree } from '@/shared/lineage/contract';
+import { listContradictions, readParentage, readPedigree } from '@/shared/lineage/contract';
 
 /** The whole pedigree of the fishroom; everything of the Lineage place is worked out from it here. */
 export const pedigreeQuery = (roomId: string) =>
@@ -16,4 +17,20 @@ export const pedigreeAroundQuery = (roomId: string, id: string) =>
     queryKey: [roomId, 'pedigree', id],
     queryFn: ({ signal }) => call(readPedigree, { params: { roomId }, query: { around: id }, signal }),
     select: ({ nodes }) => nodes,
+  });
+
+export type ParentageRead = z.output<typeof readParentage.output>;
+
+/** The parents that can be set at a fish, a brood or a hold, with what was said of them before. */
+export const parentageQuery = (roomId: string, animalId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'pedigree', 'parents', animalId],
+    queryFn: ({ signal }) => call(readParentage, { params: { roomId, animalId }, signal }),
+  });
+
+export const contradictionsQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'pedigree', 'contradictions'],
+    queryFn: ({ signal }) => call(listContradictions, { params: { roomId }, signal }),
+    select: ({ contradictions }) => contradictions,
   });

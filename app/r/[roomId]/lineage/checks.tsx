@@ -1,0 +1,5 @@
+import { ContradictionsScreen } from '@/features/lineage/ContradictionsScreen';
+
+export default function Contradictions() {
+  return <ContradictionsScreen />;
+}
