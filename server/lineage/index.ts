@@ -1,13 +1,18 @@
 import {
   changeParentage,
+  exportTable,
+  importTable,
   listContradictions,
   previewParentage,
+  previewTable,
   readParentage,
   readPedigree,
 } from '../../shared/lineage/contract';
 import type { Feature } from '../features';
 import { changeOf, parentageOf, previewOf } from './change';
 import { contradictionsOf } from './contradictions';
+import { tableOf } from './exportTable';
+import { checkTable, takeTable } from './importTable';
 import { lineageNodes } from './nodes';
 
 export { lineageNodes } from './nodes';
@@ -21,6 +26,12 @@ export const lineage: Feature = {
     serve.read(readParentage, (scope, { params }) => parentageOf(scope, params.animalId));
     serve.work(previewParentage, (scope, { params, body }) => previewOf(scope, params.animalId, body));
     serve.write(changeParentage, (scope, { params, body }) => changeOf(scope, params.animalId, body));
+    serve.read(exportTable, async (scope) => ({ text: await tableOf(scope) }));
+    serve.work(previewTable, async (scope, { body }) => {
+      const { rows, bad } = await checkTable(scope, body.text);
+      return { rows: rows.length, bad };
+    });
+    serve.write(importTable, (scope, { body }) => takeTable(scope, body.text));
     serve.read(listContradictions, async (scope) => ({ contradictions: await contradictionsOf(scope) }));
   },
 };

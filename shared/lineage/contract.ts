@@ -145,3 +145,39 @@ export const listContradictions = endpoint({
   params: inRoom({}),
   output: z.strictObject({ contradictions: z.array(Contradiction) }),
 });
+
+const TableText = z
+  .string('Choose a file')
+  .check(z.minLength(1, 'The file is empty'), z.maxLength(2_000_000, 'At most 2 MB'));
+
+/** The pedigree as a table: id, sire, dam, sex, born, strain, clutch, fathers. See `pedigreeTable.ts` in the server. */
+export const exportTable = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/pedigree-table',
+  needs: 'lineage:see',
+  params: inRoom({}),
+  output: z.strictObject({ text: z.string() }),
+});
+
+const BadCell = z.strictObject({ line: z.number(), column: z.string(), value: z.string(), says: z.string() });
+export type BadCell = z.output<typeof BadCell>;
+
+/** Names every bad row of a table. Nothing is written. */
+export const previewTable = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/pedigree-table/preview',
+  needs: 'data:import',
+  params: inRoom({}),
+  body: z.strictObject({ text: TableText }),
+  output: z.strictObject({ rows: z.number(), bad: z.array(BadCell) }),
+});
+
+/** Writes the whole table, or nothing where a row is bad. */
+export const importTable = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/pedigree-table',
+  needs: 'data:import',
+  params: inRoom({}),
+  body: z.strictObject({ text: TableText }),
+  output: z.strictObject({ rows: z.number() }),
+});

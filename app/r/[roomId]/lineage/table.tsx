@@ -1,0 +1,5 @@
+import { TableScreen } from '@/features/lineage/TableScreen';
+
+export default function PedigreeTable() {
+  return <TableScreen />;
+}
