@@ -10,6 +10,7 @@ import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { useSearchWord } from '@/hooks/useSearchWord';
 import type { LineageNode } from '@/shared/lineage/contract';
+import { ContradictionsLink } from './ContradictionsLink';
 import type { Nodes } from './entries';
 import { FoundAnimals } from './FoundAnimals';
 import { LineageFrame } from './LineageFrame';
@@ -22,8 +23,12 @@ const READABLE = 60;
 
 /** All living fish and broods of a strain with three generations behind them. */
 export function LineageGraphScreen() {
+  const room = useRoom();
   return (
-    <LineageFrame tab="graph">
+    <LineageFrame
+      tab="graph"
+      actions={<Button small icon="download" label="Table" href={`/r/${room.id}/lineage/table`} />}
+    >
       {(nodes, scope) => <GraphIn key={scope.value} nodes={nodes} scope={scope} />}
     </LineageFrame>
   );
@@ -37,6 +42,7 @@ function GraphIn({ nodes, scope }: { nodes: Nodes; scope: Scope }) {
   const listed = search.trim() !== '' || (many && !whole);
   return (
     <View style={{ gap: space[3] }}>
+      <ContradictionsLink />
       <SearchField value={search} onChange={setSearch} placeholder="Fish, brood, tank, colony" />
       <Text tone="soft">
         {`${living.length} living fish and broods. ${listed ? 'Press one for its own lineage.' : 'Drawn with their ancestors over three generations; press one for its own page.'}`}
