@@ -9,6 +9,13 @@ export const roomPages: readonly RoomPage[] = [
   { name: 'sheets', word: 'Lineage sheets', note: 'What they tell of other people, keys', needs: 'key:manage' },
   { name: 'orders', word: 'Orders', note: 'Holding time, deposit, losses, bank transfer', needs: 'money:see' },
   { name: 'letters', word: 'Letters', note: 'What went out, what waits, what was not taken', needs: 'buyer:see' },
+  { name: 'import', word: 'Import', note: 'A fishroom from an archive', needs: 'data:import' },
+  {
+    name: 'export',
+    word: 'Export and checks',
+    note: 'Archive, tables, what is missing, deleting',
+    needs: 'data:export',
+  },
   { name: 'trail', word: 'Audit trail', note: 'Who recorded and changed what, and when', needs: 'audit:see' },
 ];
 
@@ -16,4 +23,5 @@ export const yourPages = [
   { name: 'you', word: 'Name and units', note: 'How you are named, and what you read in' },
   { name: 'security', word: 'Address and password', note: 'Email, password, second step' },
   { name: 'sign-ins', word: 'Sign-ins', note: 'Devices that are signed in as you' },
+  { name: 'delete-account', word: 'Delete your account', note: 'Name, address and sign-ins go' },
 ] as const;

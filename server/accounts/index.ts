@@ -7,6 +7,8 @@ import { startSweep } from './sweep';
 
 export { hashPassword } from './passwords';
 
+export { mustKnowPassword } from './security';
+
 export const accounts: Feature = {
   routes: (serve) => {
     const limits = openLimits();

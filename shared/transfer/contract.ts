@@ -26,3 +26,72 @@ export const checkIntegrity = endpoint({
   params: inRoom({}),
   output: IntegrityReport,
 });
+
+/** The whole fishroom as a zip: JSON lines by table and the pictures. README.md describes it. */
+export const exportArchive = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/export/archive',
+  needs: 'data:export',
+  kind: 'file',
+  params: inRoom({}),
+  output: z.unknown(),
+});
+
+/** Every table as CSV, in a zip. */
+export const exportTables = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/export/tables',
+  needs: 'data:export',
+  kind: 'file',
+  params: inRoom({}),
+  output: z.unknown(),
+});
+
+/** A form with the archive in `file`. Makes a fishroom of it, which belongs to whoever sends it. */
+export const importArchive = endpoint({
+  method: 'POST',
+  path: '/api/archives',
+  needs: 'signedIn',
+  kind: 'upload',
+  output: z.strictObject({ id: Id }),
+});
+
+/** Days between the word and the deed. */
+export const WAITING_DAYS = 14;
+
+const Deletion = z.strictObject({ deleteAfter: z.nullable(z.string()) });
+
+export const readDeletion = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/deletion',
+  needs: 'room:manage',
+  params: inRoom({}),
+  output: Deletion,
+});
+
+/** The fishroom's name is typed to confirm. */
+export const askDeletion = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/deletion',
+  needs: 'room:manage',
+  params: inRoom({}),
+  body: z.strictObject({ name: z.string('Type its name').check(z.maxLength(200, 'Type its name')) }),
+  output: Deletion,
+});
+
+export const cancelDeletion = endpoint({
+  method: 'DELETE',
+  path: '/api/rooms/:roomId/deletion',
+  needs: 'room:manage',
+  params: inRoom({}),
+  output: Deletion,
+});
+
+/** The password once more, where the account has one. */
+export const deleteAccount = endpoint({
+  method: 'POST',
+  path: '/api/me/delete',
+  needs: 'signedIn',
+  body: z.strictObject({ current: z.nullable(z.string('Type your password').check(z.maxLength(200, 'Too long'))) }),
+  output: z.strictObject({ ok: z.literal(true) }),
+});

@@ -1,0 +1,5 @@
+import { DeleteAccountScreen } from '@/features/transfer/DeleteAccountScreen';
+
+export default function DeleteAccountPage() {
+  return <DeleteAccountScreen />;
+}

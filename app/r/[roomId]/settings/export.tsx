@@ -1,0 +1,5 @@
+import { ExportScreen } from '@/features/transfer/ExportScreen';
+
+export default function ExportPage() {
+  return <ExportScreen />;
+}

@@ -1,0 +1,5 @@
+import { ImportScreen } from '@/features/transfer/ImportScreen';
+
+export default function ImportPage() {
+  return <ImportScreen />;
+}
