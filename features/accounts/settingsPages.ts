@@ -9,7 +9,7 @@ export const roomPages: readonly RoomPage[] = [
   { name: 'sheets', word: 'Lineage sheets', note: 'What they tell of other people, keys', needs: 'key:manage' },
   { name: 'orders', word: 'Orders', note: 'Holding time, deposit, losses, bank transfer', needs: 'money:see' },
   { name: 'letters', word: 'Letters', note: 'What went out, what waits, what was not taken', needs: 'buyer:see' },
-  { name: 'import', word: 'Import', note: 'A fishroom from an archive', needs: 'data:import' },
+  { name: 'import', word: 'Import', note: 'Spreadsheets, a fishroom from an archive', needs: 'data:import' },
   {
     name: 'export',
     word: 'Export and checks',

@@ -7,14 +7,20 @@ import { Screen } from '@/components/ui/Screen';
 import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
+import { CsvPart } from './CsvPart';
 import { chooseFile } from './chooseFile';
+import { ImportsPart } from './ImportsPart';
 import { useBringIn } from './queries';
 
-/** What comes in: a whole fishroom from an archive. */
+/** What comes in: lines of a spreadsheet, or a whole fishroom from an archive. */
 export function ImportScreen() {
   const room = useRoom();
   return (
     <Screen title="Import" back={`/r/${room.id}/settings`} measure>
+      <Section title="A spreadsheet" aside="CSV">
+        <CsvPart />
+      </Section>
+      <ImportsPart />
       <Section title="An archive" aside="becomes a fishroom of its own">
         <ArchivePart />
       </Section>
@@ -34,7 +40,6 @@ function ArchivePart() {
       </Text>
       {bringIn.error ? <Notice tone="act" alert title="Not brought in" words={bringIn.error.message} /> : null}
       <Button
-        kind="primary"
         small
         label="Choose an archive"
         busy={bringIn.isPending}

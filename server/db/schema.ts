@@ -122,6 +122,20 @@ type ColonyMemberTable = {
   endEntryId: string | null;
 };
 
+type DataImportTable = {
+  roomId: string;
+  id: string;
+  kind: 'tanks' | 'fish' | 'colonies' | 'holds' | 'broods' | 'counts' | 'samples';
+  fileName: string;
+  columns: string;
+  units: string;
+  rows: number;
+  made: string;
+  actorId: string;
+  createdAt: string;
+  undoneAt: string | null;
+};
+
 type EntryTable = {
   roomId: string;
   id: string;
@@ -788,6 +802,7 @@ export type Database = {
   checkout: CheckoutTable;
   colony: ColonyTable;
   colonyMember: ColonyMemberTable;
+  dataImport: DataImportTable;
   entry: EntryTable;
   entryAbout: EntryAboutTable;
   finding: FindingTable;

@@ -34,9 +34,9 @@ const ENDED = ['colonyMember', 'stay', 'tankCare'] as const;
 
 /**
  * Takes an entry back. The rows it made go, the intervals it ended go on, ledger lines are reversed (the ledger is never
- * edited), and the entry itself stays in the history, marked as undone.
+ * edited), and the entry itself stays in the history, marked as undone. `whenever`: a whole import has no such minutes.
  */
-export async function undo(scope: Scope, entryId: string): Promise<void> {
+export async function undo(scope: Scope, entryId: string, { whenever = false } = {}): Promise<void> {
   const { db, roomId, actorId, now } = scope;
   const entry = await db
     .selectFrom('entry')
@@ -48,7 +48,7 @@ export async function undo(scope: Scope, entryId: string): Promise<void> {
   if (entry.undoneAt) return;
   if (entry.actorId !== actorId && !may(scope.role, 'entry:correct'))
     throw new Refusal('forbidden', 'Only a keeper or owner can undo another person’s entry');
-  if (Date.parse(now) > Date.parse(entry.receivedAt) + UNDO_MINUTES * 60_000) {
+  if (!whenever && Date.parse(now) > Date.parse(entry.receivedAt) + UNDO_MINUTES * 60_000) {
     throw new Refusal('conflict', `After ${UNDO_MINUTES} minutes an entry is corrected by another, not undone`);
   }
   // Marked first: only lines of an undone entry may leave the ledger, and only with the batch that it made.

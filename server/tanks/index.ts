@@ -3,6 +3,6 @@ import { tankRoutes } from './routes';
 
 export { type Presence, presenceIn } from './presence';
 export { staysOf } from './residents';
-export { allTanks, oneTank } from './tanks';
+export { addOne, allTanks, oneTank } from './tanks';
 
 export const tanks: Feature = { routes: tankRoutes };

@@ -9,7 +9,11 @@ import {
   exportArchive,
   exportTables,
   importArchive,
+  listImports,
+  previewImport,
   readDeletion,
+  runImport,
+  undoImport,
 } from '../../shared/transfer/contract';
 import type { Serve } from '../http/serve';
 import { endSession } from '../http/session';
@@ -21,6 +25,8 @@ import { writeArchive } from './exportArchive';
 import { writeTables } from './exportTables';
 import { checkFile } from './fileCheck';
 import { importArchive as bringIn } from './importArchive';
+import { preview, run } from './importCsv';
+import { importsOf, takeBack } from './importUndo';
 import { contentReport } from './integrity';
 import { receiveFile } from './receiveFile';
 
@@ -42,6 +48,10 @@ export function transferRoutes(serve: Serve): void {
   serve.signedIn(importArchive, (asked, _input, raw) =>
     receiveFile(asked.house, raw, asked.house.config.roomQuotaBytes + 300_000_000, (file) => bringIn(asked, file)),
   );
+  serve.work(previewImport, (scope, { body }) => preview(scope, body));
+  serve.work(runImport, (scope, { body }) => run(scope, body));
+  serve.read(listImports, (scope) => importsOf(scope));
+  serve.write(undoImport, (scope, { params }) => takeBack(scope, params.importId));
   serve.read(readDeletion, (scope) => deletionOf(scope));
   serve.write(askDeletion, (scope, { body }) => askToDelete(scope, body.name));
   serve.write(cancelDeletion, (scope) => callOff(scope));

@@ -7,6 +7,7 @@ export const TABLE_WORDS: Record<string, string> = {
   buyer: 'somebody who asked for fish',
   colony: 'fish kept together to breed',
   colonyMember: 'a fish’s time in a colony',
+  dataImport: 'a file that was brought in',
   entry: 'something that was recorded, as it was sent',
   entryAbout: 'what an entry is about',
   finding: 'what was seen of a fish: sex, rank, mark, condition',
