@@ -1,0 +1,5 @@
+import { OwnOrdersScreen } from '@/features/orders/OwnOrdersScreen';
+
+export default function OwnOrders() {
+  return <OwnOrdersScreen />;
+}
