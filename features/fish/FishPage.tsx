@@ -109,6 +109,9 @@ function FishMenu({ told: { fish } }: { told: FishTold }) {
               { word: 'Died, given away, sold', href: `${home}/record/fish-left?${at}` as const },
             ]
           : []),
+        ...(may(room.role, 'parentage:write')
+          ? [{ word: 'Same fish as another', href: `${home}/fish/${fish.id}/merge` as const }]
+          : []),
         ...(may(room.role, 'stock:write') ? [{ word: 'Change', href: `${home}/fish/${fish.id}/change` as const }] : []),
       ]}
     />

@@ -5,6 +5,7 @@ import { useRoom } from '@/hooks/useRoom';
 import { listColonies } from '@/shared/colonies/contract';
 import { addFish, changeFish, listFish, proposeFishCodes, readFish } from '@/shared/fish/contract';
 import { listHolds } from '@/shared/holds/contract';
+import { mergeFish } from '@/shared/lineage/contract';
 import { listStrains, readStrain } from '@/shared/strains/contract';
 
 export const fishListQuery = (roomId: string, which: 'living' | 'all') =>
@@ -74,6 +75,15 @@ export function useChangeFish(fishId: string) {
   const cache = useQueryClient();
   return useMutation({
     mutationFn: (body: z.input<typeof changeFish.body>) => call(changeFish, { params: { roomId, fishId }, body }),
+    onSuccess: () => cache.invalidateQueries({ queryKey: [roomId] }),
+  });
+}
+
+export function useMergeFish(fishId: string) {
+  const { id: roomId } = useRoom();
+  const cache = useQueryClient();
+  return useMutation({
+    mutationFn: (body: z.input<typeof mergeFish.body>) => call(mergeFish, { params: { roomId, fishId }, body }),
     onSuccess: () => cache.invalidateQueries({ queryKey: [roomId] }),
   });
 }

@@ -3,6 +3,7 @@ import {
   exportTable,
   importTable,
   listContradictions,
+  mergeFish,
   previewParentage,
   previewTable,
   readParentage,
@@ -13,6 +14,7 @@ import { changeOf, parentageOf, previewOf } from './change';
 import { contradictionsOf } from './contradictions';
 import { tableOf } from './exportTable';
 import { checkTable, takeTable } from './importTable';
+import { merge } from './merge';
 import { lineageNodes } from './nodes';
 
 export { lineageNodes } from './nodes';
@@ -32,6 +34,7 @@ export const lineage: Feature = {
       return { rows: rows.length, bad };
     });
     serve.write(importTable, (scope, { body }) => takeTable(scope, body.text));
+    serve.write(mergeFish, (scope, { params, body }) => merge(scope, params.fishId, body));
     serve.read(listContradictions, async (scope) => ({ contradictions: await contradictionsOf(scope) }));
   },
 };

@@ -3,7 +3,7 @@ import { DayText } from '../days';
 import { Done, endpoint, inRoom } from '../endpoint';
 import { ParentageTold } from '../holds/contract';
 import { Id } from '../ids';
-import { Instant } from '../shapes';
+import { Instant, Note } from '../shapes';
 import { ParentageDraft } from './parentageDraft';
 
 const Candidates = z.array(z.strictObject({ id: z.nullable(Id), weight: z.number() }));
@@ -180,4 +180,14 @@ export const importTable = endpoint({
   params: inRoom({}),
   body: z.strictObject({ text: TableText }),
   output: z.strictObject({ rows: z.number() }),
+});
+
+/** Two records that are one fish: this one ends, what it did and was counts for the other. */
+export const mergeFish = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/fish/:fishId/merge',
+  needs: 'parentage:write',
+  params: inRoom({ fishId: Id }),
+  body: z.strictObject({ intoId: Id, note: Note }),
+  output: z.strictObject({ fishId: Id, code: z.nullable(z.string()) }),
 });
