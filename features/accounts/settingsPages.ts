@@ -7,6 +7,7 @@ export const roomPages: readonly RoomPage[] = [
   { name: 'fishroom', word: 'Fishroom', note: 'Name, place, time zone, currency, units', needs: 'room:see' },
   { name: 'members', word: 'Members', note: 'Roles, invitations, leaving', needs: 'member:see' },
   { name: 'sheets', word: 'Lineage sheets', note: 'What they tell of other people, keys', needs: 'key:manage' },
+  { name: 'intervals', word: 'When things are due', note: 'Checks, head counts, samples, water', needs: 'room:see' },
   { name: 'orders', word: 'Orders', note: 'Holding time, deposit, losses, bank transfer', needs: 'money:see' },
   { name: 'letters', word: 'Letters', note: 'What went out, what waits, what was not taken', needs: 'buyer:see' },
   { name: 'import', word: 'Import', note: 'Spreadsheets, a fishroom from an archive', needs: 'data:import' },

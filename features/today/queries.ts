@@ -2,12 +2,18 @@ import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query
 import type * as z from 'zod/mini';
 import { call } from '@/features/call';
 import { useRoom } from '@/hooks/useRoom';
-import { decideTask, readToday } from '@/shared/today/contract';
+import { decideTask, readIntervals, readToday } from '@/shared/today/contract';
 
 export const todayQuery = (roomId: string) =>
   queryOptions({
     queryKey: [roomId, 'today'],
     queryFn: ({ signal }) => call(readToday, { params: { roomId }, signal }),
+  });
+
+export const intervalsQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'intervals'],
+    queryFn: ({ signal }) => call(readIntervals, { params: { roomId }, signal }),
   });
 
 /** Done, skipped, put off or given to someone. */

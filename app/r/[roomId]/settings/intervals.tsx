@@ -1,0 +1,5 @@
+import { IntervalsScreen } from '@/features/today/IntervalsScreen';
+
+export default function Intervals() {
+  return <IntervalsScreen />;
+}
