@@ -2,6 +2,7 @@ import type { Express } from 'express';
 import { accounts } from './accounts';
 import { auditTrail } from './audit';
 import { broods } from './broods';
+import { buyers } from './buyers';
 import { colonies } from './colonies';
 import { demo } from './demo';
 import { fish } from './fish';
@@ -56,6 +57,7 @@ export const features: Feature[] = [
   plans,
   sheets,
   orders,
+  buyers,
   record,
   transfer,
   demo,

@@ -57,7 +57,10 @@ export function placesOf(roomId: string, role: Role): Place[] {
     places.push({
       name: 'buyers',
       href: `${home}/buyers`,
-      subPlaces: [{ name: 'orders', word: 'Orders', href: `${home}/buyers/orders` }],
+      subPlaces: [
+        { name: 'orders', word: 'Orders', href: `${home}/buyers/orders` },
+        { name: 'availability', word: 'Availability', href: `${home}/buyers/availability` },
+      ],
     });
   return places;
 }

@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -23,8 +24,8 @@ import { may } from '@/shared/roles';
 import { ordersQuery } from './queries';
 import { needWords, whenWords } from './words';
 
-/** Orders, newest first: those that are not closed, or all. */
-export function OrderList({ chosen }: { chosen?: string }) {
+/** Orders, newest first: those that are not closed, or all. `tabs`: the pages of the place, on a phone. */
+export function OrderList({ chosen, tabs }: { chosen?: string; tabs?: ReactNode }) {
   const room = useRoom();
   const { data, error, refetch } = useQuery(ordersQuery(room.id));
   const [show, setShow] = useUrlWord('show', 'open', ['open', 'all']);
@@ -34,6 +35,7 @@ export function OrderList({ chosen }: { chosen?: string }) {
   return (
     <Screen
       title="Orders"
+      fixed={tabs}
       actions={
         <>
           {may(room.role, 'money:see') ? (

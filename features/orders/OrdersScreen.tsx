@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
+import type { ReactNode } from 'react';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorState } from '@/components/ui/ErrorState';
 import { Loading } from '@/components/ui/Loading';
@@ -9,10 +10,10 @@ import { OrderList } from './OrderList';
 import { OrderPage } from './OrderPage';
 import { orderQuery } from './queries';
 
-export function OrdersScreen() {
+export function OrdersScreen({ tabs }: { tabs: ReactNode }) {
   return (
     <TwoPane
-      list={<OrderList />}
+      list={<OrderList tabs={tabs} />}
       detail={null}
       nothing={
         <EmptyState title="Choose an order" words="Its fish, its money, and what happens next are shown here." />

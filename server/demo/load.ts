@@ -9,6 +9,7 @@ import { keepEntry } from '../record';
 import type { Scope } from '../scope';
 import { idsOf, instantOf, withIds } from './ids';
 import { loadSales } from './sales';
+import { PUBLIC_PAGE } from './scenario/orders';
 import type { Happening, Scenario } from './scenario/shape';
 
 /** Everyone of the demo signs in with this; it is printed at the start, and the demo is never made in production. */
@@ -52,7 +53,7 @@ async function people({ db, scenario, roomId, idOf, nowMs }: Loading, passwordHa
     .values({
       id: roomId,
       ...room,
-      settings: JSON.stringify({ units: METRIC, sheetsShowPeople: true }),
+      settings: JSON.stringify({ units: METRIC, sheetsShowPeople: true, availability: PUBLIC_PAGE }),
       deleteAfter: null,
       createdAt,
     })

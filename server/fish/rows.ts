@@ -1,7 +1,7 @@
 import { type ExpressionBuilder, sql } from 'kysely';
 import type { FishRow } from '../../shared/fish/contract';
 import type { Database } from '../db/schema';
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 import { speciesNames } from '../species';
 
 /** `foreign`: ancestors too that are known from sheets of other fishrooms and have no life here. */
@@ -21,7 +21,7 @@ const lastFinding = (eb: Row, kind: 'sex' | 'mark' | 'dominance') =>
     .limit(1);
 
 /** Fish as lists show them, by code; anonymous ones last. */
-export async function fishRows(scope: Scope, which: Which = {}): Promise<FishRow[]> {
+export async function fishRows(scope: RoomAsked, which: Which = {}): Promise<FishRow[]> {
   const { db, roomId } = scope;
   let query = db
     .selectFrom('fish')

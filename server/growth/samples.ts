@@ -2,7 +2,7 @@ import type * as z from 'zod/mini';
 import type { listSamples, listStrainSamples, Sample } from '../../shared/growth/contract';
 import { notFound } from '../../shared/refusal';
 import { sourcesOf } from '../broods';
-import type { Scope } from '../scope';
+import type { RoomAsked, Scope } from '../scope';
 import { figuresOf } from '../species';
 
 /** A chart that compares more broods than these says nothing; the latest were kept as these are. */
@@ -13,7 +13,7 @@ type Wanted = { broodIds?: string[]; batchIds?: string[]; fishIds?: string[] };
 
 /** Samples with their readings, oldest first. */
 export async function samplesOf(
-  scope: Scope,
+  scope: RoomAsked,
   { broodIds = [], batchIds = [], fishIds = [] }: Wanted,
 ): Promise<Sample[]> {
   const { db, roomId } = scope;
@@ -73,7 +73,7 @@ export async function samplesOf(
   });
 }
 
-async function readingsOf({ db, roomId }: Scope, sampleIds: string[]): Promise<Map<string, Sample['readings']>> {
+async function readingsOf({ db, roomId }: RoomAsked, sampleIds: string[]): Promise<Map<string, Sample['readings']>> {
   const readings = new Map<string, Sample['readings']>();
   if (sampleIds.length === 0) return readings;
   const rows = await db
@@ -93,7 +93,7 @@ async function readingsOf({ db, roomId }: Scope, sampleIds: string[]): Promise<M
 }
 
 /** A brood's own samples and those of the batches that it swims or swam in. */
-export async function samplesOfBrood(scope: Scope, broodId: string): Promise<Sample[]> {
+export async function samplesOfBrood(scope: RoomAsked, broodId: string): Promise<Sample[]> {
   const { db, roomId } = scope;
   const batches = await db
     .selectFrom('batchSource')

@@ -3,7 +3,7 @@ import type { LineageNode } from '../../shared/lineage/contract';
 import { type Parentage, type PedigreeEntry, pairsOf } from '../../shared/lineage/pedigree';
 import { notFound } from '../../shared/refusal';
 import { fishRows } from '../fish';
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 import { speciesNames } from '../species';
 import { pedigreeOf } from './pedigree';
 import { type ToldAnimal, toldAnimals } from './told';
@@ -12,7 +12,7 @@ type Node = z.input<typeof LineageNode>;
 type About = Omit<Extract<Node, { sire: unknown }>, 'sire' | 'dam'>;
 
 /** The pedigree with what screens and sheets say of each animal; of one animal only those it descends from and its descendants. */
-export async function lineageNodes(scope: Scope, around?: string): Promise<Node[]> {
+export async function lineageNodes(scope: RoomAsked, around?: string): Promise<Node[]> {
   const { entries } = await pedigreeOf(scope);
   const kept = around ? relativesOf(entries, around) : entries;
   if (around && !kept.some(({ id }) => id === around)) throw notFound('That animal');
@@ -28,7 +28,7 @@ export async function lineageNodes(scope: Scope, around?: string): Promise<Node[
 const parentsOf = (entry: PedigreeEntry) =>
   'from' in entry ? { from: entry.from } : { sire: entry.sire, dam: entry.dam };
 
-async function fishAbout(scope: Scope, ids?: string[]): Promise<[string, About][]> {
+async function fishAbout(scope: RoomAsked, ids?: string[]): Promise<[string, About][]> {
   const { db, roomId } = scope;
   const rows = await fishRows(scope, { foreign: true, ...(ids ? { ids } : {}) });
   const told = await toldAnimals(scope);
@@ -115,7 +115,7 @@ function toldGeneration({ entry }: ToldAnimal): number | null {
   return !known && generation && generation.low === generation.high ? generation.low : null;
 }
 
-async function broodsAbout(scope: Scope, ids?: string[]): Promise<[string, About][]> {
+async function broodsAbout(scope: RoomAsked, ids?: string[]): Promise<[string, About][]> {
   const { db, roomId } = scope;
   let query = db
     .selectFrom('brood')

@@ -1,6 +1,6 @@
 import type { ParentageTold } from '../../shared/holds/contract';
 import type { Candidate, Parentage, PedigreeEntry, WeightedPair } from '../../shared/lineage/pedigree';
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 import { parentagesOf } from './parentage';
 import { foreignNames, ownDraw, toldAnimals, toldParents } from './told';
 
@@ -12,7 +12,7 @@ export type RoomPedigree = { entries: PedigreeEntry[]; broodIds: string[]; fishI
  * a fish's own parentage goes first; else that of the brood it was taken out of; out of a mixed batch it comes from one of
  * several pairs, weighted by heads. Founders have parents outside the pedigree.
  */
-export async function pedigreeOf(scope: Scope): Promise<RoomPedigree> {
+export async function pedigreeOf(scope: RoomAsked): Promise<RoomPedigree> {
   const { db, roomId } = scope;
   const parentages = await parentagesOf(scope);
   const broods = await db.selectFrom('brood').where('roomId', '=', roomId).select(['id', 'parentageId']).execute();
@@ -62,7 +62,7 @@ export async function pedigreeOf(scope: Scope): Promise<RoomPedigree> {
 type Known = { ours: string[]; parentages: Map<string, ParentageTold>; merged: Map<string, string> };
 
 /** The parents that came with sheets from elsewhere; a parentage that was set here goes before them. */
-async function toldPedigree(scope: Scope, { ours, parentages, merged }: Known): Promise<Map<string, PedigreeEntry>> {
+async function toldPedigree(scope: RoomAsked, { ours, parentages, merged }: Known): Promise<Map<string, PedigreeEntry>> {
   const told = await toldAnimals(scope);
   if (told.size === 0) return new Map();
   const names = await foreignNames(scope);
@@ -117,7 +117,7 @@ function combined(candidates: Candidate[]): Candidate[] {
   return [...weights].map(([id, weight]) => ({ id, weight }));
 }
 
-async function mergedInto({ db, roomId }: Scope): Promise<Map<string, string>> {
+async function mergedInto({ db, roomId }: RoomAsked): Promise<Map<string, string>> {
   const rows = await db
     .selectFrom('fishExit')
     .where('roomId', '=', roomId)
@@ -129,7 +129,7 @@ async function mergedInto({ db, roomId }: Scope): Promise<Map<string, string>> {
 
 type SourceRow = { batchId: string; broodId: string; heads: number; fromDay: string; entryId: string | null };
 
-async function sourceLists({ db, roomId }: Scope, batchIds: string[]): Promise<Map<string, SourceRow[]>> {
+async function sourceLists({ db, roomId }: RoomAsked, batchIds: string[]): Promise<Map<string, SourceRow[]>> {
   const lists = new Map<string, SourceRow[]>();
   if (batchIds.length === 0) return lists;
   const rows = await db

@@ -9,6 +9,7 @@ import { stripeWebhook } from './webhook';
 export { touchLapsed } from './lapses';
 export { makeOrder } from './make';
 export { remind } from './reminders';
+export { termsOf } from './terms';
 export { ordersToday } from './today';
 
 export const orders: Feature = {

@@ -5,6 +5,7 @@ import { hasLeft, isHoldingState } from '../../shared/orders/state';
 import { notFound, Refusal } from '../../shared/refusal';
 import { availableOf, broodRows, changeClaim } from '../broods';
 import { audit } from '../db/audit';
+import { growthOfBrood, sizeTodayOf } from '../growth';
 import { hashOfToken, tokenOf } from '../mail/tokens';
 import type { Scope } from '../scope';
 import { lineRows } from './lines';
@@ -124,7 +125,7 @@ async function mustLive(
   if (heads !== 1) throw new Refusal('invalid', 'A fish with a code is one fish', { [`${field}.heads`]: 'One' });
 }
 
-/** By what is offered and the last measured length; 0 where no price is set, which the owner then gives. */
+/** By what is offered and the size today, by the growth curve; 0 where no price is set, which the owner then gives. */
 async function listPrice(
   scope: Acting,
   line: { broodId: string; lot: LineDraft['lot']; heads: number },
@@ -141,7 +142,8 @@ async function listPrice(
     classes: PriceClasses.parse(JSON.parse(listing.classes)),
     lots: PriceLots.parse(JSON.parse(listing.lots)),
   };
-  return priceOf(prices, { ...line, lengthTenthsMm: brood?.lastSample?.meanTenthsMm ?? null }) ?? 0;
+  const size = brood ? sizeTodayOf(await growthOfBrood(scope, brood), scope.today) : null;
+  return priceOf(prices, { ...line, lengthTenthsMm: size?.meanTenthsMm ?? null }) ?? 0;
 }
 
 /** Another number of heads, or the owner's own price. Fewer keep their place; more have to be available. */

@@ -34,6 +34,7 @@ import { checkAddress, issue, preview, sheetPage, sheetRows, storedSheet, withdr
 import { takeIn } from './takeIn';
 
 export { currentKeyId, openKey } from './keys';
+export { lineageTold } from './lineageTold';
 export { issueInside, sheetRows } from './sheets';
 export { verifySheet } from './signing';
 

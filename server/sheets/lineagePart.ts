@@ -6,7 +6,7 @@ import type { Parentage } from '../../shared/lineage/pedigree';
 import { animalId } from '../../shared/sheets/ancestry';
 import type { SheetContent } from '../../shared/sheets/content';
 import { drawKey, lineageNodes, toldAnimals } from '../lineage';
-import type { Scope } from '../scope';
+import type { RoomAsked } from '../scope';
 import { showsPeople } from './people';
 
 type Node = Awaited<ReturnType<typeof lineageNodes>>[number];
@@ -25,7 +25,7 @@ const parentIds = (node: Node): string[] =>
     : [...idsOf(node.sire), ...idsOf(node.dam)];
 
 /** The animal and every possible ancestor. */
-export async function ancestorsOf(scope: Scope, id: string): Promise<Node[]> {
+export async function ancestorsOf(scope: RoomAsked, id: string): Promise<Node[]> {
   const nodes = new Map((await lineageNodes(scope, id)).map((node) => [node.id, node]));
   const found = new Set([id]);
   for (const each of found) for (const parent of parentIds(nodes.get(each) ?? FOUNDER)) found.add(parent);
@@ -43,7 +43,7 @@ type Naming = {
 };
 
 /** An animal that came in by a sheet keeps its first issuer's name, so that it is one animal on every sheet. */
-export async function namingOf(scope: Scope): Promise<Naming> {
+export async function namingOf(scope: RoomAsked): Promise<Naming> {
   const told = await toldAnimals(scope);
   const showPeople = await showsPeople(scope);
   return {

@@ -1,8 +1,10 @@
 import { audit } from '../db/audit';
 import type { Scope } from '../scope';
 
+type InRoom = Pick<Scope, 'db' | 'roomId'>;
+
 /** Whether a sheet names the people that founders and ancestors came from: off until the owner turns it on. */
-export async function showsPeople(scope: Scope): Promise<boolean> {
+export async function showsPeople(scope: InRoom): Promise<boolean> {
   return (await settingsOf(scope))['sheetsShowPeople'] === true;
 }
 
@@ -20,7 +22,7 @@ export async function setShowsPeople(scope: Scope, showPeople: boolean): Promise
   return { showPeople };
 }
 
-async function settingsOf({ db, roomId }: Scope): Promise<Record<string, unknown>> {
+async function settingsOf({ db, roomId }: InRoom): Promise<Record<string, unknown>> {
   const { settings } = await db
     .selectFrom('room')
     .where('id', '=', roomId)

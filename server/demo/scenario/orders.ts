@@ -1,3 +1,4 @@
+import type { PublicPage } from '../../../shared/buyers/offers';
 import { addDays, type Day } from '../../../shared/days';
 import type { Ago, Key, Listing, Order, Request } from './shape';
 
@@ -168,6 +169,14 @@ export function ordersOn(today: Day): Order[] {
   );
   return [...fetched, ...open];
 }
+
+/** What the public page says besides the fish. */
+export const PUBLIC_PAGE: PublicPage = {
+  words:
+    'Mouthbrooders of the three lakes, bred here, each brood with its lineage sheet. Collection, or by courier in the warm months.',
+  contact: 'fish@underhill.example',
+  photoId: null,
+};
 
 /** What is shown on the public page; a possible hybrid is not offered. */
 export const LISTINGS: Listing[] = [

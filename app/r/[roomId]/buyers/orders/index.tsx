@@ -1,5 +1,6 @@
+import { BuyersTabs } from '@/features/buyers/BuyersTabs';
 import { OrdersScreen } from '@/features/orders/OrdersScreen';
 
 export default function Orders() {
-  return <OrdersScreen />;
+  return <OrdersScreen tabs={<BuyersTabs value="orders" />} />;
 }

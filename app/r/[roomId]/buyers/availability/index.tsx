@@ -1,0 +1,5 @@
+import { AvailabilityScreen } from '@/features/buyers/AvailabilityScreen';
+
+export default function Availability() {
+  return <AvailabilityScreen />;
+}

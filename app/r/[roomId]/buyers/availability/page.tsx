@@ -1,0 +1,5 @@
+import { PublicPageScreen } from '@/features/buyers/PublicPageScreen';
+
+export default function PublicPage() {
+  return <PublicPageScreen />;
+}

@@ -1,0 +1,5 @@
+import { PriceListScreen } from '@/features/buyers/PriceListScreen';
+
+export default function PriceList() {
+  return <PriceListScreen />;
+}
