@@ -1,5 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
-import { View } from 'react-native';
+import { StyleSheet, View } from 'react-native';
+import { line } from '@/components/theme/space';
+import { useTheme } from '@/components/theme/ThemeProvider';
 import { ErrorState } from '@/components/ui/ErrorState';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
@@ -31,13 +33,14 @@ export function AvailableScreen({ slug }: { slug: string }) {
 }
 
 function Page({ page }: { page: AvailablePage }) {
+  const theme = useTheme();
   const now = page.fish.filter(({ coming }) => coming === null);
   const coming = page.fish.filter((fish) => fish.coming !== null);
   return (
     <PublicFrame page={page}>
       <Section title="Available now" aside="price each">
         {now.length === 0 ? <Text tone="soft">No fish are available at the moment.</Text> : null}
-        <View role="list">
+        <View role="list" style={[styles.list, { borderTopColor: theme.rule }]}>
           {now.map((fish) => (
             <FishForSale key={fish.broodId} fish={fish} page={page} />
           ))}
@@ -45,7 +48,7 @@ function Page({ page }: { page: AvailablePage }) {
       </Section>
       {coming.length > 0 ? (
         <Section title="Coming">
-          <View role="list">
+          <View role="list" style={[styles.list, { borderTopColor: theme.rule }]}>
             {coming.map((fish) => (
               <FishForSale key={fish.broodId} fish={fish} page={page} />
             ))}
@@ -61,3 +64,5 @@ function Page({ page }: { page: AvailablePage }) {
     </PublicFrame>
   );
 }
+
+const styles = StyleSheet.create({ list: { borderTopWidth: line.row } });

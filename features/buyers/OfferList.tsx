@@ -1,5 +1,7 @@
 import { useQuery } from '@tanstack/react-query';
+import { View } from 'react-native';
 import type * as z from 'zod/mini';
+import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
 import { ButtonRow } from '@/components/ui/ButtonRow';
 import { EmptyState } from '@/components/ui/EmptyState';
@@ -49,10 +51,12 @@ function Offers({ told, chosen }: { told: Told; chosen: string | undefined }) {
   return (
     <>
       {may(room.role, 'money:see') ? (
-        <ButtonRow>
-          <Button small icon="print" label="Price list" href={`${home}/prices`} />
-          <Button small label="Public page" href={`${home}/page`} />
-        </ButtonRow>
+        <View style={{ paddingVertical: space[3] }}>
+          <ButtonRow>
+            <Button small grow icon="print" label="Price list" href={`${home}/prices`} />
+            <Button small grow label="Public page" href={`${home}/page`} />
+          </ButtonRow>
+        </View>
       ) : null}
       <Section title="On the public page" aside={listed.length === 0 ? 'none' : String(listed.length)}>
         <Rows bleed label="On the public page">

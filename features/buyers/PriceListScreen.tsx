@@ -36,10 +36,13 @@ export function PriceListScreen() {
       {data ? (
         <View style={{ gap: space[4] }}>
           <Select
-            label="For shops, less"
+            label="For whom"
             value={less}
             onChange={setLess}
-            options={LESS.map((value) => ({ value, word: value === '0' ? 'nothing taken off' : `${value} %` }))}
+            options={LESS.map((value) => ({
+              value,
+              word: value === '0' ? 'Prices as listed' : `For shops, ${value} % taken off`,
+            }))}
           />
           <Listed told={data} less={Number(less)} />
         </View>

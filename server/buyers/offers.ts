@@ -37,7 +37,12 @@ export async function offersOf(scope: Scope, ids?: string[]): Promise<Told[]> {
       listing: listing ? { ...listing, prices: seesMoney ? listing.prices : null } : null,
     });
   }
-  return told.sort((a, b) => Number(b.listing?.listed ?? false) - Number(a.listing?.listed ?? false));
+  return told.sort(
+    (a, b) =>
+      Number(b.listing?.listed ?? false) - Number(a.listing?.listed ?? false) ||
+      (a.displayName ?? '').localeCompare(b.displayName ?? '') ||
+      a.code.localeCompare(b.code),
+  );
 }
 
 /** What the owner and the public page say alike of a brood. */

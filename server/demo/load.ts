@@ -9,7 +9,7 @@ import { keepEntry } from '../record';
 import type { Scope } from '../scope';
 import { idsOf, instantOf, withIds } from './ids';
 import { loadSales } from './sales';
-import { PUBLIC_PAGE } from './scenario/orders';
+import { COVER, PUBLIC_PAGE } from './scenario/orders';
 import type { Happening, Scenario } from './scenario/shape';
 
 /** Everyone of the demo signs in with this; it is printed at the start, and the demo is never made in production. */
@@ -53,7 +53,11 @@ async function people({ db, scenario, roomId, idOf, nowMs }: Loading, passwordHa
     .values({
       id: roomId,
       ...room,
-      settings: JSON.stringify({ units: METRIC, sheetsShowPeople: true, availability: PUBLIC_PAGE }),
+      settings: JSON.stringify({
+        units: METRIC,
+        sheetsShowPeople: true,
+        availability: { ...PUBLIC_PAGE, photoId: idOf(COVER) },
+      }),
       deleteAfter: null,
       createdAt,
     })

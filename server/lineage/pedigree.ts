@@ -62,7 +62,10 @@ export async function pedigreeOf(scope: RoomAsked): Promise<RoomPedigree> {
 type Known = { ours: string[]; parentages: Map<string, ParentageTold>; merged: Map<string, string> };
 
 /** The parents that came with sheets from elsewhere; a parentage that was set here goes before them. */
-async function toldPedigree(scope: RoomAsked, { ours, parentages, merged }: Known): Promise<Map<string, PedigreeEntry>> {
+async function toldPedigree(
+  scope: RoomAsked,
+  { ours, parentages, merged }: Known,
+): Promise<Map<string, PedigreeEntry>> {
   const told = await toldAnimals(scope);
   if (told.size === 0) return new Map();
   const names = await foreignNames(scope);

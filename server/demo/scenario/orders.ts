@@ -171,12 +171,14 @@ export function ordersOn(today: Day): Order[] {
 }
 
 /** What the public page says besides the fish. */
-export const PUBLIC_PAGE: PublicPage = {
+export const PUBLIC_PAGE: Omit<PublicPage, 'photoId'> = {
   words:
     'Mouthbrooders of the three lakes, bred here, each brood with its lineage sheet. Collection, or by courier in the warm months.',
   contact: 'fish@underhill.example',
-  photoId: null,
 };
+
+/** The picture beside them. */
+export const COVER: Key = 'photo:colony MOIL-A -180';
 
 /** What is shown on the public page; a possible hybrid is not offered. */
 export const LISTINGS: Listing[] = [

@@ -115,7 +115,7 @@ const colony = (
 /** Pictures of grown fish, colonies, holds and tanks. Those of broods follow from their samples. */
 export const PHOTOS: PhotoStory[] = [
   colony('MOIL-A', 'MOIL', -700, 96, { caption: 'Out of quarantine' }),
-  colony('MOIL-A', 'MOIL', -180, 118, { pose: 'right' }),
+  colony('MOIL-A', 'MOIL', -180, 118, { pose: 'right', caption: 'The Ilangi colony' }),
   colony('LEMP-A', 'LEMP', -640, 98),
   colony('LEMP-B', 'LEMP', -235, 78, { life: 'female', pose: 'right' }),
   colony('MEUT-A', 'MEUT', -600, 122, { caption: 'MEUT-A01 over its crater' }),
