@@ -3,6 +3,7 @@ import { readAvailable, showAvailablePhoto } from '@/shared/buyers/available';
 import { listOffers, setListing, setPublicPage } from '@/shared/buyers/offers';
 import { addOrder } from '@/shared/orders/contract';
 import { getRoom } from '@/shared/rooms/contract';
+import { TenthsMm } from '@/shared/units';
 import { type Known, memberOf, ownerWithRoom } from '../support/accounts';
 import { buyerIn, draftOf, lineOf } from '../support/sales';
 import { broodIn, colonyIn, record, TODAY } from '../support/stock';
@@ -31,7 +32,7 @@ beforeAll(async () => {
     onDay: TODAY,
     measure: 'total',
     method: 'ruler',
-    readings: [480, 500, 520].map((lengthTenthsMm) => ({ lengthTenthsMm, weightG: null })),
+    readings: [480, 500, 520].map((mm) => ({ lengthTenthsMm: TenthsMm.parse(mm), weightG: null })),
     note: null,
   });
 });
