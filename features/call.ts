@@ -1,6 +1,8 @@
 import type * as z from 'zod/mini';
 import type { Endpoint } from '@/shared/endpoint';
 import { isReason, Refusal } from '@/shared/refusal';
+import { placeOfAnswer } from './call/keptAnswers';
+import { isLarge, readLarge } from './call/large';
 
 type Shape = z.ZodMiniType;
 type Sent<P extends Shape, Q extends Shape, B extends Shape> = {
@@ -15,8 +17,11 @@ export async function call<P extends Shape, Q extends Shape, B extends Shape, O 
   line: Endpoint<P, Q, B, O>,
   sent: Sent<P, Q, B> = {},
 ): Promise<z.output<O>> {
+  const address = addressOf(line, sent);
+  const place = isLarge(line) ? placeOfAnswer(address) : null;
+  if (place !== null) return await largeAnswer(line, address, place);
   const writes = line.method !== 'GET';
-  const answer = await reach(addressOf(line, sent), {
+  const answer = await reach(address, {
     method: line.method,
     credentials: 'same-origin',
     signal: sent.signal ?? null,
@@ -26,6 +31,17 @@ export async function call<P extends Shape, Q extends Shape, B extends Shape, O 
   });
   if (!answer.ok) throw await refusalOf(answer);
   return line.output.parse(await answer.json());
+}
+
+async function largeAnswer<O extends Shape>(
+  line: { path: string; output: O },
+  address: string,
+  place: string,
+): Promise<z.output<O>> {
+  const told = await readLarge(line, address, place);
+  if (told.as === 'unreachable') throw new Unreachable(NOT_HERE);
+  if (told.as === 'refused') throw await refusalOf({ status: told.status, json: async () => told.body });
+  return told.data;
 }
 
 /** No signal, or no server: worth trying again, unlike a refusal. */

@@ -75,5 +75,8 @@ const plainLetters = (text: string): string =>
     .toUpperCase()
     .replace(/[^A-Z\s]/g, '');
 
+/** Made once: `localeCompare` with choices makes one for every comparison, which thousands of codes feel. */
+const numbered = new Intl.Collator('en', { numeric: true });
+
 /** Codes in the order a person expects: T2 before T10. */
-export const byNumber = (a: string, b: string): number => a.localeCompare(b, 'en', { numeric: true });
+export const byNumber = (a: string, b: string): number => numbered.compare(a, b);

@@ -1,8 +1,10 @@
-import { MutationCache, QueryCache, QueryClient, QueryClientProvider } from '@tanstack/react-query';
+import { MutationCache, QueryCache, QueryClient, QueryClientProvider, replaceEqualDeep } from '@tanstack/react-query';
 import { type ReactNode, useState } from 'react';
 import { ThemeProvider } from '@/components/theme/ThemeProvider';
 import { Unreachable } from '@/features/call';
 import { keptAnswers } from '@/features/call/keptAnswers';
+import { onLateAnswer } from '@/features/call/large';
+import { isReadLarge } from '@/features/call/largeLines';
 import { isSignedOut, meQuery } from './queries';
 
 /** Everything that stands round every page: the theme, and what was fetched. */
@@ -31,9 +33,11 @@ function newCache(): QueryClient {
         networkMode: 'always',
         refetchOnReconnect: true,
         persister: keptAnswers,
+        structuralSharing: (before, now) => (isReadLarge(now) ? now : replaceEqualDeep(before, now)),
       },
       mutations: { networkMode: 'always' },
     },
   });
+  onLateAnswer(() => void cache.invalidateQueries({ predicate: ({ state }) => isReadLarge(state.data) }));
   return cache;
 }

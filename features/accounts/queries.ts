@@ -1,6 +1,7 @@
 import { type QueryClient, queryOptions, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { call } from '@/features/call';
 import { forgetAnswers, keepFor } from '@/features/call/keptAnswers';
+import { forgetLarge } from '@/features/call/large';
 import { forgetWaiting } from '@/features/entries';
 import { getMe, type Me, signOut } from '@/shared/accounts/contract';
 import { Refusal } from '@/shared/refusal';
@@ -44,6 +45,7 @@ export function useSignOut() {
     mutationFn: () => call(signOut),
     onSuccess: async () => {
       await forgetWaiting();
+      forgetLarge();
       await forgetAnswers();
       cache.setQueryData(meQuery.queryKey, null);
       forgetFetched(cache);

@@ -1,6 +1,7 @@
 import { experimental_createQueryPersister } from '@tanstack/react-query-persist-client';
 import { isId } from '@/shared/ids';
 import { answersStore } from './answersStore';
+import { isReadLarge } from './largeLines';
 
 /** Older than this, what was seen of a fishroom misleads more than it helps. */
 const KEPT_MS = 30 * 86_400_000;
@@ -25,6 +26,9 @@ const build = (): string =>
 
 const placeOf = (key: string) => (key === WHO ? key : `${whose}|${key}`);
 
+/** Where a large answer is kept as it came; null while it is not known whose it would be. */
+export const placeOfAnswer = (address: string): string | null => (whose === null ? null : placeOf(address));
+
 /** Fetched data of fishrooms, per account, so that pages open without a signal to what was last seen. */
 export const { persisterFn: keptAnswers } = experimental_createQueryPersister({
   prefix: 'kinwater',
@@ -32,7 +36,11 @@ export const { persisterFn: keptAnswers } = experimental_createQueryPersister({
   // What was kept may be from before a record of a moment ago: it is shown at once, and always asked for again.
   refetchOnRestore: 'always',
   buster: build(),
-  filters: { predicate: ({ queryKey: [first] }) => first === 'me' || (typeof first === 'string' && isId(first)) },
+  filters: {
+    predicate: ({ queryKey: [first] }) => first === 'me' || (typeof first === 'string' && isId(first)),
+  },
+  // Large answers are kept by the worker that reads them.
+  serialize: (asked) => (isReadLarge(asked.state.data) ? '' : JSON.stringify(asked)),
   storage: {
     getItem: async (key) => {
       const text = await answersStore.get(placeOf(key));
@@ -42,7 +50,7 @@ export const { persisterFn: keptAnswers } = experimental_createQueryPersister({
       return text;
     },
     setItem: async (key, text) => {
-      if (key !== WHO || accountIn(text)) await answersStore.put(placeOf(key), text);
+      if (text !== '' && (key !== WHO || accountIn(text))) await answersStore.put(placeOf(key), text);
     },
     removeItem: (key) => answersStore.remove(placeOf(key)),
   },

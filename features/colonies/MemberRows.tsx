@@ -7,6 +7,7 @@ import { Rows } from '@/components/ui/Rows';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
+import { byNumber } from '@/shared/codes';
 import { daysBetween, formatDate } from '@/shared/days';
 import type { FishRow } from '@/shared/fish/contract';
 import { clockOf } from '@/shared/holds/clockOf';
@@ -27,7 +28,7 @@ export function MemberRows({ members, holds }: { members: FishRow[]; holds: Hold
         ORDER[a.sex] - ORDER[b.sex] ||
         Number(b.dominant) - Number(a.dominant) ||
         Number(Boolean(open(b.id))) - Number(Boolean(open(a.id))) ||
-        (a.code ?? '').localeCompare(b.code ?? '', 'en', { numeric: true }),
+        byNumber(a.code ?? '', b.code ?? ''),
     );
   const anonymous = (['male', 'female', 'unknown'] as const).flatMap((sex) => {
     const count = members.filter((one) => one.code === null && one.sex === sex).length;

@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react';
+import { useState } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { DiversityBars } from '@/components/chart/DiversityBars';
 import { StepKey } from '@/components/form/StepKey';
@@ -10,27 +10,19 @@ import { Rows } from '@/components/ui/Rows';
 import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { useUrlWord } from '@/hooks/useUrlWord';
-import type { LineageNode } from '@/shared/lineage/contract';
 import { ColonySheet } from './ColonySheet';
-import { type ColonyFacts, coloniesOf, colonyFacts, forecastOf } from './colonyFacts';
-import type { Nodes } from './entries';
-import type { GroupKinship } from './useKinship';
+import { type ColonyFacts, forecastOf } from './colonyFacts';
 
 const MOST_GENERATIONS = 20;
 const FIRST = 5;
 
-type Props = { nodes: Nodes; kin: GroupKinship; fish: readonly LineageNode[]; chosen: boolean };
+type Props = { colonies: readonly ColonyFacts[]; chosen: boolean };
 
 /** Gene diversity and effective size of each colony, and what is left after so many generations as it is kept now. */
-export function ColonyDiversity({ nodes, kin, fish, chosen }: Props) {
+export function ColonyDiversity({ colonies, chosen }: Props) {
   const [word, setWord] = useUrlWord<string>('generations', String(FIRST));
   const [open, setOpen] = useState<string | null>(null);
   const generations = /^\d{1,2}$/.test(word) ? Math.min(MOST_GENERATIONS, Number(word)) : FIRST;
-  const { entries, depth } = kin;
-  const colonies = useMemo(
-    () => coloniesOf(fish, chosen).map((colony) => colonyFacts(nodes, { entries, depth }, colony)),
-    [fish, chosen, nodes, entries, depth],
-  );
   const shown = colonies.find(({ id }) => id === open);
   return (
     <Section title="What each colony keeps" aside={chosen ? 'as one colony' : String(colonies.length)}>

@@ -3,13 +3,14 @@ import { View } from 'react-native';
 import { type KinFish, KinshipTable } from '@/components/chart/KinshipTable';
 import { space } from '@/components/theme/space';
 import { EmptyState } from '@/components/ui/EmptyState';
+import { Loading } from '@/components/ui/Loading';
 import { Text } from '@/components/ui/Text';
 import type { LineageNode } from '@/shared/lineage/contract';
 import type { Nodes } from './entries';
 import { isWanted, kinFishOf, type Order, ordered, type View as Sides, sidesOf } from './group';
 import { knownOf } from './known';
 import { PairSheet } from './PairSheet';
-import { useKinship } from './useKinship';
+import { type GroupKinship, useKinship } from './useKinship';
 
 /** As half sibs' young. Common practice, no source. */
 const LIMIT = 0.125;
@@ -25,9 +26,14 @@ type Props = {
   said: string;
 };
 
+/** The table once its figures are worked out. */
+export function KinshipFigures(props: Props) {
+  const kin = useKinship(props.nodes, props.fish, props.group);
+  return kin ? <Figures {...props} kin={kin} /> : <Loading label="Working out the kinships" rows={6} />;
+}
+
 /** The table, what its marks mean, and the pair that was pressed. */
-export function KinshipFigures({ nodes, fish, group, search, order, view, said }: Props) {
-  const kin = useKinship(nodes, fish, group);
+function Figures({ nodes, kin, group, search, order, view, said }: Props & { kin: GroupKinship }) {
   const [picked, setPicked] = useState<{ down: string; across: string } | null>(null);
   const byId = useMemo(() => new Map<string, LineageNode>(group.map((node) => [node.id, node])), [group]);
   const sides = useMemo(
@@ -73,7 +79,6 @@ export function KinshipFigures({ nodes, fish, group, search, order, view, said }
         <PairSheet
           key={`${picked.down} ${picked.across}`}
           nodes={nodes}
-          kin={kin}
           pair={[picked.across, picked.down]}
           onClose={() => setPicked(null)}
         />

@@ -1,4 +1,4 @@
-import { lazy, Suspense, useMemo } from 'react';
+import { lazy, Suspense } from 'react';
 import { View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -14,34 +14,46 @@ import { SexShape } from '@/components/ui/SexShape';
 import { Sheet } from '@/components/ui/Sheet';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
+import { useWorked } from '@/hooks/useWorked';
 import type { LineageNode } from '@/shared/lineage/contract';
 import { inbreedingWords } from '@/shared/sheets/sayings';
+import { deskWith } from './desk';
 import { type Nodes, nameOf } from './entries';
-import { type PairFacts, pairFacts } from './pairFacts';
-import type { GroupKinship } from './useKinship';
+import type { PairFacts } from './pairFacts';
 
 const LineageGraph = lazy(() => import('./LineageGraph').then((module) => ({ default: module.LineageGraph })));
 
-type Props = { nodes: Nodes; kin: GroupKinship; pair: readonly [string, string]; onClose: () => void };
+type Props = { nodes: Nodes; pair: readonly [string, string]; onClose: () => void };
 
 /** What the kinship of two fish rests on: shared ancestors, doubtful parents dashed, and how much of both pedigrees is known. */
-export function PairSheet({ nodes, kin, pair, onClose }: Props) {
+export function PairSheet({ nodes, pair, onClose }: Props) {
   const [a, b] = pair.map((id) => nodes.find((node) => node.id === id));
   if (!a || !b) return null;
   const title = a.id === b.id ? nameOf(a) : `${nameOf(a)} and ${nameOf(b)}`;
   return (
     <Sheet open onClose={onClose} title={title} width={520}>
-      <PairBody nodes={nodes} kin={kin} a={a} b={b} />
+      <PairFound nodes={nodes} a={a} b={b} />
     </Sheet>
   );
 }
 
-type BodyProps = { nodes: Nodes; kin: GroupKinship; a: LineageNode; b: LineageNode };
+type BodyProps = { nodes: Nodes; a: LineageNode; b: LineageNode };
 
-function PairBody({ nodes, kin, a, b }: BodyProps) {
+function PairFound({ nodes, a, b }: BodyProps) {
+  const { data: facts } = useWorked('pair', [nodes, a, b], async () => {
+    const { desk, turn } = await deskWith(nodes);
+    return desk.pair(turn, a.id, b.id);
+  });
+  return facts ? (
+    <PairBody nodes={nodes} facts={facts} a={a} b={b} />
+  ) : (
+    <Loading label="Working out what it rests on" rows={4} />
+  );
+}
+
+function PairBody({ nodes, facts, a, b }: BodyProps & { facts: PairFacts }) {
   const room = useRoom();
   const self = a.id === b.id;
-  const facts = useMemo(() => pairFacts(nodes, kin, [a, b]), [nodes, kin, a, b]);
   return (
     <View style={{ gap: space[4] }}>
       <PairFigures facts={facts} self={self} />

@@ -5,7 +5,7 @@ import { type GroupSize, sizeByFamilies, sizeBySexes, sizeByShares, sizeOverTime
 import { kinship } from '@/shared/lineage/kinship';
 import { parentShares } from '@/shared/lineage/parentShares';
 import { entryOf, type Nodes } from './entries';
-import type { GroupKinship } from './useKinship';
+import type { Kin } from './kin';
 
 export type SizeLine = GroupSize & { key: string; word: string; rests: string };
 
@@ -26,7 +26,7 @@ const ENOUGH_BROODS = 4;
 /** Gene diversity and effective size of a colony's breeders, each with what it rests on. */
 export function colonyFacts(
   nodes: Nodes,
-  { entries, depth }: Pick<GroupKinship, 'entries' | 'depth'>,
+  { entries, depth }: Pick<Kin, 'entries' | 'depth'>,
   colony: { id: string; code: string; fish: readonly LineageNode[] },
 ): ColonyFacts {
   const breeders = colony.fish.filter(({ keptAs }) => keptAs === 'breeder');

@@ -4,7 +4,7 @@ import { founderGenomeEquivalents, geneDiversity } from '@/shared/lineage/divers
 import { founderContributions, founderEquivalents, UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
 import { parentShares } from '@/shared/lineage/parentShares';
 import { entryOf, type Nodes, nameOf } from './entries';
-import type { GroupKinship } from './useKinship';
+import type { Kin } from './kin';
 
 /** `risk`: one or two fish carry it; `alone`: it lives, and none of its young is kept; `lost`: no fish carries it. */
 export type Standing = 'carried' | 'risk' | 'alone' | 'lost';
@@ -32,7 +32,7 @@ export type GroupFacts = {
 const FEW = 2;
 
 /** Where the genes of a group come from, and which founders hang on a few fish. */
-export function groupFacts(nodes: Nodes, kin: GroupKinship, group: readonly LineageNode[]): GroupFacts {
+export function groupFacts(nodes: Nodes, kin: Kin, group: readonly LineageNode[]): GroupFacts {
   const ids = group.map(({ id }) => id);
   const contributions = founderContributions(kin.entries, ids);
   const strains = new Set(group.map(({ strainId }) => strainId));

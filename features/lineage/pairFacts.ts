@@ -4,8 +4,8 @@ import { isPossibleParent, parentShares } from '@/shared/lineage/parentShares';
 import type { PedigreeEntry } from '@/shared/lineage/pedigree';
 import { sharedAncestry } from '@/shared/lineage/sharedAncestors';
 import { entryOf, type Nodes, nameOf, saidOf } from './entries';
+import type { Kin } from './kin';
 import { knownOf } from './known';
-import type { GroupKinship } from './useKinship';
 
 /** More cases than this would hold the page up. */
 const MOST_CASES = 512;
@@ -24,7 +24,7 @@ export type PairFacts = {
 };
 
 /** What a kinship of two fish rests on. */
-export function pairFacts(nodes: Nodes, kin: GroupKinship, [a, b]: readonly [LineageNode, LineageNode]): PairFacts {
+export function pairFacts(nodes: Nodes, kin: Kin, [a, b]: readonly [LineageNode, LineageNode]): PairFacts {
   const byId = new Map<string, LineageNode>(nodes.map((node) => [node.id, node]));
   const { ancestors, between } = sharedAncestry(kin.entries, a.id, b.id);
   const drawn = new Set(between);

@@ -1,34 +1,35 @@
 import { useMemo } from 'react';
-import { allEquivalentGenerations } from '@/shared/lineage/completeness';
+import { useWorked } from '@/hooks/useWorked';
 import type { LineageNode } from '@/shared/lineage/contract';
 import { meanKinship } from '@/shared/lineage/diversity';
-import { kinship } from '@/shared/lineage/kinship';
-import type { KinshipMatrix } from '@/shared/lineage/kinshipMatrix';
-import type { PedigreeEntry } from '@/shared/lineage/pedigree';
-import { entriesOf, type Nodes } from './entries';
+import { matrixOf } from '@/shared/lineage/kinshipMatrix';
+import { deskWith } from './desk';
+import type { Nodes } from './entries';
+import type { Kin } from './kin';
 
-export type GroupKinship = {
-  entries: PedigreeEntry[];
-  matrix: KinshipMatrix;
-  /** Of each fish with the whole group, itself included. */
-  mean: ReadonlyMap<string, number>;
-  /** How far back each pedigree is known, in full generations. */
-  depth: ReadonlyMap<string, number>;
-};
+/** `mean`: of each fish with the whole group, itself included. */
+export type GroupKinship = Pick<Kin, 'matrix' | 'depth'> & { mean: ReadonlyMap<string, number> };
 
-/** The kinships of a group: those of all the fish that it is chosen from are worked out once, whatever is filtered after. */
+/**
+ * The kinships of a group; nothing until they are worked out. Those of all the fish that it is chosen from are worked out
+ * once, whatever is filtered after.
+ */
 export function useKinship(
   nodes: Nodes,
   fish: readonly LineageNode[],
-  group: readonly LineageNode[] = fish,
-): GroupKinship {
-  const entries = useMemo(() => entriesOf(nodes), [nodes]);
-  const depth = useMemo(() => allEquivalentGenerations(entries), [entries]);
-  const matrix = useMemo(() => kinship(entries, idsOf(fish)), [entries, fish]);
-  return useMemo(
-    () => ({ entries, matrix, depth, mean: meanKinship(matrix, idsOf(group)) }),
-    [entries, matrix, depth, group],
-  );
+  group: readonly LineageNode[],
+): GroupKinship | null {
+  const { data } = useWorked('kinship', [nodes, fish], async () => {
+    const { desk, turn } = await deskWith(nodes);
+    return desk.kinship(turn, idsOf(fish));
+  });
+  const whole = useMemo(() => {
+    if (!data) return null;
+    const ids = idsOf(fish);
+    const depth = new Map(ids.map((id, at) => [id, data.depths[at] ?? 0]));
+    return { matrix: matrixOf({ ...data.packed, ids }), depth };
+  }, [data, fish]);
+  return useMemo(() => (whole ? { ...whole, mean: meanKinship(whole.matrix, idsOf(group)) } : null), [whole, group]);
 }
 
 const idsOf = (fish: readonly LineageNode[]): string[] => fish.map(({ id }) => id);

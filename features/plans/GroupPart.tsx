@@ -4,21 +4,27 @@ import { Select } from '@/components/form/Select';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
 import { FiguresStrip } from '@/components/ui/FiguresStrip';
+import { Loading } from '@/components/ui/Loading';
 import { Notice } from '@/components/ui/Notice';
 import { Section } from '@/components/ui/Section';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
 import type { LineageNode } from '@/shared/lineage/contract';
 import { UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
+import { useFounders } from './desk';
 import { PairRows } from './PairRows';
-import { entryOf, type Group, LIMITS, type Plan } from './usePlan';
-import { type FoundersOf, foundersIn, headsWords } from './why';
+import { type Group, LIMITS, type Plan } from './usePlan';
+import { type FoundersOf, headsWords } from './why';
 
 /** What the program proposes, or what the keeper made of it: fish, F of every pair, founders carried. */
 export function GroupPart({ plan, nodes }: { plan: Plan; nodes: readonly LineageNode[] }) {
   const { proposal, groups } = plan;
-  const founders = foundersIn(nodes.map(entryOf));
+  const founders = useFounders(
+    nodes,
+    [...groups, plan.now].flatMap(({ males, females }) => [...males, ...females]),
+  );
   const byId = new Map(nodes.map((node) => [node.id, node]));
+  if (!proposal) return <Loading label="Looking for a group that fits" rows={6} />;
   if (proposal.fits === 'none' && groups.length === 0) return <NoGroup plan={plan} because={proposal.because} />;
   return (
     <View style={{ gap: space[5] }}>
@@ -48,7 +54,7 @@ export function GroupPart({ plan, nodes }: { plan: Plan; nodes: readonly Lineage
 }
 
 function NoGroup({ plan, because }: { plan: Plan; because: string }) {
-  const { atLimit } = plan.proposal.fits === 'none' ? plan.proposal : { atLimit: null };
+  const { atLimit } = plan.proposal?.fits === 'none' ? plan.proposal : { atLimit: null };
   const limit = LIMITS.find((one) => Number(one) === atLimit);
   return (
     <Section title="Proposed group">

@@ -13,16 +13,15 @@ import { Text } from '@/components/ui/Text';
 import { TextLink } from '@/components/ui/TextLink';
 import { useRoom } from '@/hooks/useRoom';
 import type { LineageNode } from '@/shared/lineage/contract';
-import { kinship } from '@/shared/lineage/kinship';
 import { groupFigures } from '@/shared/lineage/proposeGroups';
 import type { PlanRow } from '@/shared/plans/contract';
 import { may } from '@/shared/roles';
 import { CarryOut } from './CarryOut';
+import { useFounders, useMatrix } from './desk';
 import { PairRows } from './PairRows';
 import { planQuery } from './queries';
 import { STATE_WORDS } from './SavedPlans';
-import { entryOf } from './usePlan';
-import { foundersIn, headsWords } from './why';
+import { headsWords } from './why';
 
 type Props = { planId: string; nodes: readonly LineageNode[] | undefined };
 
@@ -50,9 +49,9 @@ function Page({ plan, nodes, back }: PageProps) {
   const { groups, note, limit } = plan.content;
   const byId = new Map(nodes.map((node) => [node.id, node]));
   const ids = groups.flatMap(({ males, females }) => [...males, ...females]);
-  const entries = nodes.map(entryOf);
   const known = ids.filter((id) => byId.has(id));
-  const matrix = kinship(entries, known);
+  const matrix = useMatrix(nodes, known);
+  const founders = useFounders(nodes, known);
   const gone = plan.gone.map(({ code }) => code ?? 'one without a code').join(', ');
   return (
     <Screen title={plan.name} subtitle={<Text tone="soft">{STATE_WORDS[plan.state]}</Text>} back={back}>
@@ -69,8 +68,8 @@ function Page({ plan, nodes, back }: PageProps) {
           <EmptyState small title="Some of its fish are merged or removed" words="Make a new plan." />
         ) : (
           groups.map(({ males, females }, i) => {
-            const figures = groupFigures(matrix, males, females);
-            if (!figures) return null;
+            const figures = matrix ? groupFigures(matrix, males, females) : null;
+            if (!figures) return <Loading key={males.join()} label="Working out the figures" rows={4} />;
             return (
               <Section
                 key={males.join()}
@@ -84,7 +83,7 @@ function Page({ plan, nodes, back }: PageProps) {
                     { figure: figures.geneDiversity.toFixed(3), label: 'gene diversity kept' },
                   ]}
                 />
-                <PairRows pairs={figures.pairs} limit={limit} founders={foundersIn(entries)} byId={byId} />
+                <PairRows pairs={figures.pairs} limit={limit} founders={founders} byId={byId} />
               </Section>
             );
           })

@@ -3,11 +3,9 @@ import { useUrlWord } from '@/hooks/useUrlWord';
 import type { Day } from '@/shared/days';
 import { type Candidate, candidatesOf, usualGroup } from '@/shared/lineage/candidates';
 import type { LineageNode } from '@/shared/lineage/contract';
-import { kinship } from '@/shared/lineage/kinship';
-import type { KinshipMatrix } from '@/shared/lineage/kinshipMatrix';
-import type { PedigreeEntry } from '@/shared/lineage/pedigree';
-import { type GroupFigures, groupFigures, type Proposal, proposeGroups } from '@/shared/lineage/proposeGroups';
+import { type GroupFigures, groupFigures, type Proposal } from '@/shared/lineage/proposeGroups';
 import type { SpeciesProfile } from '@/shared/species/profile';
+import { useMatrix, useProposal } from './desk';
 
 export const LIMITS = ['0.0625', '0.125', '0.25', '1'] as const;
 type Limit = (typeof LIMITS)[number];
@@ -15,27 +13,26 @@ type Limit = (typeof LIMITS)[number];
 export type Group = { males: string[]; females: string[] };
 type Given = { nodes: readonly LineageNode[]; of: readonly LineageNode[]; profile: SpeciesProfile | null; today: Day };
 
-export const entryOf = (node: LineageNode): PedigreeEntry =>
-  'from' in node ? { id: node.id, from: node.from } : { id: node.id, sire: node.sire, dam: node.dam };
-
 /** Limits live in the address, swaps on the page: figures follow at once, nothing is sent until the plan is saved. */
 export function usePlan({ nodes, of, profile, today }: Given) {
   const limits = useLimits();
   const [out, setOut] = useState<ReadonlySet<string>>(new Set());
   const [taken, setTaken] = useState<ReadonlySet<string>>(new Set());
   const [swapped, setSwapped] = useState<Group[] | null>(null);
-  const candidates = candidatesOf(of, profile, today, limits.years);
+  const candidates = useMemo(() => candidatesOf(of, profile, today, limits.years), [of, profile, today, limits.years]);
   const isIn = ({ id, doubt }: Candidate) => !out.has(id) && (doubt === null || taken.has(id));
-  const now = colonyNow(of);
+  const now = useMemo(() => colonyNow(of), [of]);
+  const known = useMemo(() => new Set(candidates.map(({ id }) => id)), [candidates]);
+  const isKnown = (id: string) => known.has(id);
   const matrix = useMatrix(nodes, [...candidates.map(({ id }) => id), ...now.males, ...now.females]);
   const side = (sex: 'male' | 'female') => candidates.filter((one) => one.sex === sex && isIn(one)).map(({ id }) => id);
   const [males, females] = [side('male'), side('female')];
   const usual = usualGroup(profile, { males: males.length, females: females.length });
   const counts = { males: limits.males ?? usual.males, females: limits.females ?? usual.females };
-  const proposal = useProposal(matrix, { males, females, counts, limit: Number(limits.limit) });
-  const groups =
-    swapped ??
-    ('groups' in proposal ? proposal.groups.map(({ males: m, females: f }) => ({ males: m, females: f })) : []);
+  const found = useProposal(nodes, { males, females, counts, limit: Number(limits.limit) });
+  const proposal =
+    tooFew(males.length, counts.males, 'males') ?? tooFew(females.length, counts.females, 'females') ?? found;
+  const groups = swapped ?? groupsIn(proposal).filter((group) => [...group.males, ...group.females].every(isKnown));
   const change =
     <T>(then: (value: T) => void) =>
     (value: T) => {
@@ -60,13 +57,21 @@ export function usePlan({ nodes, of, profile, today }: Given) {
     swap: (from: string, to: string) =>
       setSwapped(groups.map(({ males: m, females: f }) => ({ males: put(m, from, to), females: put(f, from, to) }))),
     reset: () => setSwapped(null),
-    figures: groups.map((group) => groupFigures(matrix, group.males, group.females)),
-    now: { ...now, figures: groupFigures(matrix, now.males, now.females) },
+    figures: groups.map((group) => (matrix ? groupFigures(matrix, group.males, group.females) : null)),
+    now: { ...now, figures: matrix ? groupFigures(matrix, now.males, now.females) : null },
   };
 }
 
 export type Plan = ReturnType<typeof usePlan>;
 export type { GroupFigures };
+
+const groupsIn = (proposal: Proposal | null): Group[] =>
+  proposal && 'groups' in proposal ? proposal.groups.map(({ males, females }) => ({ males, females })) : [];
+
+const tooFew = (there: number, wanted: number, word: string): Proposal | null =>
+  there < wanted
+    ? { fits: 'none', because: `${wanted} ${word} are wanted and ${there} can be chosen`, atLimit: null }
+    : null;
 
 const put = (ids: string[], from: string, to: string): string[] => ids.map((id) => (id === from ? to : id));
 
@@ -92,36 +97,6 @@ function useLimits() {
       (sex === 'males' ? setMales : setFemales)(String(Math.max(1, to))),
     setYears: (to: number | null) => setYears(to === null ? '' : String(to)),
   };
-}
-
-/** Worked out once for a pedigree: swapping fish reads it, and hundreds of fish cost a moment. */
-function useMatrix(nodes: readonly LineageNode[], ids: string[]): KinshipMatrix {
-  const wanted = [...new Set(ids)];
-  const key = wanted.join(' ');
-  // biome-ignore lint/correctness/useExhaustiveDependencies: `wanted` is made anew at every drawing; its words are `key`
-  return useMemo(() => kinship(nodes.map(entryOf), wanted), [nodes, key]);
-}
-
-type Asked = Group & { counts: { males: number; females: number }; limit: number };
-
-/** The search may take half a second among sixty: again only when what it rests on changed. */
-function useProposal(matrix: KinshipMatrix, { males, females, counts, limit }: Asked): Proposal {
-  const key = JSON.stringify([males, females, counts, limit]);
-  // biome-ignore lint/correctness/useExhaustiveDependencies: the lists are made anew at every drawing; what they say is `key`
-  return useMemo(() => {
-    const few = (there: number, wanted: number, word: string) =>
-      there < wanted ? `${wanted} ${word} are wanted and ${there} can be chosen` : null;
-    const because = few(males.length, counts.males, 'males') ?? few(females.length, counts.females, 'females');
-    if (because) return { fits: 'none', because, atLimit: null };
-    return proposeGroups({
-      matrix,
-      males,
-      females,
-      chooseMales: counts.males,
-      chooseFemales: counts.females,
-      maxFryInbreeding: limit,
-    });
-  }, [matrix, key]);
 }
 
 /** What the keeper has now: the colony with most of these fish. */

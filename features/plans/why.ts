@@ -1,13 +1,7 @@
 import type { LineageNode } from '@/shared/lineage/contract';
-import { founderContributions, UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
-import type { PedigreeEntry } from '@/shared/lineage/pedigree';
+import { UNKNOWN_FOUNDERS } from '@/shared/lineage/founders';
 
-export type FoundersOf = (ids: string[]) => Map<string, number>;
-
-export const foundersIn =
-  (entries: PedigreeEntry[]): FoundersOf =>
-  (ids) =>
-    founderContributions(entries, ids);
+export type FoundersOf = (ids: string[]) => ReadonlyMap<string, number>;
 
 const NAMED = 3;
 

@@ -1,3 +1,4 @@
+import { byNumber } from '../codes';
 import { type Day, daysBetween } from '../days';
 import type { SpeciesProfile } from '../species/profile';
 import type { LineageNode } from './contract';
@@ -50,7 +51,7 @@ export function candidatesOf(
         },
       ];
     })
-    .sort((a, b) => a.code.localeCompare(b.code, 'en', { numeric: true }));
+    .sort((a, b) => byNumber(a.code, b.code));
 }
 
 function matureMm(profile: SpeciesProfile | null, sex: 'male' | 'female'): number | null {

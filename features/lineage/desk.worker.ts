@@ -1,0 +1,4 @@
+import { expose } from 'comlink';
+import { deskWork } from './deskWork';
+
+expose(deskWork);
