@@ -1,7 +1,9 @@
-import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { skipToken, useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'expo-router';
 import { useState } from 'react';
 import { View } from 'react-native';
+import type * as z from 'zod/mini';
+import { FieldError } from '@/components/form/FieldFrame';
 import { InputBox } from '@/components/form/InputBox';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -15,10 +17,13 @@ import { Section } from '@/components/ui/Section';
 import { Segmented } from '@/components/ui/Segmented';
 import { Text } from '@/components/ui/Text';
 import { call } from '@/features/call';
+import { useKept } from '@/hooks/useKept';
 import { useRoom } from '@/hooks/useRoom';
 import { changeParentage, previewParentage } from '@/shared/lineage/contract';
-import { asFractions, type ParentLine, PossibleParents } from './PossibleParents';
-import { type ParentageRead, parentageQuery, pedigreeQuery } from './queries';
+import { type Fields, Refusal } from '@/shared/refusal';
+import { PossibleParents } from './PossibleParents';
+import { bodyOf, byDominance, draftOf, isDraft, type ParentsDraft, thenOf } from './parentsDraft';
+import { type ParentageRead, parentageQuery, pedigreeQuery, siresThenQuery } from './queries';
 import { WhatChanges } from './WhatChanges';
 
 /** Who may be the parents of a fish, a brood or a hold: set later, and shown what it changes before it is saved. */
@@ -37,39 +42,39 @@ export function ParentageScreen({ animalId }: { animalId: string }) {
   );
 }
 
-const linesOf = (parents: ParentageRead['parentage']['sires']): ParentLine[] =>
-  parents.map(({ fishId, share }) => ({ fishId, share: String(Math.round(share * 1000) / 10) }));
-
 function useParentage(animalId: string, told: ParentageRead) {
   const room = useRoom();
   const router = useRouter();
   const cache = useQueryClient();
-  const { parentage, turn } = told;
-  const [sires, setSires] = useState(linesOf(parentage.sires));
-  const [dams, setDams] = useState(linesOf(parentage.dams));
-  const [paternity, setPaternity] = useState(parentage.paternity);
-  const [basis, setBasis] = useState(parentage.basis ?? '');
-  const sent = {
-    params: { roomId: room.id, animalId },
-    body: { turn, parentage: { paternity, basis: basis || null, sires: asFractions(sires), dams: asFractions(dams) } },
-  };
-  const preview = useMutation({ mutationFn: () => call(previewParentage, sent) });
+  const { turn } = told;
+  const [draft, keep, forget] = useKept(`parents ${animalId} ${turn}`, () => draftOf(told), isDraft);
+  const [wrong, setWrong] = useState<Fields>({});
+  const params = { roomId: room.id, animalId };
+  const onError = (error: Error) => setWrong(error instanceof Refusal ? error.fields : {});
+  type Body = z.input<typeof previewParentage.body>;
+  const preview = useMutation({ mutationFn: (body: Body) => call(previewParentage, { params, body }), onError });
   const save = useMutation({
-    mutationFn: () => call(changeParentage, sent),
+    mutationFn: (body: Body) => call(changeParentage, { params, body }),
+    onError,
     onSuccess: async () => {
+      forget();
       await cache.invalidateQueries({ queryKey: [room.id] });
       router.back();
     },
   });
   /** What was shown counts only for what it was shown of. */
-  const edit =
-    <Value,>(set: (value: Value) => void) =>
-    (value: Value) => {
-      preview.reset();
-      save.reset();
-      set(value);
-    };
-  return { sires, dams, paternity, basis, preview, save, edit, setSires, setDams, setPaternity, setBasis };
+  const edit = (change: Partial<ParentsDraft>) => {
+    preview.reset();
+    save.reset();
+    setWrong({});
+    keep({ ...draft, ...change });
+  };
+  const send = (to: typeof preview | typeof save) => {
+    const { body, wrong: found } = bodyOf(draft, turn);
+    setWrong(found);
+    if (body) to.mutate(body);
+  };
+  return { draft, edit, wrong, preview, save, showChanges: () => send(preview), saveIt: () => send(save) };
 }
 
 const PATERNITY = [
@@ -80,9 +85,13 @@ const PATERNITY = [
 function Parents({ animalId, told }: { animalId: string; told: ParentageRead }) {
   const room = useRoom();
   const { data: nodes = [] } = useQuery(pedigreeQuery(room.id));
-  const draft = useParentage(animalId, told);
-  const { preview, save, edit } = draft;
+  const { spawn } = told;
+  const { data: there } = useQuery(
+    spawn ? siresThenQuery(room.id, spawn) : { queryKey: ['nobody'], queryFn: skipToken },
+  );
+  const { draft, edit, wrong, preview, save, showChanges, saveIt } = useParentage(animalId, told);
   const failed = save.error ?? preview.error;
+  const elsewhere = failed && Object.keys(wrong).length === 0 ? failed.message : null;
   return (
     <Screen
       measure
@@ -91,30 +100,51 @@ function Parents({ animalId, told }: { animalId: string; told: ParentageRead }) 
       subtitle={<Text tone="soft">What was said before stays in the history.</Text>}
     >
       <View style={{ gap: space[4], paddingBottom: space[5] }}>
-        <PossibleParents {...{ side: 'sire', animalId, nodes }} lines={draft.sires} onChange={edit(draft.setSires)} />
+        <PossibleParents
+          {...{ side: 'sire', animalId, nodes, wrong }}
+          lines={draft.sires}
+          onChange={(sires) => edit({ sires })}
+          noteOf={(fishId) => thenOf(fishId, there, spawn?.tank.code ?? 'the tank')}
+        />
+        {there && there.length > 0 && spawn ? (
+          <View style={{ alignItems: 'flex-start' }}>
+            <Button
+              small
+              label="Share by days dominant"
+              describe={`Share by days dominant in ${spawn.tank.code} before the spawn`}
+              onPress={() => edit(byDominance(there))}
+            />
+          </View>
+        ) : null}
         {draft.sires.length > 1 ? (
           <Segmented
             label="Fathers of one mouthful"
             choices={PATERNITY}
             value={draft.paternity}
-            onChange={edit(draft.setPaternity)}
+            onChange={(paternity) => edit({ paternity })}
           />
         ) : null}
-        <PossibleParents {...{ side: 'dam', animalId, nodes }} lines={draft.dams} onChange={edit(draft.setDams)} />
+        <PossibleParents
+          {...{ side: 'dam', animalId, nodes, wrong }}
+          lines={draft.dams}
+          onChange={(dams) => edit({ dams })}
+        />
         <View style={{ gap: space[2] }}>
           <Text strong>What it rests on</Text>
           <InputBox
             aria-label="What it rests on"
             value={draft.basis}
-            onChangeText={edit(draft.setBasis)}
-            placeholder="A DNA result; dominant 12 of 15 days"
+            invalid={Boolean(wrong['parentage.basis'])}
+            onChangeText={(basis) => edit({ basis })}
+            placeholder="A DNA result; dominant 12 of 15 days; not in the tank then"
           />
+          <FieldError id="wrong-basis" words={wrong['parentage.basis'] ?? null} />
         </View>
-        {failed ? <Notice tone="act" alert title="Not saved" words={failed.message} /> : null}
+        {elsewhere ? <Notice tone="act" alert title="Not saved" words={elsewhere} /> : null}
         {preview.data ? (
           <>
             <WhatChanges told={preview.data} />
-            <Button kind="primary" label="Save parents" busy={save.isPending} onPress={() => save.mutate()} />
+            <Button kind="primary" label="Save parents" busy={save.isPending} onPress={saveIt} />
           </>
         ) : (
           <Button
@@ -122,7 +152,7 @@ function Parents({ animalId, told }: { animalId: string; told: ParentageRead }) 
             label="Show what it changes"
             busy={preview.isPending}
             busyLabel="Working it out"
-            onPress={() => preview.mutate()}
+            onPress={showChanges}
           />
         )}
       </View>

@@ -1,4 +1,6 @@
+import { useId } from 'react';
 import { StyleSheet, View } from 'react-native';
+import { FieldError } from '@/components/form/FieldFrame';
 import { InputBox } from '@/components/form/InputBox';
 import { type Option, Select } from '@/components/form/Select';
 import { space } from '@/components/theme/space';
@@ -7,19 +9,11 @@ import { IconButton } from '@/components/ui/IconButton';
 import { Section } from '@/components/ui/Section';
 import { SexShape } from '@/components/ui/SexShape';
 import { Text } from '@/components/ui/Text';
+import type { Fields } from '@/shared/refusal';
 import { type Nodes, nameOf } from './entries';
-
-/** A possible parent and its share as typed, in percent; `fishId` null: one not known. */
-export type ParentLine = { fishId: string | null; share: string };
+import { type ParentLine, wrongAt } from './parentsDraft';
 
 const NOT_KNOWN = 'notKnown';
-
-/** Shares as the server takes them; they need not sum to 100. A comma is a decimal point too. */
-export const asFractions = (lines: readonly ParentLine[]) =>
-  lines.map(({ fishId, share }) => ({
-    fishId,
-    weight: lines.length === 1 ? 1 : Number(share.replace(',', '.')) / 100,
-  }));
 
 type Props = {
   side: 'sire' | 'dam';
@@ -27,10 +21,13 @@ type Props = {
   nodes: Nodes;
   lines: ParentLine[];
   onChange: (lines: ParentLine[]) => void;
+  wrong: Fields;
+  /** What the record says of a parent at the time. */
+  noteOf?: (fishId: string | null) => string | null;
 };
 
 /** The possible sires, or dams, each with its share; none means that nothing is known. */
-export function PossibleParents({ side, animalId, nodes, lines, onChange }: Props) {
+export function PossibleParents({ side, animalId, nodes, lines, onChange, wrong, noteOf }: Props) {
   const sex = side === 'sire' ? 'male' : 'female';
   const codes = new Map(nodes.map((node) => [node.id, nameOf(node)]));
   const name = (fishId: string | null) => (fishId ? (codes.get(fishId) ?? 'A fish') : `A ${sex} not known`);
@@ -51,38 +48,80 @@ export function PossibleParents({ side, animalId, nodes, lines, onChange }: Prop
     <Section title={side === 'sire' ? 'Possible sires' : 'Possible dams'} aside={String(lines.length)}>
       <View style={{ gap: space[2] }}>
         {lines.length === 0 ? <Text tone="soft">{`Nothing is known of the ${side}.`}</Text> : null}
-        {lines.map((line) => (
-          <View key={line.fishId ?? NOT_KNOWN} style={styles.line}>
-            <View style={styles.name}>
-              <SexShape sex={sex} possible={lines.length > 1} />
-              {line.fishId ? <Code>{name(line.fishId)}</Code> : <Text>{name(null)}</Text>}
-            </View>
-            {lines.length > 1 ? (
-              <View style={styles.share}>
-                <InputBox
-                  aria-label={`Share of ${name(line.fishId)}, percent`}
-                  value={line.share}
-                  inputMode="decimal"
-                  unit="%"
-                  onChangeText={(share) => onChange(lines.map((one) => (one === line ? { ...one, share } : one)))}
-                />
-              </View>
-            ) : null}
-            <IconButton
-              icon="close"
-              label={`Leave out ${name(line.fishId)}`}
-              onPress={() => onChange(lines.filter((one) => one !== line))}
-            />
-          </View>
+        {lines.map((line, at) => (
+          <ParentRow
+            key={line.fishId ?? NOT_KNOWN}
+            {...{ line, sex, several: lines.length > 1 }}
+            name={name(line.fishId)}
+            note={noteOf?.(line.fishId) ?? null}
+            wrong={wrongAt(wrong, `${side}s`, at)}
+            onShare={(share) => onChange(lines.map((one) => (one === line ? { ...one, share } : one)))}
+            onLeaveOut={() => onChange(lines.filter((one) => one !== line))}
+          />
         ))}
-        <Select label={`Add a possible ${side}`} options={options} value={null} onChange={add} />
+        <FieldError id={`wrong-${side}`} words={wrong[`parentage.${side}s`] ?? null} />
+        <Select
+          label={`Add a possible ${side}`}
+          placeholder={`Add a possible ${side}`}
+          options={options}
+          value={null}
+          onChange={add}
+        />
       </View>
     </Section>
   );
 }
 
+type RowProps = {
+  line: ParentLine;
+  sex: 'male' | 'female';
+  several: boolean;
+  name: string;
+  note: string | null;
+  wrong: string | null;
+  onShare: (share: string) => void;
+  onLeaveOut: () => void;
+};
+
+function ParentRow({ line, sex, several, name, note, wrong, onShare, onLeaveOut }: RowProps) {
+  const errorId = useId();
+  return (
+    <View>
+      <View style={styles.line}>
+        <View style={styles.words}>
+          <View style={styles.name}>
+            <SexShape sex={sex} possible={several} />
+            {line.fishId ? <Code>{name}</Code> : <Text>{name}</Text>}
+          </View>
+          {note ? (
+            <Text size="small" tone="soft">
+              {note}
+            </Text>
+          ) : null}
+        </View>
+        {several ? (
+          <View style={styles.share}>
+            <InputBox
+              aria-label={`Share of ${name}, percent`}
+              value={line.share}
+              inputMode="decimal"
+              unit="%"
+              invalid={wrong !== null}
+              aria-describedby={errorId}
+              onChangeText={onShare}
+            />
+          </View>
+        ) : null}
+        <IconButton icon="close" label={`Leave out ${name}`} onPress={onLeaveOut} />
+      </View>
+      <FieldError id={errorId} words={wrong} />
+    </View>
+  );
+}
+
 const styles = StyleSheet.create({
   line: { flexDirection: 'row', alignItems: 'center', gap: space[2] },
-  name: { flexDirection: 'row', alignItems: 'center', gap: space[2], flexGrow: 1, flexShrink: 1, minWidth: 0 },
+  words: { flexGrow: 1, flexShrink: 1, minWidth: 0 },
+  name: { flexDirection: 'row', alignItems: 'center', gap: space[2] },
   share: { width: 112 },
 });

@@ -1,6 +1,7 @@
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
 import { View } from 'react-native';
+import { chooseFile } from '@/components/form/chooseFile';
 import { InputBox } from '@/components/form/InputBox';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -59,12 +60,19 @@ function TakeIn() {
   return (
     <Section title="Take a table in">
       <View style={{ gap: space[3] }}>
+        <View style={{ alignItems: 'flex-start' }}>
+          <Button
+            icon="upload"
+            label="Choose a file"
+            onPress={() => chooseFile('.csv,text/csv,text/plain', (file) => void file.text().then(change))}
+          />
+        </View>
         <InputBox
           aria-label="The table"
           value={text}
           onChangeText={change}
           multiline
-          placeholder="id,sire,dam,sex,born,strain"
+          placeholder="or paste it here: id,sire,dam,sex,born,strain"
         />
         {failed ? <Notice tone="act" alert title="Nothing was written" words={failed.message} /> : null}
         {take.data ? <Notice words={`${take.data.rows} fish were added.`} /> : null}
@@ -81,7 +89,7 @@ function TakeIn() {
             label="Check the table"
             busy={check.isPending}
             busyLabel="Checking"
-            disabledBecause={text ? null : 'Paste the table first'}
+            disabledBecause={text ? null : 'Choose a file or paste the table first'}
             onPress={() => check.mutate()}
           />
         )}

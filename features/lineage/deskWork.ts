@@ -10,7 +10,6 @@ import { graphOf, type LineageDrawing } from './graphOf';
 import type { Kin } from './kin';
 import { type PairFacts, pairFacts } from './pairFacts';
 
-type Depth = ReadonlyMap<string, number>;
 type Held = Pick<Kin, 'entries' | 'depth'> & { nodes: Nodes; byId: ReadonlyMap<string, Nodes[number]> };
 
 /** The pedigrees that the page has open, by their numbers there. */

@@ -1,6 +1,7 @@
 import { queryOptions } from '@tanstack/react-query';
 import type * as z from 'zod/mini';
 import { call } from '@/features/call';
+import { proposeSires } from '@/shared/holds/contract';
 import { listContradictions, readParentage, readPedigree } from '@/shared/lineage/contract';
 
 /** The whole pedigree of the fishroom; everything of the Lineage place is worked out from it here. */
@@ -27,6 +28,18 @@ export const parentageQuery = (roomId: string, animalId: string) =>
     queryKey: [roomId, 'pedigree', 'parents', animalId],
     queryFn: ({ signal }) => call(readParentage, { params: { roomId, animalId }, signal }),
   });
+
+/** Who was in the tank when a mouthful was spawned, and how long each male was dominant there. */
+export const siresThenQuery = (roomId: string, spawn: NonNullable<ParentageRead['spawn']>) =>
+  queryOptions({
+    queryKey: [roomId, 'pedigree', 'sires then', spawn.tank.id, spawn.from, spawn.until],
+    queryFn: ({ signal }) => {
+      const { tank, from, until } = spawn;
+      return call(proposeSires, { params: { roomId, tankId: tank.id }, query: { from, until }, signal });
+    },
+    select: ({ sires }) => sires,
+  });
+export type SireThen = z.output<typeof proposeSires.output>['sires'][number];
 
 export const contradictionsQuery = (roomId: string) =>
   queryOptions({

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { View } from 'react-native';
+import { chooseFile } from '@/components/form/chooseFile';
 import { Select } from '@/components/form/Select';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
@@ -8,7 +9,6 @@ import { Text } from '@/components/ui/Text';
 import type { ImportAsk, ImportLine } from '@/shared/transfer/contract';
 import { IMPORT_KINDS, type ImportKind } from '@/shared/transfer/importFields';
 import { CsvPreview } from './CsvPreview';
-import { chooseFile } from './chooseFile';
 import { KIND_WORDS } from './kindWords';
 
 const KINDS = IMPORT_KINDS.map((value) => ({ value, ...KIND_WORDS[value] }));

@@ -1,4 +1,5 @@
 import { View } from 'react-native';
+import { saveFrom } from '@/components/form/chooseFile';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
 import { Screen } from '@/components/ui/Screen';
@@ -8,7 +9,6 @@ import { addressOf } from '@/features/call';
 import { useRoom } from '@/hooks/useRoom';
 import { exportArchive, exportTables } from '@/shared/transfer/contract';
 import { CheckPart } from './CheckPart';
-import { saveFrom } from './chooseFile';
 import { DeleteRoomPart } from './DeleteRoomPart';
 
 /** The data is the breeder's own: all of it to take along, a look at whether it is whole, and the way out. */

@@ -1,5 +1,6 @@
 import { useRouter } from 'expo-router';
 import { View } from 'react-native';
+import { chooseFile } from '@/components/form/chooseFile';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
 import { Notice } from '@/components/ui/Notice';
@@ -8,7 +9,6 @@ import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { CsvPart } from './CsvPart';
-import { chooseFile } from './chooseFile';
 import { ImportsPart } from './ImportsPart';
 import { useBringIn } from './queries';
 

@@ -63,8 +63,30 @@ export async function parentageOf(scope: Scope, id: string): Promise<z.input<typ
     name,
     turn: rootId ? (told?.turn ?? 0) : 0,
     parentage: told ?? { rootId: id, turn: 0, paternity: 'single', sires: [], dams: [], basis: null },
+    spawn: await spawnOf(scope, id),
     turns,
   };
+}
+
+/** The spawn behind a hold, a brood or a fish. */
+async function spawnOf({ db, roomId }: Scope, id: string) {
+  const found = await db
+    .selectFrom('hold')
+    .innerJoin('tank', (join) => join.onRef('tank.roomId', '=', 'hold.roomId').onRef('tank.id', '=', 'hold.tankId'))
+    .leftJoin('brood', (join) => join.onRef('brood.roomId', '=', 'hold.roomId').onRef('brood.holdId', '=', 'hold.id'))
+    .where('hold.roomId', '=', roomId)
+    .where(({ or, eb, selectFrom }) =>
+      or([
+        eb('hold.id', '=', id),
+        eb('brood.id', '=', id),
+        eb('brood.id', '=', selectFrom('fish').where('roomId', '=', roomId).where('id', '=', id).select('broodId')),
+      ]),
+    )
+    .select(['tank.id', 'tank.code', 'hold.spawnEarliest', 'hold.spawnLatest'])
+    .executeTakeFirst();
+  if (!found) return null;
+  const { id: tankId, code, spawnEarliest, spawnLatest } = found;
+  return { tank: { id: tankId, code }, from: spawnEarliest, until: spawnLatest };
 }
 
 export async function changeOf(scope: Scope, id: string, change: Change) {

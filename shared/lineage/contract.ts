@@ -76,6 +76,10 @@ export const readParentage = endpoint({
     /** How often it was set; 0 for a fish that has none of its own. A change carries the one it saw. */
     turn: z.number(),
     parentage: ParentageTold,
+    /** Where and when the mouthful was spawned, to ask who was there; null where no hold is on record. */
+    spawn: z.nullable(
+      z.strictObject({ tank: z.strictObject({ id: Id, code: z.string() }), from: DayText, until: DayText }),
+    ),
     /** Every turn of it, newest first: nothing that was said before is lost. */
     turns: z.array(z.strictObject({ turn: z.number(), basis: z.nullable(z.string()), by: z.string(), at: Instant })),
   }),

@@ -51,6 +51,18 @@ describe('the parents of a brood, set later', () => {
     expect((await read(brood.broodId)).parentage.sires).toHaveLength(2);
   });
 
+  test('come with the place and days of the spawn, to ask who was there', async () => {
+    const told = await read(brood.broodId);
+    // The brood's hold: spawned from 2 to 4 April in the colony's tank.
+    expect(told.spawn).toEqual({
+      tank: { id: colony.tankId, code: 'T-MOKA' },
+      from: '2026-04-02',
+      until: '2026-04-04',
+    });
+    expect((await read(brood.holdId)).spawn).toEqual(told.spawn);
+    expect((await read(male(0))).spawn).toBeNull();
+  });
+
   test('are a new turn; the one before stays readable', async () => {
     expect((await set(brood.broodId, draft([male(1)], [female(0)]))).status).toBe(200);
     const now = await read(brood.broodId);
