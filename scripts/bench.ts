@@ -3,7 +3,8 @@ import type { Figure } from './bench/figure';
 
 /*
  * npm run bench [part…]: every figure beside its anchor, measured in the same run on the same machine. Nothing fails by
- * time: the ratio is what is read. Parts: lineage, growth, pictures, server, large.
+ * time: the ratio is what is read. Parts: lineage, growth, pictures, server, large,
+ * browser (wants an export: npm run build).
  */
 
 const PARTS: Record<string, () => Promise<{ bench(): Promise<Figure[]> }>> = {
@@ -12,6 +13,7 @@ const PARTS: Record<string, () => Promise<{ bench(): Promise<Figure[]> }>> = {
   pictures: () => import('./bench/pictures'),
   server: () => import('./bench/server'),
   large: () => import('./bench/large'),
+  browser: () => import('./bench/browser'),
 };
 
 const round = (value: number): string => value.toLocaleString('en-GB', { maximumSignificantDigits: 3 });

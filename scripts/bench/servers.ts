@@ -43,8 +43,8 @@ async function start(script: string, env: Record<string, string>): Promise<{ pid
 
 const root = (path: string): string => join(fileURLToPath(new URL('../..', import.meta.url)), path);
 
-/** The product with the demo fishroom, signed in as its owner. */
-export async function startProduct(folder: string): Promise<Started> {
+/** The product with the demo fishroom, signed in as its owner; `web`: the folder of the exported app, where a page is opened. */
+export async function startProduct(folder: string, web = join(folder, 'web')): Promise<Started> {
   const port = 4390;
   const origin = `http://localhost:${port}`;
   const env = {
@@ -53,7 +53,7 @@ export async function startProduct(folder: string): Promise<Started> {
     ORIGIN: origin,
     DATA_FOLDER: join(folder, 'data'),
     UPLOADS_FOLDER: join(folder, 'uploads'),
-    WEB_FOLDER: join(folder, 'web'),
+    WEB_FOLDER: web,
     LOG_LEVEL: 'info',
     DEMO: '1',
   };
