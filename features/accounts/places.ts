@@ -58,8 +58,14 @@ export function placesOf(roomId: string, role: Role): Place[] {
       name: 'buyers',
       href: `${home}/buyers`,
       subPlaces: [
+        ...(may(role, 'buyer:see')
+          ? [{ name: 'requests', word: 'Requests', href: `${home}/buyers/requests` as const }]
+          : []),
         { name: 'orders', word: 'Orders', href: `${home}/buyers/orders` },
         { name: 'availability', word: 'Availability', href: `${home}/buyers/availability` },
+        ...(may(role, 'buyer:see')
+          ? [{ name: 'waiting', word: 'Waiting list', href: `${home}/buyers/waiting` as const }]
+          : []),
       ],
     });
   return places;

@@ -3,6 +3,7 @@ import { StyleSheet, View } from 'react-native';
 import { line } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { ErrorState } from '@/components/ui/ErrorState';
+import { LinkRow } from '@/components/ui/LinkRow';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
 import { Section } from '@/components/ui/Section';
@@ -51,6 +52,20 @@ function Page({ page }: { page: AvailablePage }) {
           <View role="list" style={[styles.list, { borderTopColor: theme.rule }]}>
             {coming.map((fish) => (
               <FishForSale key={fish.broodId} fish={fish} page={page} />
+            ))}
+          </View>
+        </Section>
+      ) : null}
+      {page.strains.length > 0 ? (
+        <Section title="Tell me when">
+          <View role="list" style={[styles.list, { borderTopColor: theme.rule }]}>
+            {page.strains.map(({ id, name, locality }) => (
+              <LinkRow
+                key={id}
+                title={[name, locality].filter(Boolean).join(' ')}
+                note="when they have reached the size you want"
+                href={`/available/${page.slug}/ask?strain=${id}`}
+              />
             ))}
           </View>
         </Section>

@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { StyleSheet, View } from 'react-native';
 import { line, space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
+import { Button } from '@/components/ui/Button';
 import { Heading } from '@/components/ui/Heading';
 import { StageGlyph } from '@/components/ui/StageGlyph';
 import { Text } from '@/components/ui/Text';
@@ -45,6 +46,21 @@ export function FishForSale({ fish, page }: { fish: AvailableFish; page: Availab
         <StageGlyph stage={fish.stage} width={34} word size="small" />
         <View style={styles.acts}>
           <TextLink label={shown ? 'Hide lineage' : 'Lineage'} onPress={() => setShown(!shown)} />
+          {fish.coming && fish.strainId ? (
+            <Button
+              small
+              label="Tell me"
+              describe={`Tell me when ${fish.name} are large enough`}
+              href={`/available/${page.slug}/ask?strain=${fish.strainId}`}
+            />
+          ) : (
+            <Button
+              small
+              label="Ask"
+              describe={`Ask for ${fish.name}, brood ${fish.code}`}
+              href={`/available/${page.slug}/ask?brood=${fish.broodId}`}
+            />
+          )}
         </View>
       </View>
       {shown ? <LineagePreview fish={fish} /> : null}

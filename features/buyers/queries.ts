@@ -2,6 +2,8 @@ import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query
 import { addressOf, call } from '@/features/call';
 import { useRoom } from '@/hooks/useRoom';
 import { listOffers } from '@/shared/buyers/offers';
+import type { RequestLetter } from '@/shared/buyers/requestLetters';
+import { listRequests, previewRequestLetter } from '@/shared/buyers/requests';
 import { listPhotos, showPhoto } from '@/shared/photos/contract';
 
 export const offersQuery = (roomId: string) =>
@@ -31,3 +33,16 @@ export function useAct() {
     onSettled: () => cache.invalidateQueries({ queryKey: [roomId] }),
   });
 }
+
+export const requestsQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'requests'],
+    queryFn: ({ signal }) => call(listRequests, { params: { roomId }, signal }),
+    select: ({ requests }) => requests,
+  });
+
+export const requestLetterQuery = (roomId: string, requestId: string, kind: RequestLetter) =>
+  queryOptions({
+    queryKey: [roomId, 'requestLetter', requestId, kind],
+    queryFn: ({ signal }) => call(previewRequestLetter, { params: { roomId, requestId }, query: { kind }, signal }),
+  });

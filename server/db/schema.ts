@@ -566,6 +566,8 @@ type RequestTable = {
   confirmedAt: string | null;
   notifiedAt: string | null;
   version: Generated<number>;
+  tokenHash: string | null;
+  waitsForFish: Generated<0 | 1>;
 };
 
 type ReservationTable = {

@@ -67,7 +67,7 @@ function letterOf({ config }: House, row: Row): Letter {
     headers: {
       // The same at every try, so that a mail server that took it twice can tell.
       'Message-ID': `<${row.id}@kinwater>`,
-      ...(row.stopUrl ? { 'List-Unsubscribe': `<${row.stopUrl}>` } : {}),
+      ...(row.stopUrl ? { 'List-Unsubscribe': `<${filled(row.stopUrl)}>` } : {}),
     },
   };
 }

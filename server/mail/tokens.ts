@@ -16,19 +16,30 @@ export const tokenOf = ({ secret }: Pick<Config, 'secret'>, id: string): string 
 
 export const hashOfToken = (token: string): string => createHash('sha256').update(token).digest('hex');
 
-/** Makes a one-time link's row; earlier ones of the same purpose and address are dead from now on. Inside a transaction. */
+/**
+ * Makes a one-time link's row; earlier ones of the same purpose and address are dead from now on, unless they stand `alongside`
+ * each other. Inside a transaction.
+ */
 export async function newMailToken(
   { db, now, house }: Pick<Asked, 'db' | 'now' | 'house'>,
-  token: { purpose: Purpose; email: string; accountId: string | null; minutes: number; payload?: unknown },
+  token: {
+    purpose: Purpose;
+    email: string;
+    accountId: string | null;
+    minutes: number;
+    payload?: unknown;
+    alongside?: boolean;
+  },
 ): Promise<string> {
-  const { purpose, email, accountId, minutes, payload } = token;
-  await db
-    .updateTable('mailToken')
-    .set({ usedAt: now })
-    .where('email', '=', email)
-    .where('purpose', '=', purpose)
-    .where('usedAt', 'is', null)
-    .execute();
+  const { purpose, email, accountId, minutes, payload, alongside = false } = token;
+  if (!alongside)
+    await db
+      .updateTable('mailToken')
+      .set({ usedAt: now })
+      .where('email', '=', email)
+      .where('purpose', '=', purpose)
+      .where('usedAt', 'is', null)
+      .execute();
   const id = newId(now);
   await db
     .insertInto('mailToken')

@@ -9,6 +9,7 @@ import { stripeWebhook } from './webhook';
 export { touchLapsed } from './lapses';
 export { makeOrder } from './make';
 export { remind } from './reminders';
+export { roomAsked } from './room';
 export { termsOf } from './terms';
 export { ordersToday } from './today';
 
