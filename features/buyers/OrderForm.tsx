@@ -20,6 +20,7 @@ import { LOT_WORDS, LOTS } from '@/shared/orders/price';
 import { Heads } from '@/shared/shapes';
 import { spelledHeads } from '@/shared/spelled';
 import { useAct } from './queries';
+import { thereOf } from './requestFacts';
 
 const Draft = z.strictObject({
   broodId: Id,
@@ -38,7 +39,10 @@ export function OrderForm({ request }: { request: RequestRow }) {
   const act = useAct();
   const [[orderId, lineId]] = useState(() => [newId(), newId()] as const);
   const { sources, heads, place, version } = request;
-  const from = sources.filter(({ available }) => available > 0);
+  // The brood that can give the most of that length stands first.
+  const from = sources
+    .filter(({ available }) => available > 0)
+    .sort((a, b) => thereOf(b, request) - thereOf(a, request));
   const { form, notice } = useSchemaForm({
     schema: Draft,
     start: {

@@ -25,9 +25,9 @@ export function reachedWords({ expected, low, high }: Promised, available: numbe
 
 /** What to make of a promise of so many. */
 export function promiseWords({ verdict, low, expected }: Promised, wanted: number): string {
-  if (verdict === 'sure') return `${wanted} can be promised: at least ${low} are there.`;
+  if (verdict === 'sure') return `${wanted} can be promised: at least ${low} ${low === 1 ? 'is' : 'are'} there.`;
   if (verdict === 'likely')
-    return `${wanted} are likely there, but not sure: only ${low} are. Measure before you promise.`;
+    return `${wanted} are likely there, but not sure: only ${low} ${low === 1 ? 'is' : 'are'}. Measure before you promise.`;
   return expected === 0
     ? `${wanted} can’t be promised: hardly any are there yet.`
     : `${wanted} can’t be promised: only about ${expected} are there.`;
