@@ -18,10 +18,11 @@ export const newId = (): string => uuidV7(Date.now(), crypto.getRandomValues(new
 /** `line` null: it waits on this device. */
 export type Kept = { id: string; line: EntryLine | null };
 
-/** What the strip above the bottom bar tells: the record kept last, to be undone, or a draft, to be gone on with. */
+/** What the strip above the bottom bar tells: the record kept last, to be undone, a draft, to be gone on with, a settled task. */
 export type Told =
   | { is: 'kept'; entryId: string; kind: EntryKind; line: EntryLine | null; undoUntil: string }
-  | { is: 'draft'; title: string; href: string };
+  | { is: 'draft'; title: string; href: string }
+  | { is: 'settled'; key: string; words: string; bringBack: () => Promise<unknown> };
 
 /** Held by `features/entries/LastTold`; outside of it nothing is told. */
 export const ToldContext = createContext<{ told: Told | null; tell: (told: Told | null) => void }>({

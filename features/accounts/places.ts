@@ -3,6 +3,7 @@ import { may, type Role } from '@/shared/roles';
 
 /** Which place an address below the fishroom belongs to. */
 const PLACE_OF: Record<string, PlaceName> = {
+  tasks: 'today',
   stock: 'stock',
   colonies: 'stock',
   broods: 'stock',

@@ -36,6 +36,7 @@ function Strip() {
       />
     );
   }
+  if (told.is === 'settled') return <SettledStrip key={told.key} told={told} hide={() => tell(null)} />;
   return <KeptStrip key={told.entryId} told={told} hide={() => tell(null)} />;
 }
 
@@ -60,6 +61,25 @@ function KeptStrip({ told, hide }: { told: Kept; hide: () => void }) {
       undoLabel={`Undo ${what}`}
       busy={undo.isPending}
       onUndo={() => undo.mutate(entryId)}
+      onDismiss={hide}
+    />
+  );
+}
+
+type Settled = Extract<Told, { is: 'settled' }>;
+
+/** A task was done, skipped or put off; it comes back as it was. */
+function SettledStrip({ told: { words, bringBack }, hide }: { told: Settled; hide: () => void }) {
+  const back = useMutation({ mutationFn: bringBack });
+  if (back.isSuccess) return <WordStrip words="It is open again." icon="undo" onDismiss={hide} />;
+  if (back.isError) return <WordStrip words={back.error.message} icon="warn" onDismiss={hide} />;
+  return (
+    <UndoStrip
+      words={words}
+      icon="tick"
+      undoLabel={`Undo: ${words}`}
+      busy={back.isPending}
+      onUndo={() => back.mutate()}
       onDismiss={hide}
     />
   );

@@ -8,7 +8,7 @@ import type { Clock } from '@/shared/holds/clock';
 import { clockSentence, clockState } from '@/shared/holds/clockWords';
 import type { HoldRow } from '@/shared/holds/contract';
 import { dayBars } from '@/shared/holds/dayBars';
-import type { HoldToday } from '@/shared/today/todayOf';
+import type { HoldToday } from '@/shared/today/holdsToday';
 import { windowOf } from './clockWindow';
 import { HoldName, HoldPlaceShort } from './HoldName';
 import { HoldsOnCalendar } from './HoldsOnCalendar';

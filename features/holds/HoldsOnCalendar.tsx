@@ -2,7 +2,7 @@ import { HoldCalendar } from '@/components/chart/HoldCalendar';
 import { useRoom } from '@/hooks/useRoom';
 import { clockSentence } from '@/shared/holds/clockWords';
 import { dayBars } from '@/shared/holds/dayBars';
-import type { HoldToday } from '@/shared/today/todayOf';
+import type { HoldToday } from '@/shared/today/holdsToday';
 import { HoldName, HoldPlaceShort } from './HoldName';
 import { isPressing, nextWords } from './nextWords';
 import { whoHolds } from './whoHolds';

@@ -10,7 +10,7 @@ import { Text } from '@/components/ui/Text';
 import { useRoom } from '@/hooks/useRoom';
 import { dayWords } from '@/shared/days';
 import { clockState } from '@/shared/holds/clockWords';
-import type { HoldToday } from '@/shared/today/todayOf';
+import type { HoldToday } from '@/shared/today/holdsToday';
 
 const SHOWN = 6;
 

@@ -1,8 +1,8 @@
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
-import type * as z from 'zod/mini';
+import { queryOptions } from '@tanstack/react-query';
 import { call } from '@/features/call';
-import { useRoom } from '@/hooks/useRoom';
-import { decideTask, readIntervals, readToday } from '@/shared/today/contract';
+import { listMembers } from '@/shared/members/contract';
+import { may } from '@/shared/roles';
+import { readIntervals, readTask, readToday } from '@/shared/today/contract';
 
 export const todayQuery = (roomId: string) =>
   queryOptions({
@@ -16,13 +16,16 @@ export const intervalsQuery = (roomId: string) =>
     queryFn: ({ signal }) => call(readIntervals, { params: { roomId }, signal }),
   });
 
-/** Done, skipped, put off or given to someone. */
-export function useDecideTask() {
-  const { id: roomId } = useRoom();
-  const cache = useQueryClient();
-  return useMutation({
-    mutationFn: ({ taskKey, ...body }: { taskKey: string } & z.input<typeof decideTask.body>) =>
-      call(decideTask, { params: { roomId, taskKey }, body }),
-    onSuccess: () => cache.invalidateQueries({ queryKey: [roomId] }),
+/** Who may be given a task. */
+export const membersQuery = (roomId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'members'],
+    queryFn: ({ signal }) => call(listMembers, { params: { roomId }, signal }),
+    select: ({ members }) => members.filter(({ role }) => may(role, 'task:write')),
   });
-}
+
+export const taskQuery = (roomId: string, taskId: string) =>
+  queryOptions({
+    queryKey: [roomId, 'tasks', taskId],
+    queryFn: ({ signal }) => call(readTask, { params: { roomId, taskId }, signal }),
+  });

@@ -763,6 +763,8 @@ type TaskTable = {
   skippedBecause: string | null;
   createdAt: string;
   version: Generated<number>;
+  onWeekday: number | null;
+  followsId: string | null;
 };
 
 type ToldFishTable = {

@@ -25,7 +25,7 @@ export async function ordersToday(scope: Scope): Promise<z.input<typeof OrderTod
       what: whatOf(row),
       time: row.agreedTime,
       toPayCents: row.toPayCents,
-      reservedUntil: row.reservedUntil,
+      reservedUntil: row.reservedUntil && dayOf(Date.parse(row.reservedUntil), scope.timeZone),
       short: row.short,
       waitsSince: sees.buyer ? (unread.get(row.id) ?? (row.state === 'requested' ? row.madeOn : null)) : null,
     }));

@@ -166,6 +166,7 @@ async function nettingTasks(
       title: title.length > 120 ? `Move ${fish.length} fish from ${code} to ${to.code}` : title,
       dueOn: onDay,
       everyDays: null,
+      onWeekday: null,
       assignedTo: null,
       about: { thing: 'tank', id: tankId },
     });

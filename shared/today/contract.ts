@@ -31,6 +31,11 @@ export const changeIntervals = endpoint({
   output: Intervals,
 });
 
+export const DECISIONS = ['done', 'skip', 'snooze', 'assign', 'open'] as const;
+
+/** Why it is skipped, in a line. */
+export const Because = line(200, 'Say why');
+
 /** Done, skipped with a reason, put off, or given to someone: of a task that is worked out (by its key) or one's own. */
 export const decideTask = endpoint({
   method: 'PUT',
@@ -38,13 +43,28 @@ export const decideTask = endpoint({
   needs: 'task:write',
   params: inRoom({ taskKey: z.string().check(z.minLength(1), z.maxLength(200)) }),
   body: z.strictObject({
-    decision: z.enum(['done', 'skip', 'snooze', 'assign', 'open'], 'Choose what to do with it'),
-    because: z.nullable(line(200, 'Say why')),
+    decision: z.enum(DECISIONS, 'Choose what to do with it'),
+    because: z.nullable(Because),
     until: z.nullable(DayText),
     assignedTo: z.nullable(Id),
   }),
   output: TaskRow,
 });
+
+export const TaskTitle = line(120, 'Say what is to be done');
+
+/** After how many days a task comes back. */
+export const EveryDays = z
+  .number('Type a number of days')
+  .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(730, 'At most two years'));
+
+const told = {
+  title: TaskTitle,
+  dueOn: DayText,
+  everyDays: z.nullable(EveryDays),
+  onWeekday: z.nullable(z.number('Choose a weekday').check(z.int(), z.minimum(1), z.maximum(7))),
+  assignedTo: z.nullable(Id),
+};
 
 export const addTask = endpoint({
   method: 'POST',
@@ -53,14 +73,7 @@ export const addTask = endpoint({
   params: inRoom({}),
   body: z.strictObject({
     id: Id,
-    title: line(120, 'Say what is to be done'),
-    dueOn: DayText,
-    everyDays: z.nullable(
-      z
-        .number('Type a number of days')
-        .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(730, 'At most two years')),
-    ),
-    assignedTo: z.nullable(Id),
+    ...told,
     about: z.nullable(
       z.strictObject({ thing: z.enum(['tank', 'colony', 'fish', 'hold', 'brood', 'batch', 'strain']), id: Id }),
     ),
@@ -73,16 +86,15 @@ export const changeTask = endpoint({
   path: '/api/rooms/:roomId/own-tasks/:taskId',
   needs: 'task:write',
   params: inRoom({ taskId: Id }),
-  body: z.strictObject({
-    version: Version,
-    title: line(120, 'Say what is to be done'),
-    dueOn: DayText,
-    everyDays: z.nullable(
-      z
-        .number('Type a number of days')
-        .check(z.int('Whole days'), z.minimum(1, 'At least one day'), z.maximum(730, 'At most two years')),
-    ),
-    assignedTo: z.nullable(Id),
-  }),
+  body: z.strictObject({ version: Version, ...told }),
+  output: TaskRow,
+});
+
+/** One of the fishroom's own tasks, to be changed. */
+export const readTask = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/own-tasks/:taskId',
+  needs: 'task:see',
+  params: inRoom({ taskId: Id }),
   output: TaskRow,
 });

@@ -41,7 +41,7 @@ export const OrderToday = z.strictObject({
   what: z.string(),
   time: z.nullable(z.string()),
   toPayCents: z.nullable(z.number()),
-  reservedUntil: z.nullable(z.string()),
+  reservedUntil: z.nullable(DayText),
   /** Since when somebody waits for an answer: a request, or a message that nobody read; for owners. */
   waitsSince: z.nullable(DayText),
   /** Heads by which it falls short since deaths. */
@@ -56,9 +56,13 @@ export const TaskRow = z.strictObject({
   about: z.nullable(z.strictObject({ thing: z.string(), id: Id })),
   dueOn: z.nullable(DayText),
   everyDays: z.nullable(z.number()),
+  /** It keeps this weekday, 1 on Monday; null: the days count from when it was done. */
+  onWeekday: z.nullable(z.number()),
   assignedTo: z.nullable(z.strictObject({ id: Id, name: z.string() })),
   snoozedUntil: z.nullable(DayText),
   doneAt: z.nullable(z.string()),
+  /** Who did or skipped it. */
+  doneBy: z.nullable(z.string()),
   skippedBecause: z.nullable(z.string()),
   version: z.number(),
 });

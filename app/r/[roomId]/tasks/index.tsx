@@ -1,0 +1,5 @@
+import { TasksScreen } from '@/features/today/TasksScreen';
+
+export default function Tasks() {
+  return <TasksScreen />;
+}
