@@ -73,6 +73,7 @@ export const iconMarks = {
     { d: 'M10.7 18a1.3 1.3 0 1 0 2.6 0a1.3 1.3 0 1 0 -2.6 0z', filled: true },
     { d: 'M3.5 17c2 5.5 15 5.5 17 0' },
   ],
+  box: [{ d: 'M4 4h16v16H4z' }],
   tick: [{ d: 'M4 12.5l5.5 5.5L20 6.5' }],
   today: [{ d: 'M4 8v8M8 8v8M12 3v18M16 8v2.6M16 13.4V16M20 8v2.6M20 13.4V16' }],
   undo: [{ d: 'M8 4L4 8l4 4M4 8h10a6 6 0 0 1 0 12H8' }],

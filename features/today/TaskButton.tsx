@@ -11,7 +11,7 @@ export function TaskButton({ due, anchor }: { due: Due; anchor: RefObject<View |
   const what = [dueTitle(due), due.code].filter(Boolean).join(', ');
   return (
     <>
-      <IconButton icon="tick" label={`Settle ${what}`} popup="dialog" expanded={open} onPress={() => setOpen(true)} />
+      <IconButton icon="box" label={`Settle ${what}`} popup="dialog" expanded={open} onPress={() => setOpen(true)} />
       {open ? <TaskSheet due={due} what={what} anchor={anchor} onClose={() => setOpen(false)} /> : null}
     </>
   );

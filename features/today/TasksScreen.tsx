@@ -51,7 +51,7 @@ function Tasks({ facts }: { facts: TodayFacts }) {
   const all = [...today.due, ...today.ahead];
   const mine = all.filter(({ assignedTo }) => assignedTo?.id === room.accountId);
   const shown = whose === 'mine' ? mine : all;
-  const groups = grouped(shown, ({ dueOn }) => whenOf(dueOn, facts.today));
+  const groups = grouped(shown, ({ lateDays }) => whenOf(lateDays));
   return (
     <>
       <Toolbar>

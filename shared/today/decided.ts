@@ -1,5 +1,4 @@
-import { daysBetween } from '../days';
-import type { Due } from './due';
+import { type Due, lateDaysOf } from './due';
 import type { TaskRow, TodayFacts } from './facts';
 
 /** A task that was done or skipped, with what was decided. */
@@ -21,5 +20,6 @@ export function decided(dues: Due[], { tasks, today }: TodayFacts): { open: Due[
 
 function putOff(one: Due, until: string | null, today: string): Due {
   if (until === null || until <= one.dueOn) return one;
-  return { ...one, dueOn: until, lateDays: daysBetween(until, today), putOffFrom: one.dueOn };
+  const later = { ...one, dueOn: until, putOffFrom: one.dueOn };
+  return { ...later, lateDays: lateDaysOf(later, today) };
 }

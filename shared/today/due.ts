@@ -1,5 +1,4 @@
-import type { Day } from '../days';
-import { daysBetween } from '../days';
+import { type Day, daysBetween } from '../days';
 import type { TaskRow } from './facts';
 
 export const DUE_KINDS = [
@@ -28,6 +27,8 @@ export type Due = {
   id: string;
   code: string;
   dueOn: Day;
+  /** Last day of a window that begins on `dueOn`: until then it is not late. */
+  untilOn: Day | null;
   lateDays: number;
   /** When it was last done; null: never. */
   lastOn: Day | null;
@@ -58,11 +59,18 @@ export const due = ({ subject, ...facts }: Facts, today: Day): Due => ({
   title: null,
   assignedTo: null,
   putOffFrom: null,
+  untilOn: null,
   own: null,
   ...facts,
   key: facts.kind === 'own' ? `own:${facts.id}` : `${facts.kind}:${subject ?? facts.id}:${facts.dueOn}`,
-  lateDays: daysBetween(facts.dueOn, today),
+  lateDays: lateDaysOf({ untilOn: null, ...facts }, today),
 });
+
+/** Days after its time; 0 from the day it is due to the end of its window, below zero before. */
+export function lateDaysOf({ dueOn, untilOn }: Pick<Due, 'dueOn' | 'untilOn'>, today: Day): number {
+  const since = daysBetween(dueOn, today);
+  return since <= 0 || untilOn === null ? since : Math.max(0, daysBetween(untilOn, today));
+}
 
 const KEY = new RegExp(`^(?:${DUE_KINDS.join('|')}):[0-9a-f-]{36}:\\d{4}-\\d{2}-\\d{2}$`);
 

@@ -4,7 +4,7 @@ import { repeatWords } from './repeat';
 
 const DUE_WORDS: Record<DueKind, string> = {
   holdCheck: 'Check',
-  stripWindow: 'Strip window open',
+  stripWindow: 'Strip window',
   release: 'Release expected',
   stageCount: 'Count eggs and wrigglers',
   headCount: 'Head count',
@@ -32,10 +32,11 @@ function lateWords(lateDays: number): string {
 
 /** "29 heads, last 13 Apr. Take 15 fish." Says since when, or how late, so that the number in the margin is understood. */
 export function dueNote(due: Due): string {
-  const { kind, heads, lastOn, amount, tankCode, lateDays, title, own, putOffFrom } = due;
+  const { kind, heads, lastOn, amount, lateDays, title, own, putOffFrom, dueOn, untilOn } = due;
   const last = lastOn ? `last ${formatShortDay(lastOn)}` : 'never yet';
   const late = `${capital(lateWords(lateDays))}${putOffFrom ? `, put off from ${formatShortDay(putOffFrom)}` : ''}.`;
-  const where = tankCode ? `, ${tankCode}` : '';
+  const tank = due.tankCode === due.code ? null : due.tankCode;
+  const where = tank ? `, ${tank}` : '';
   switch (kind) {
     case 'headCount':
       return `${heads} heads, ${last}${where}. ${late}`;
@@ -57,8 +58,12 @@ export function dueNote(due: Due): string {
       const rhythm = own ? repeatWords(own) : null;
       return rhythm ? `${late.slice(0, -1)}, ${rhythm}.` : late;
     }
+    case 'stripWindow':
+      return `${tank ? `${tank}, from` : 'From'} ${formatShortDay(dueOn)} to ${formatShortDay(untilOn ?? dueOn)}.`;
+    case 'release':
+      return `${tank ? `${tank}, about` : 'About'} ${formatShortDay(dueOn)}, by ${formatShortDay(untilOn ?? dueOn)}. ${late}`;
     default:
-      return `${lastOn ? `${capital(last)}${where}` : capital(tankCode ?? '')}. ${late}`.replace(/^\. /, '');
+      return `${lastOn ? `${capital(last)}${where}. ` : ''}${late}`;
   }
 }
 

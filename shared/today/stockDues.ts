@@ -18,9 +18,12 @@ export function holdDues(holds: HoldToday[], { intervals, today }: TodayFacts): 
     };
     const lastOn = hold.checkedOn.at(-1) ?? hold.firstSeenOn;
     const dues = [due({ ...base, kind: 'holdCheck', dueOn: addDays(lastOn, intervals.holdCheck), lastOn }, today)];
-    if (clock?.stripFrom && clock.stripTo && hold.plan === 'strip')
-      dues.push(due({ ...base, kind: 'stripWindow', dueOn: clock.stripFrom }, today));
-    if (clock) dues.push(due({ ...base, kind: 'release', dueOn: clock.releaseOn }, today));
+    if (!clock) return dues;
+    const { stripFrom, stripTo, releaseOn, releaseLatest } = clock;
+    // Once the window has passed nothing is stripped any more: the release comes.
+    if (hold.plan === 'strip' && stripFrom && stripTo && today <= stripTo)
+      dues.push(due({ ...base, kind: 'stripWindow', dueOn: stripFrom, untilOn: stripTo }, today));
+    dues.push(due({ ...base, kind: 'release', dueOn: releaseOn, untilOn: releaseLatest }, today));
     return dues;
   });
 }

@@ -1,5 +1,3 @@
-import { addDays, type Day } from '../days';
-
 export const WHENS = ['late', 'today', 'tomorrow', 'week', 'later'] as const;
 export type When = (typeof WHENS)[number];
 
@@ -11,10 +9,10 @@ export const WHEN_WORDS: Record<When, string> = {
   later: 'Later',
 };
 
-/** Under which head a day stands in a list of tasks. */
-export function whenOf(day: Day, today: Day): When {
-  if (day < today) return 'late';
-  if (day === today) return 'today';
-  if (day === addDays(today, 1)) return 'tomorrow';
-  return day <= addDays(today, 7) ? 'week' : 'later';
+/** Under which head something stands in a list of tasks, by how many days it is late. */
+export function whenOf(lateDays: number): When {
+  if (lateDays > 0) return 'late';
+  if (lateDays === 0) return 'today';
+  if (lateDays === -1) return 'tomorrow';
+  return lateDays >= -7 ? 'week' : 'later';
 }

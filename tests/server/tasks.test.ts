@@ -132,8 +132,8 @@ describe('what the program works out', () => {
   test.each([
     // First seen on 20 April, looked at every 7 days: 27 April, 17 days ago.
     ['holdCheck', 'hold', '2026-04-27', 17],
-    // T. moorii is stripped from day 21 to 28 of 28, day 1 being the spawn: 20 days on is 10 May.
-    ['stripWindow', 'hold', '2026-05-10', 4],
+    // T. moorii is stripped from day 21 to 28 of 28, day 1 being the spawn: from 10 to 17 May, and so not late today.
+    ['stripWindow', 'hold', '2026-05-10', 0],
     // 28 days after 20 April.
     ['release', 'hold', '2026-05-18', -4],
     // Eggs of 12 May, looked at every second day.

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { due, isDueKey } from '@/shared/today/due';
+import { due, isDueKey, lateDaysOf } from '@/shared/today/due';
 import { nextDueOn, repeatTrouble, repeatWords } from '@/shared/today/repeat';
 import { whenOf } from '@/shared/today/when';
 
@@ -45,13 +45,22 @@ test.each([
 });
 
 test.each([
-  ['2026-05-13', 'late'],
-  ['2026-05-14', 'today'],
-  ['2026-05-15', 'tomorrow'],
-  ['2026-05-21', 'week'],
-  ['2026-05-22', 'later'],
-])('on a Thursday 14 May, what is due on %s stands under %s', (day, when) => {
-  expect(whenOf(day, THURSDAY)).toBe(when);
+  [1, 'late'],
+  [0, 'today'],
+  [-1, 'tomorrow'],
+  [-7, 'week'],
+  [-8, 'later'],
+])('%i days late stands under %s', (lateDays, when) => {
+  expect(whenOf(lateDays)).toBe(when);
+});
+
+test.each([
+  ['2026-05-09', -1],
+  ['2026-05-10', 0],
+  ['2026-05-17', 0],
+  ['2026-05-19', 2],
+])('a window from 10 to 17 May is on %s late by %i days', (today, lateDays) => {
+  expect(lateDaysOf({ dueOn: '2026-05-10', untilOn: '2026-05-17' }, today)).toBe(lateDays);
 });
 
 test('a key names the thing and the day, so that the next occasion is not hidden with it', () => {
