@@ -41,7 +41,7 @@ describe('what the program works out', () => {
   beforeAll(async () => {
     colony = await colonyIn(owner, roomId, { females: 8 });
     // 27 °C throughout: the temperature for which the species' days are given, so that no rate comes into it.
-    await record(owner, roomId, {
+    const tested = await tryRecord(owner, roomId, {
       kind: 'waterTested',
       tankId: colony.tankId,
       onDay: '2026-04-20',
@@ -56,6 +56,7 @@ describe('what the program works out', () => {
       asRead: {},
       note: null,
     });
+    expect(tested.status).toBe(200);
     const spawn = { from: '2026-04-20', until: '2026-04-20' };
     holdId = await holdIn(owner, roomId, colony, { holderId: colony.females[1] ?? null, ...spawn });
     ({ batchId } = await eggsOf(colony));
@@ -158,8 +159,8 @@ describe('what the program works out', () => {
 
   test('what is recorded settles its task', async () => {
     const before = findIn(today, ({ kind, code }) => kind === 'waterChange' && code === 'T-MOKA');
-    const changed = { kind: 'waterChanged', tankId: colony.tankId, onDay: TODAY, percent: 40, note: null } as const;
-    await record(owner, roomId, changed);
+    const changed = { kind: 'waterChanged', tankId: colony.tankId, onDay: TODAY, percent: 40, note: null };
+    expect((await tryRecord(owner, roomId, changed)).status).toBe(200);
     const after = findIn(await todayFor(owner), ({ kind, code }) => kind === 'waterChange' && code === 'T-MOKA');
     expect(before?.dueOn).toBe('2026-01-08');
     expect(after).toMatchObject({ dueOn: '2026-05-21', amount: 40 });
