@@ -6,7 +6,7 @@ import { type Today, todayOf } from '@/shared/today/todayOf';
 import { METRIC } from '@/shared/units';
 import { type Known, memberOf, ownerWithRoom } from '../support/accounts';
 import { buyerIn, draftOf, lineOf, offered } from '../support/sales';
-import { broodIn, type Colony, colonyIn, holdIn, NO_NUMBERS, record, TODAY, tankIn } from '../support/stock';
+import { broodIn, type Colony, colonyIn, holdIn, NO_NUMBERS, record, TODAY, tankIn, tryRecord } from '../support/stock';
 import { makeId, type Person, type TestApp, testApp } from '../support/testApp';
 
 let app: TestApp;
