@@ -19,13 +19,28 @@ const escaped = (text: string): string => text.replace(/[&<>"']/g, (sign) => SIG
 const paragraph = (text: string | null, look = ''): string =>
   text ? `<p${look ? ` class="${look}"` : ''}>${escaped(text).replace(/\n/g, '<br>')}</p>` : '';
 
-/** The app's page with this fishroom's fish written into it: its head for link previews, its boot element for readers. */
+/**
+ * The app's page with this fishroom's fish written into it: its head for link previews, its boot element for readers. On a slow
+ * line the picture and the one font it is read in go before the app, which only comes to take the page over.
+ */
 export function bootPage(template: string, page: AvailablePage, origin: string): string {
-  return template
+  const written = template
     .replace(/<meta name="description"[^>]*>/, '')
     .replace(/<title>[^<]*<\/title>/, () => headOf(page, origin))
     .replace(/<svg class="boot-mark"[\s\S]*?<\/svg>/, () => bodyOf(page))
-    .replace(/<noscript><main>[\s\S]*?<\/main><\/noscript>/, '');
+    .replace(/<noscript><main>[\s\S]*?<\/main><\/noscript>/, '')
+    .replace(/<link rel="preload"[^>]*(?:mono|condensed)[^>]*>/g, '');
+  return lateApp(written);
+}
+
+const APP_SCRIPT = /<script src="([^"]+)" defer><\/script>/g;
+
+/** The app's scripts, named to one that fetches them when what is to be read is there. */
+function lateApp(page: string): string {
+  const sources = [...page.matchAll(APP_SCRIPT)].map(([, source = '']) => source);
+  if (sources.length === 0) return page;
+  const late = `<script src="/late.js" defer data-sources="${sources.join(' ')}"></script>`;
+  return page.replace(APP_SCRIPT, '').replace('</body>', () => `${late}</body>`);
 }
 
 function headOf(page: AvailablePage, origin: string): string {
@@ -49,6 +64,8 @@ function headOf(page: AvailablePage, origin: string): string {
   ].join('\n    ');
 }
 
+const WITHOUT_SCRIPT = 'The form needs JavaScript: allow it for this page, or reach the fishroom by other means.';
+
 const photoAddress = ({ slug, photo }: AvailablePage): string | null =>
   photo && showAvailablePhoto.path.replace(':slug', slug).replace(':photoId', photo.id).replace(':size', 'large');
 
@@ -65,7 +82,7 @@ function bodyOf(page: AvailablePage): string {
     ...now.map((fish) => fishOf(fish, page.currency)),
     '</section>',
     coming.length > 0 ? `<section><h2>Coming</h2>${coming.map(comingOf).join('')}</section>` : '',
-    `<section><h2>How to ask</h2>${paragraph(howToAsk(page))}${paragraph(page.terms)}</section>`,
+    `<section><h2>How to ask</h2>${paragraph(howToAsk(page))}<noscript>${paragraph(WITHOUT_SCRIPT)}</noscript>${paragraph(page.terms)}</section>`,
     '</div></main>',
     // Data, not script: the app starts from it instead of asking again.
     `<script type="application/json" id="available">${JSON.stringify(page).replace(/</g, '\\u003c')}</script>`,
