@@ -31,6 +31,7 @@ type Where = { id: string; role: Role };
 export function dueHref({ id: roomId, role }: Where, { kind, id, thing }: Due) {
   const home = `/r/${roomId}` as const;
   if (thing === 'task') return `${home}/tasks/${id}` as const;
+  if (thing === 'request') return `${home}/buyers/requests/${id}` as const;
   if (thing === 'order') return `${home}/orders/${id}` as const;
   if (thing === 'hold') return `${home}/holds/${id}` as const;
   if (may(role, 'entry:record')) {

@@ -4,6 +4,7 @@ import { publicPages } from './publicPages';
 import { buyerRoutes, publicRoutes } from './routes';
 
 export { tellThoseWhoWait } from './notices';
+export { requestsToday } from './today';
 
 export const buyers: Feature = {
   routes: (serve) => {

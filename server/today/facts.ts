@@ -4,6 +4,7 @@ import { addDays } from '../../shared/days';
 import { grouped } from '../../shared/grouped';
 import type { TankToday, TodayFacts } from '../../shared/today/facts';
 import { batchesOf, broodRows } from '../broods';
+import { requestsToday } from '../buyers';
 import { holdRows } from '../holds';
 import { ordersToday } from '../orders';
 import type { Scope } from '../scope';
@@ -42,6 +43,7 @@ export async function todayFacts(scope: Scope): Promise<Told> {
     care: care.filter(({ kind }) => kind === 'treatment' || kind === 'quarantine'),
     species: await speciesSeen(scope, [...speciesIds]),
     orders: await ordersToday(scope),
+    requests: await requestsToday(scope),
     tasks: await taskRows(scope),
     failedLetters: scope.role === 'owner' ? await failedLetters(scope) : 0,
     females: await femaleCount(scope),

@@ -20,6 +20,13 @@ export function orderDues({ orders, intervals, today }: TodayFacts): Due[] {
   });
 }
 
+/** Whoever asked on the public page, once there are fish to answer with. */
+export function requestDues({ requests, today }: TodayFacts): Due[] {
+  return requests.map(({ id, code, what, buyerName, waitsSince }) =>
+    due({ thing: 'request', id, code, kind: 'answer', dueOn: waitsSince, title: `${buyerName}, ${what}` }, today),
+  );
+}
+
 /** The fishroom's own tasks: those still to do, and those done, skipped or put off. */
 export function ownDues(facts: TodayFacts): Due[] {
   return facts.tasks.flatMap((task) => {

@@ -23,7 +23,7 @@ export type DueKind = (typeof DUE_KINDS)[number];
 export type Due = {
   key: string;
   kind: DueKind;
-  thing: 'hold' | 'batch' | 'tank' | 'task' | 'order';
+  thing: 'hold' | 'batch' | 'tank' | 'task' | 'order' | 'request';
   id: string;
   code: string;
   dueOn: Day;

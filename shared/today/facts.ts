@@ -48,6 +48,15 @@ export const OrderToday = z.strictObject({
   short: z.number(),
 });
 
+/** A request from the public page that can be answered now; for owners. */
+export const RequestToday = z.strictObject({
+  id: Id,
+  code: z.string(),
+  what: z.string(),
+  buyerName: z.string(),
+  waitsSince: DayText,
+});
+
 /** What was decided about a task that is worked out, and the fishroom's own tasks. */
 export const TaskRow = z.strictObject({
   id: Id,
@@ -96,6 +105,7 @@ export const TodayFacts = z.strictObject({
   care: z.array(Care),
   species: z.array(SpeciesSeen),
   orders: z.array(OrderToday),
+  requests: z.array(RequestToday),
   tasks: z.array(TaskRow),
   /** Letters that could not be sent; for owners. */
   failedLetters: z.number(),

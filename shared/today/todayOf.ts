@@ -4,7 +4,7 @@ import type { UnitChoices } from '../units';
 import type { Finding } from '../water/finding';
 import { waterFindings } from '../water/waterFindings';
 import { decided, type Settled } from './decided';
-import { orderDues, ownDues } from './deskDues';
+import { orderDues, ownDues, requestDues } from './deskDues';
 import type { Due } from './due';
 import type { TankToday, TodayFacts } from './facts';
 import { type HoldToday, holdsToday } from './holdsToday';
@@ -44,6 +44,7 @@ export function todayOf(facts: TodayFacts, choices: UnitChoices): Today {
       ...tankDues(facts),
       ...careDues(facts),
       ...orderDues(facts),
+      ...requestDues(facts),
       ...ownDues(facts),
     ],
     facts,

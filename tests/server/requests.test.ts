@@ -7,6 +7,7 @@ import { closeRequest, listRequests, orderRequest, previewRequestLetter } from '
 import { listBuyerNames } from '@/shared/orders/buyerNames';
 import { cancelOrder, readOrder } from '@/shared/orders/contract';
 import { getRoom } from '@/shared/rooms/contract';
+import { readToday } from '@/shared/today/contract';
 import { TenthsMm } from '@/shared/units';
 import { type Known, lettersTo, memberOf, ownerWithRoom } from '../support/accounts';
 import { ordered } from '../support/sales';
@@ -161,6 +162,15 @@ describe('the list is worked in order', () => {
     expect(await rows()).toMatchObject([{ state: 'ordered', order: { number: order.number } }]);
     expect((await lettersTo(app, 'wanda@pond.example')).at(-1)?.subject).toMatch(/the fish are held for you/);
     expect((await orderOf(row)).status).toBe(409);
+  });
+
+  test('Today tells the owner who waits for an answer, and nobody of those who wait for fish', async () => {
+    await asked(4, 'wanda@pond.example');
+    await asked(12, 'many@pond.example', { name: 'Odile Marr' });
+    const facts = await owner.get(readToday, { params: { roomId } });
+    expect(facts.requests).toMatchObject([{ code: 'MOKA-26A', buyerName: 'Wanda Prest', waitsSince: TODAY }]);
+    const keeper = await memberOf(app, roomId, 'keeper');
+    expect((await keeper.get(readToday, { params: { roomId } })).requests).toEqual([]);
   });
 
   test('the second is answered before the first only knowingly', async () => {
