@@ -18,6 +18,7 @@ import { photos } from './photos';
 import { plans } from './plans';
 import { record } from './record';
 import { rooms } from './rooms';
+import { search } from './search';
 import { sheets } from './sheets';
 import { species } from './species';
 import { strains } from './strains';
@@ -53,6 +54,7 @@ export const features: Feature[] = [
   photos,
   water,
   today,
+  search,
   lineage,
   plans,
   sheets,

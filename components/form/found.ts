@@ -1,7 +1,6 @@
-type Named = { word: string; code?: string; note?: string };
+import { folded } from '@/shared/folded';
 
-/** Lower case without accents, so that "łąka" is found by "laka". */
-const folded = (text: string) => text.toLowerCase().normalize('NFD').replace(/\p{M}/gu, '').replace(/ł/g, 'l');
+type Named = { word: string; code?: string; note?: string };
 
 /** What has every typed word at the start of one of its own; those whose name begins with it come first. */
 export function found<Item extends Named>(items: readonly Item[], search: string): Item[] {

@@ -71,7 +71,7 @@ function Frame({ recordSheet, waiting, children }: Omit<Props, 'roomId'>) {
   // A phone shows them over the page one is on; a wide screen has a page for them.
   const onSaved = wide ? () => router.push(`/r/${room.id}/waiting`) : () => setShowWaiting(!showWaiting);
   useEffect(() => rememberRoom(room.id), [room.id]);
-  useHotkey('/', () => toSearch(() => router.push(`/r/${room.id}/stock`)));
+  useHotkey('/', () => toSearch(() => router.push(`/r/${room.id}/search`)));
   const mayRecord = may(room.role, 'entry:record');
   return (
     <PlacesShell
@@ -110,7 +110,7 @@ function useSaved(): SavedState {
   return count > 0 ? { kind: 'waiting', count } : { kind: 'saved' };
 }
 
-/** To the page's own search field; Stock has one for everything. */
+/** To the page's own search field; else to the search over everything. */
 function toSearch(elsewhere: () => void): void {
   const field = document.querySelector<HTMLElement>('input[type=search]');
   if (field) field.focus();

@@ -2,6 +2,7 @@ import { experimental_createQueryPersister } from '@tanstack/react-query-persist
 import { isId } from '@/shared/ids';
 import { answersStore } from './answersStore';
 import { isReadLarge } from './largeLines';
+import { forgetOpened } from './openedPages';
 
 /** Older than this, what was seen of a fishroom misleads more than it helps. */
 const KEPT_MS = 30 * 86_400_000;
@@ -64,5 +65,6 @@ function accountIn(text: string): string | null {
 /** After a sign-out. */
 export async function forgetAnswers(): Promise<void> {
   whose = null;
+  forgetOpened();
   await answersStore.clear();
 }

@@ -2,26 +2,21 @@ import { useQuery } from '@tanstack/react-query';
 import { View } from 'react-native';
 import { space } from '@/components/theme/space';
 import { Button } from '@/components/ui/Button';
-import { Code } from '@/components/ui/Code';
 import { EmptyState } from '@/components/ui/EmptyState';
 import { ErrorState } from '@/components/ui/ErrorState';
-import { Icon } from '@/components/ui/Icon';
 import { LinkRow } from '@/components/ui/LinkRow';
 import { Loading } from '@/components/ui/Loading';
-import { Row } from '@/components/ui/Row';
 import { Rows } from '@/components/ui/Rows';
 import { Screen } from '@/components/ui/Screen';
-import { SearchField } from '@/components/ui/SearchField';
+import { SearchLink } from '@/components/ui/SearchLink';
 import { useRoom } from '@/hooks/useRoom';
-import { useUrlWord } from '@/hooks/useUrlWord';
 import { may } from '@/shared/roles';
-import { type Found, foundIn, type Stock } from './finding';
+import type { Stock } from './finding';
 import { stockQuery } from './queries';
 
-/** What lives here, by kind, and one search over all of it. */
+/** What lives here, by kind, and the way to the search over everything. */
 export function StockScreen() {
   const room = useRoom();
-  const [search, setSearch] = useUrlWord<string>('q', '');
   const { data, error, refetch } = useQuery(stockQuery(room.id));
   return (
     <Screen title="Stock" measure>
@@ -30,8 +25,8 @@ export function StockScreen() {
           <Beginning />
         ) : (
           <View style={{ gap: space[4] }}>
-            <SearchField value={search} onChange={setSearch} placeholder="Any code, mark, tank or species" />
-            {search.trim() ? <FoundRows found={foundIn(data, search)} /> : <Kinds stock={data} />}
+            <SearchLink href={`/r/${room.id}/search`} words="Fish, brood, tank, order" />
+            <Kinds stock={data} />
           </View>
         )
       ) : error ? (
@@ -89,36 +84,6 @@ function Kinds({ stock }: { stock: Stock }) {
       <LinkRow title="Fish with codes" value={String(fish.length)} href={`${home}/stock/fish`} />
       <LinkRow title="Strains" value={String(strains.length)} href={`${home}/stock/strains`} />
       <LinkRow title="Species" note="The library, and your own figures" href={`${home}/species`} />
-    </Rows>
-  );
-}
-
-const MOST = 40;
-const KIND_WORDS: Record<Found['kind'], string> = {
-  colonies: 'colony',
-  broods: 'brood',
-  tanks: 'tank',
-  fish: 'fish',
-  strains: 'strain',
-};
-
-function FoundRows({ found }: { found: Found[] }) {
-  const { id: roomId } = useRoom();
-  if (found.length === 0) return <EmptyState small title="Nothing is called that" words="Search for part of a code." />;
-  return (
-    <Rows label="Found">
-      {found.slice(0, MOST).map(({ kind, id, code, note }) => (
-        <Row
-          key={id}
-          href={`/r/${roomId}/${kind}/${id}`}
-          label={`${code}, ${KIND_WORDS[kind]}`}
-          title={<Code>{code}</Code>}
-          {...(note ? { note } : {})}
-          trailing={KIND_WORDS[kind]}
-          end={<Icon name="next" tone="soft" />}
-          middle
-        />
-      ))}
     </Rows>
   );
 }

@@ -8,6 +8,7 @@ import { ErrorState } from '@/components/ui/ErrorState';
 import { IconButton } from '@/components/ui/IconButton';
 import { Loading } from '@/components/ui/Loading';
 import { Screen } from '@/components/ui/Screen';
+import { SearchLink } from '@/components/ui/SearchLink';
 import { Section } from '@/components/ui/Section';
 import { WithAside } from '@/components/ui/TwoPane';
 import { useRoom } from '@/hooks/useRoom';
@@ -61,10 +62,10 @@ function TodayParts({ title, facts, today, holdRows }: Props & { title: string; 
       <TreatmentRows care={today.treatments} tanks={facts.tanks} today={facts.today} />
     </>
   );
-  const search = <IconButton icon="search" label="Search" href={`/r/${room.id}/stock`} />;
+  const search = `/r/${room.id}/search` as const;
   if (!full) {
     return (
-      <Screen title={title} actions={search}>
+      <Screen title={title} actions={<IconButton icon="search" label="Search" href={search} />}>
         {trouble}
         {holding}
         {due}
@@ -79,7 +80,7 @@ function TodayParts({ title, facts, today, holdRows }: Props & { title: string; 
   );
   return (
     <WithAside aside={aside}>
-      <Screen title={title} actions={search}>
+      <Screen title={title} actions={<SearchLink href={search} words="Fish, brood, tank, order" />}>
         {holding}
         <NextStrip holds={today.holds} />
       </Screen>

@@ -35,7 +35,7 @@ import { takeIn } from './takeIn';
 
 export { currentKeyId, openKey } from './keys';
 export { lineageTold } from './lineageTold';
-export { issueInside, sheetRows } from './sheets';
+export { issueInside, numberWords, sheetRows } from './sheets';
 export { verifySheet } from './signing';
 
 /** A sheet with some ten thousand ancestors, as it is sent in to be taken in. */

@@ -3,6 +3,7 @@ import { RoomShell } from '@/features/accounts/RoomShell';
 import { QueueKeeper } from '@/features/queue/QueueKeeper';
 import { WaitingPanel } from '@/features/queue/WaitingPanel';
 import { RecordSheet } from '@/features/record/RecordSheet';
+import { OpenedKeeper } from '@/features/search/OpenedKeeper';
 
 export default function RoomLayout() {
   const { roomId } = useLocalSearchParams<{ roomId: string }>();
@@ -13,6 +14,7 @@ export default function RoomLayout() {
       waiting={<WaitingPanel />}
     >
       <QueueKeeper />
+      <OpenedKeeper />
       <Slot />
     </RoomShell>
   );
