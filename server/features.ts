@@ -10,6 +10,7 @@ import { growth } from './growth';
 import { holds } from './holds';
 import type { House } from './house';
 import type { Serve } from './http/serve';
+import { labels } from './labels';
 import { letters } from './letters';
 import { lineage } from './lineage';
 import { members } from './members';
@@ -47,6 +48,7 @@ export const features: Feature[] = [
   strains,
   tanks,
   colonies,
+  labels,
   fish,
   holds,
   broods,

@@ -28,6 +28,7 @@ export function ColonyMenu({ told: { colony, members } }: { told: ColonyTold }) 
       ? [
           { word: 'Add fish', href: `${home}/fish/new?strain=${colony.strainId}&colony=${colony.id}` as const },
           { word: 'Change the colony', href: `${home}/colonies/${colony.id}/change` as const },
+          { word: 'Print its label', href: `${home}/labels?colony=${colony.id}` as const },
           {
             word: colony.endedOn ? 'Kept again' : 'Given up today',
             note:

@@ -1,6 +1,7 @@
 import { type Href, useRouter } from 'expo-router';
 import { useRef, useState } from 'react';
 import { StyleSheet, View } from 'react-native';
+import { InputBox } from '@/components/form/InputBox';
 import { line, space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Notice } from '@/components/ui/Notice';
@@ -36,6 +37,18 @@ export function ScanScreen({ next }: { next?: string | undefined }) {
       <View style={styles.column}>
         <Viewer video={video} state={state} />
         {stranger ? <Notice tone="look" alert words="That code is not of a tank of this fishroom." /> : null}
+        <Part title="Or type the code under the square">
+          <InputBox
+            aria-label="The code under the square"
+            mono
+            autoCapitalize="characters"
+            placeholder="T03-7H4"
+            onChangeText={(text) => {
+              const tank = text.includes('-') ? tankOnLabel(text, tanks) : null;
+              if (tank) go(tank.id);
+            }}
+          />
+        </Part>
         <Part title="Or choose it">
           <TankList tanks={tanks} onPick={go} />
         </Part>

@@ -32,8 +32,10 @@ export function thingAt(pathname: string): { thing: FormOf; id: string } | null 
 export function useHere(): Here {
   const { data: tanks = [] } = useTanks();
   const at = thingAt(usePathname());
-  const { tank: asked } = useGlobalSearchParams<{ tank?: string }>();
-  const tankId = useTankOf(at, tanks) ?? asked ?? null;
+  // A label names its tank, or the colony that may have moved since it was printed.
+  const { tank: asked, colony } = useGlobalSearchParams<{ tank?: string; colony?: string }>();
+  const ofColony = colony ? tanks.find(({ residents }) => residents.some(({ id }) => id === colony))?.id : null;
+  const tankId = useTankOf(at, tanks) ?? asked ?? ofColony ?? null;
   const tank = tanks.find(({ id }) => id === tankId) ?? null;
   return { tank, ids: { ...(tankId ? { tank: tankId } : {}), ...(at ? { [at.thing]: at.id } : {}) } };
 }

@@ -29,8 +29,14 @@ export function TankList({ chosen }: { chosen?: string }) {
   const add = may(room.role, 'stock:write') ? (
     <IconButton icon="plus" label="Add a tank" href={`/r/${room.id}/tanks/new`} />
   ) : null;
+  const actions = (
+    <>
+      {tanks.length > 0 ? <IconButton icon="print" label="Print labels" href={`/r/${room.id}/labels`} /> : null}
+      {add}
+    </>
+  );
   return (
-    <Screen title="Tanks" back={`/r/${room.id}/stock`} actions={add}>
+    <Screen title="Tanks" back={`/r/${room.id}/stock`} actions={actions}>
       {!data ? (
         error ? (
           <ErrorState title="The tanks could not be loaded" words={error.message} onRetry={() => void refetch()} />

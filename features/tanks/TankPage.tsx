@@ -95,6 +95,7 @@ function TankMenu({ told: { tank } }: { told: TankTold }) {
         label="More"
         items={[
           { word: 'Change the tank', href: `${home}/tanks/${tank.id}/change` },
+          { word: 'Print its label', href: `${home}/labels?tank=${tank.id}` },
           { word: 'Move fish out of it', href: `${home}/record/move?tank=${tank.id}` },
           { word: 'Incident', href: `${home}/record/incident?tank=${tank.id}` },
           {

@@ -6,7 +6,7 @@ import { pdfOf } from './pdf';
 export async function labelsPdf(
   labels: Label[],
   paper: LabelPaper,
-  from: { fishroom: string; madeOn: Date },
+  from: { fishroom: string; madeOn: Date; skip?: number },
 ): Promise<Buffer> {
   const info = {
     title: 'Labels',
@@ -14,5 +14,5 @@ export async function labelsPdf(
     subject: labels.map(({ code }) => code).join(', '),
     madeOn: from.madeOn,
   };
-  return pdfOf(labelPages(labels, paper, from.fishroom), info);
+  return pdfOf(labelPages(labels, paper, from), info);
 }

@@ -1,6 +1,6 @@
 import type { Feature } from '../features';
 import { roomRoutes } from './routes';
 
-export { unitsOf } from './rooms';
+export { roomPage, unitsOf } from './rooms';
 
 export const rooms: Feature = { routes: roomRoutes };

@@ -5,32 +5,42 @@ import { LABEL, labelMarks } from './labelMarks';
 
 const COLUMNS = 2;
 const ROWS = 4;
+export const LABELS_A_SHEET = COLUMNS * ROWS;
 const HEAD_MM = 11;
 const GAP_MM = 3.5;
 const CUT_DASH = [1.6, 1.2] as const;
 /** Measured with a ruler, it tells whether the printer kept to size. */
 const GAUGE_MM = 50;
 
-/** Labels in the order given: one page each, or eight to a sheet of A4 or Letter with lines to cut on. */
-export function labelPages(labels: Label[], paper: LabelPaper, fishroom: string): Page[] {
+/**
+ * Labels in the order given: one page each, or eight to a sheet of A4 or Letter with lines to cut on. `skip` places of the
+ * first sheet stay free: they were used up before.
+ */
+export function labelPages(
+  labels: Label[],
+  paper: LabelPaper,
+  { fishroom, skip = 0 }: { fishroom: string; skip?: number },
+): Page[] {
   if (paper === 'single') return labels.map((label) => ({ ...LABEL, marks: labelMarks(label, 0, 0) }));
-  const perPage = COLUMNS * ROWS;
-  return Array.from({ length: Math.ceil(labels.length / perPage) }, (_, i) =>
-    gridPage(labels.slice(i * perPage, (i + 1) * perPage), paper, fishroom),
+  const places = [...Array.from({ length: skip }, () => null), ...labels];
+  return Array.from({ length: Math.ceil(places.length / LABELS_A_SHEET) }, (_, i) =>
+    gridPage(places.slice(i * LABELS_A_SHEET, (i + 1) * LABELS_A_SHEET), paper, fishroom),
   );
 }
 
-function gridPage(labels: Label[], paper: Paper, fishroom: string): Page {
+function gridPage(places: (Label | null)[], paper: Paper, fishroom: string): Page {
   const size = PAPERS[paper];
   const width = size.widthMm - 2 * MARGIN_MM;
   const between = width - COLUMNS * LABEL.widthMm;
-  const rows = Math.ceil(labels.length / COLUMNS);
+  const labels = places.filter((label) => label !== null);
+  const rows = Math.ceil(places.length / COLUMNS);
   const end = MARGIN_MM + HEAD_MM + rows * (LABEL.heightMm + GAP_MM);
   return {
     ...size,
     marks: [
       ...headMarks(labels, fishroom, width),
-      ...labels.flatMap((label, i) => {
+      ...places.flatMap((label, i) => {
+        if (!label) return [];
         const x = MARGIN_MM + (i % COLUMNS) * (LABEL.widthMm + between);
         const y = MARGIN_MM + HEAD_MM + Math.floor(i / COLUMNS) * (LABEL.heightMm + GAP_MM);
         return [...cutMarks(x, y), ...labelMarks(label, x, y)];

@@ -42,12 +42,12 @@ const labels: Record<string, Label> = {
 
 const textsIn = (marks: Mark[]): TextMark[] => marks.flatMap((mark) => (mark.kind === 'text' ? [mark] : []));
 const sizeOf = (code: string): number => {
-  const [page] = labelPages([{ ...tank, code }], 'single', '');
+  const [page] = labelPages([{ ...tank, code }], 'single', { fishroom: '' });
   return textsIn(page?.marks ?? []).find(({ face }) => face === 'code')?.sizeMm ?? 0;
 };
 
 describe.each(Object.entries(labels))('a label with %s', (_, label) => {
-  const [page] = labelPages([label], 'single', 'Larkmoor Fishroom');
+  const [page] = labelPages([label], 'single', { fishroom: 'Larkmoor Fishroom' });
   const texts = textsIn(page?.marks ?? []);
 
   it('keeps its text clear of the square code and its white border', () => {
