@@ -5,6 +5,7 @@ import { useTheme } from '@/components/theme/ThemeProvider';
 import { ErrorState } from '@/components/ui/ErrorState';
 import { LinkRow } from '@/components/ui/LinkRow';
 import { Loading } from '@/components/ui/Loading';
+import { Rows } from '@/components/ui/Rows';
 import { Screen } from '@/components/ui/Screen';
 import { Section } from '@/components/ui/Section';
 import { Text } from '@/components/ui/Text';
@@ -58,7 +59,7 @@ function Page({ page }: { page: AvailablePage }) {
       ) : null}
       {page.strains.length > 0 ? (
         <Section title="Tell me when">
-          <View role="list" style={[styles.list, { borderTopColor: theme.rule }]}>
+          <Rows label="Tell me when">
             {page.strains.map(({ id, name, locality }) => (
               <LinkRow
                 key={id}
@@ -67,7 +68,7 @@ function Page({ page }: { page: AvailablePage }) {
                 href={`/available/${page.slug}/ask?strain=${id}`}
               />
             ))}
-          </View>
+          </Rows>
         </Section>
       ) : null}
       <Section title="How to ask">

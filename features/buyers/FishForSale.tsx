@@ -4,12 +4,14 @@ import { line, space } from '@/components/theme/space';
 import { useTheme } from '@/components/theme/ThemeProvider';
 import { Button } from '@/components/ui/Button';
 import { Heading } from '@/components/ui/Heading';
+import { PhotoTile } from '@/components/ui/PhotoTile';
 import { StageGlyph } from '@/components/ui/StageGlyph';
 import { Text } from '@/components/ui/Text';
 import { TextLink } from '@/components/ui/TextLink';
 import type { AvailableFish, AvailablePage } from '@/shared/buyers/available';
 import { classesLine, comingWords, eachWords, factsLine, lotsLine } from '@/shared/buyers/publicWords';
 import { LineagePreview } from './LineagePreview';
+import { publicPhoto } from './publicQueries';
 
 /** A brood on the public page: what it is, how many, how long, what it costs, whose it is. */
 export function FishForSale({ fish, page }: { fish: AvailableFish; page: AvailablePage }) {
@@ -43,6 +45,15 @@ export function FishForSale({ fish, page }: { fish: AvailableFish; page: Availab
         ) : null,
       )}
       <View style={styles.foot}>
+        {fish.photoId ? (
+          <View style={styles.photo}>
+            <PhotoTile
+              uri={publicPhoto(page.slug, fish.photoId, 'small')}
+              alt={`Photo of ${fish.name}, brood ${fish.code}`}
+              aspect={1.5}
+            />
+          </View>
+        ) : null}
         <StageGlyph stage={fish.stage} width={34} word size="small" />
         <View style={styles.acts}>
           <TextLink label={shown ? 'Hide lineage' : 'Lineage'} onPress={() => setShown(!shown)} />
@@ -87,5 +98,6 @@ const styles = StyleSheet.create({
     columnGap: space[3],
     marginTop: space[2],
   },
+  photo: { width: 72 },
   acts: { flexDirection: 'row', alignItems: 'center', gap: space[4], marginLeft: 'auto' },
 });

@@ -3,6 +3,8 @@ import { AxeBuilder } from '@axe-core/playwright';
 import type { Browser, Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, test } from 'vitest';
 import { listBroods } from '@/shared/broods/contract';
+import { listOffers } from '@/shared/buyers/offers';
+import { listRequests } from '@/shared/buyers/requests';
 import { listColonies } from '@/shared/colonies/contract';
 import { listFish } from '@/shared/fish/contract';
 import { listHolds } from '@/shared/holds/contract';
@@ -65,6 +67,8 @@ async function somethingOfEach(): Promise<Found> {
   ]);
   const { orders } = await owner.get(listOrders, { params });
   const { owner: owned } = await owner.get(readOrder, { params: { roomId, orderId: orders[0]?.id ?? '' } });
+  const { requests } = await owner.get(listRequests, { params });
+  const { offers } = await owner.get(listOffers, { params });
   const full = broods.find(({ code }) => code.includes('-'));
   const open = holds.find(({ endedOn }) => endedOn === null);
   const batchTank = tanks.find(({ residents }) => residents.some(({ thing }) => thing === 'batch'));
@@ -84,10 +88,14 @@ async function somethingOfEach(): Promise<Found> {
     thingId: full?.id ?? '',
     entryId: NOBODY,
     planId: NOBODY,
+    taskId: NOBODY,
     animalId: full?.id ?? '',
     orderId: orders[0]?.id ?? '',
     orderToken: owned?.link.split('/').at(-1) ?? '',
     importId: NOBODY,
+    requestId: requests[0]?.id ?? '',
+    slug: 'underhill',
+    listedBrood: offers[0]?.broodId ?? '',
     token: 'AAAAAAAAAAAAAAAAAAAAAA',
     holdTank: open?.tank.id ?? '',
     batchTank: batchTank?.id ?? '',
@@ -102,6 +110,7 @@ function addressOf(route: string, found: Found): string {
     if (!id) throw new Error(`Say in this test how to find a [${name}] for ${route}`);
     return id;
   });
+  if (route.endsWith('/ask')) return `${path}?brood=${found['listedBrood']}`;
   if (!/\/record\/./.test(route) || /scan$/.test(route)) return path;
   return `${path}?tank=${OF_HOLDS.test(route) ? found['holdTank'] : found['batchTank']}`;
 }
