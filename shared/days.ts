@@ -95,6 +95,16 @@ export function dayOf(instantMs: number, timeZone: string): Day {
   return day;
 }
 
+const clocks = new Map<string, Intl.DateTimeFormat>();
+
+/** The hour of an instant on the clock of a time zone, 0 to 23. */
+export function hourOf(instantMs: number, timeZone: string): number {
+  const known = clocks.get(timeZone);
+  const clock = known ?? new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', hourCycle: 'h23' });
+  clocks.set(timeZone, clock);
+  return Number(clock.format(instantMs));
+}
+
 /** Whether the runtime knows the time zone. */
 export function isTimeZone(text: string): boolean {
   try {

@@ -22,6 +22,7 @@ export const roomPages: readonly RoomPage[] = [
 
 export const yourPages = [
   { name: 'you', word: 'Name and units', note: 'How you are named, and what you read in' },
+  { name: 'daily', word: 'Daily letter and calendar', note: 'What is due, sent to you' },
   { name: 'security', word: 'Address and password', note: 'Email, password, second step' },
   { name: 'sign-ins', word: 'Sign-ins', note: 'Devices that are signed in as you' },
   { name: 'delete-account', word: 'Delete your account', note: 'Name, address and sign-ins go' },

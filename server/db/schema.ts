@@ -408,6 +408,10 @@ type MemberTable = {
   role: 'owner' | 'keeper' | 'helper' | 'viewer';
   joinedAt: string;
   version: Generated<number>;
+  letterHour: number | null;
+  letterOn: string | null;
+  calendarId: string | null;
+  calendarHash: string | null;
 };
 
 type MessageTable = {

@@ -8,13 +8,27 @@ import type { Scope } from '../scope';
 const SHOWN = 300;
 
 export function letterRows({ db, roomId }: Scope): Promise<z.input<typeof LetterRow>[]> {
-  return db
-    .selectFrom('letter')
-    .where('roomId', '=', roomId)
-    .select(['id', 'kind', 'toAddress as to', 'subject', 'state', 'attempts', 'lastError', 'createdAt as at', 'sentAt'])
-    .orderBy('id', 'desc')
-    .limit(SHOWN)
-    .execute();
+  return (
+    db
+      .selectFrom('letter')
+      .where('roomId', '=', roomId)
+      // Members' daily letters are their own affair, unless one could not be sent.
+      .where(({ eb, or }) => or([eb('kind', '<>', 'daily'), eb('state', '=', 'failed')]))
+      .select([
+        'id',
+        'kind',
+        'toAddress as to',
+        'subject',
+        'state',
+        'attempts',
+        'lastError',
+        'createdAt as at',
+        'sentAt',
+      ])
+      .orderBy('id', 'desc')
+      .limit(SHOWN)
+      .execute()
+  );
 }
 
 /** A letter that was not taken, once more from the beginning. */

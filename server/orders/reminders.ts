@@ -1,4 +1,4 @@
-import { addDays, dayOf } from '../../shared/days';
+import { addDays, dayOf, hourOf } from '../../shared/days';
 import { touchRooms } from '../db/touchRooms';
 import type { House } from '../house';
 import { writeOrderLetter } from './letters';
@@ -23,7 +23,7 @@ export async function remind(house: House): Promise<number> {
   let written = 0;
   for (const { roomId, id, agreedTime, timeZone } of due) {
     const today = dayOf(Date.parse(now), timeZone);
-    if (agreedTime?.slice(0, 10) !== addDays(today, 1) || hourIn(timeZone, now) < FROM_HOUR) continue;
+    if (agreedTime?.slice(0, 10) !== addDays(today, 1) || hourOf(Date.parse(now), timeZone) < FROM_HOUR) continue;
     const asked = { db, house, now, requestId: 'reminder', log, address: '', device: '' };
     const done = await db.transaction().execute(async (inside) => {
       const earlier = await inside
@@ -43,9 +43,6 @@ export async function remind(house: House): Promise<number> {
   }
   return written;
 }
-
-const hourIn = (timeZone: string, now: string): number =>
-  Number(new Intl.DateTimeFormat('en-GB', { timeZone, hour: '2-digit', hourCycle: 'h23' }).format(new Date(now)));
 
 /** Looks every ten minutes, never twice at once. */
 export function startReminders(house: House): { stop(): Promise<void> } {

@@ -98,3 +98,50 @@ export const readTask = endpoint({
   params: inRoom({ taskId: Id }),
   output: TaskRow,
 });
+
+const Hour = z
+  .number('Choose an hour')
+  .check(z.int('A whole hour'), z.minimum(0, 'From 0 o’clock'), z.maximum(23, 'To 23 o’clock'));
+
+/** What one has sent to oneself of the day in this fishroom. */
+export const MyDay = z.strictObject({
+  /** Of the fishroom's clock; null: no letter. */
+  letterHour: z.nullable(Hour),
+  /** Anyone who has the address can read along. */
+  calendarUrl: z.nullable(z.string()),
+});
+export type MyDay = z.output<typeof MyDay>;
+
+export const readMyDay = endpoint({
+  method: 'GET',
+  path: '/api/rooms/:roomId/my-day',
+  needs: 'task:see',
+  params: inRoom({}),
+  output: MyDay,
+});
+
+export const setDailyLetter = endpoint({
+  method: 'PUT',
+  path: '/api/rooms/:roomId/my-day/letter',
+  needs: 'task:see',
+  params: inRoom({}),
+  body: z.strictObject({ hour: z.nullable(Hour) }),
+  output: MyDay,
+});
+
+/** A new address for one's calendar; the one before, if there was one, ends. */
+export const newCalendar = endpoint({
+  method: 'POST',
+  path: '/api/rooms/:roomId/my-day/calendar',
+  needs: 'task:see',
+  params: inRoom({}),
+  output: MyDay,
+});
+
+export const endCalendar = endpoint({
+  method: 'DELETE',
+  path: '/api/rooms/:roomId/my-day/calendar',
+  needs: 'task:see',
+  params: inRoom({}),
+  output: MyDay,
+});

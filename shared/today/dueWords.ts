@@ -30,41 +30,49 @@ function lateWords(lateDays: number): string {
   return lateDays === 0 ? 'due today' : `${days(lateDays)} late`;
 }
 
-/** "29 heads, last 13 Apr. Take 15 fish." Says since when, or how late, so that the number in the margin is understood. */
-export function dueNote(due: Due): string {
-  const { kind, heads, lastOn, amount, lateDays, title, own, putOffFrom, dueOn, untilOn } = due;
-  const last = lastOn ? `last ${formatShortDay(lastOn)}` : 'never yet';
-  const late = `${capital(lateWords(lateDays))}${putOffFrom ? `, put off from ${formatShortDay(putOffFrom)}` : ''}.`;
+/** "29 heads, last 13 Apr, G3. Take 15 fish." What is known of it, whatever day it is read. */
+export function dueFacts(due: Due): string {
+  const { kind, heads, lastOn, amount, title, own, dueOn, untilOn } = due;
   const tank = due.tankCode === due.code ? null : due.tankCode;
-  const where = tank ? `, ${tank}` : '';
+  const last = lastOn ? `last ${formatShortDay(lastOn)}` : 'never yet';
   switch (kind) {
     case 'headCount':
-      return `${heads} heads, ${last}${where}. ${late}`;
+      return sentence(`${heads} heads`, last, tank);
     case 'lengthSample':
-      return `${heads} heads, ${last}. Take ${amount} fish. ${late}`;
-    case 'stageCount':
-      return `${capital(last)}${where}. ${late}`;
+      return `${sentence(`${heads} heads`, last)} Take ${amount} fish.`;
     case 'waterChange':
-      return `${capital(last)}${amount ? `, ${amount} %` : ''}. ${late}`;
-    case 'reservationEnds':
-    case 'collection':
-      return `${title}.`;
-    case 'answer':
-      return `${title}. ${lateDays === 0 ? 'Asked today.' : `Waits for ${days(lateDays)}.`}`;
+      return sentence(last, amount && `${amount} %`);
+    case 'stageCount':
+    case 'holdCheck':
+    case 'waterTest':
+      return sentence(last, tank);
     case 'treatmentEnd':
     case 'quarantineEnd':
-      return `${title ? `${title}, ` : ''}since ${lastOn ? formatShortDay(lastOn) : '?'}. ${late}`;
-    case 'own': {
-      const rhythm = own ? repeatWords(own) : null;
-      return rhythm ? `${late.slice(0, -1)}, ${rhythm}.` : late;
-    }
+      return sentence(title, lastOn && `since ${formatShortDay(lastOn)}`);
     case 'stripWindow':
-      return `${tank ? `${tank}, from` : 'From'} ${formatShortDay(dueOn)} to ${formatShortDay(untilOn ?? dueOn)}.`;
+      return sentence(tank, `${formatShortDay(dueOn)} to ${formatShortDay(untilOn ?? dueOn)}`);
     case 'release':
-      return `${tank ? `${tank}, about` : 'About'} ${formatShortDay(dueOn)}, by ${formatShortDay(untilOn ?? dueOn)}. ${late}`;
+      return sentence(tank, `about ${formatShortDay(dueOn)}`, untilOn && `by ${formatShortDay(untilOn)}`);
+    case 'own':
+      return sentence(own && repeatWords(own));
     default:
-      return `${lastOn ? `${capital(last)}${where}. ` : ''}${late}`;
+      return sentence(title);
   }
 }
 
-const capital = (words: string) => words.charAt(0).toUpperCase() + words.slice(1);
+/** The same with how late it is, so that the number in the margin is understood. */
+export function dueNote(due: Due): string {
+  const { kind, lateDays, putOffFrom } = due;
+  const facts = dueFacts(due);
+  const then = putOffFrom ? `put off from ${formatShortDay(putOffFrom)}` : null;
+  if (kind === 'reservationEnds' || kind === 'stripWindow' || (kind === 'collection' && lateDays <= 0))
+    return [facts, then && sentence(then)].filter(Boolean).join(' ');
+  if (kind === 'answer') return `${facts} ${lateDays === 0 ? 'Asked today.' : `Waits for ${days(lateDays)}.`}`;
+  return [facts, sentence(lateWords(lateDays), then)].filter(Boolean).join(' ');
+}
+
+/** Parts of a sentence that there are; empty when there are none. */
+function sentence(...parts: (string | number | null | undefined | false)[]): string {
+  const words = parts.filter(Boolean).join(', ');
+  return words && `${words.charAt(0).toUpperCase()}${words.slice(1)}.`;
+}

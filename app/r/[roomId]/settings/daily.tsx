@@ -1,0 +1,5 @@
+import { MyDayScreen } from '@/features/today/MyDayScreen';
+
+export default function Daily() {
+  return <MyDayScreen />;
+}
