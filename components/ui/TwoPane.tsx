@@ -50,6 +50,6 @@ export function WithAside({ children, aside, width = 316 }: { children: ReactNod
 
 const styles = StyleSheet.create({
   panes: { flexGrow: 1, flexShrink: 1, flexBasis: 0, flexDirection: 'row', minHeight: 0 },
-  nothing: { padding: space[6] },
+  nothing: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minHeight: 0, padding: space[6] },
   fill: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 },
 });

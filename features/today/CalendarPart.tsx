@@ -42,7 +42,9 @@ function Address({ url }: { url: string }) {
   return (
     <>
       <View>
-        <Code size="small">{url}</Code>
+        <Code size="small" style={{ whiteSpace: 'normal', overflowWrap: 'anywhere' }}>
+          {url}
+        </Code>
         <Text size="small" tone="soft" style={{ marginTop: space[2] }}>
           Whoever has it can read along: tanks, codes and days, no money and no buyer’s name.
         </Text>
